@@ -1,0 +1,1 @@
+"""The coming years: who comes, who stays, what that takes."""

@@ -1,0 +1,1 @@
+"""Fair comparison of groups: tables, strata, rank tests, regression."""

@@ -1,0 +1,13 @@
+"""Every task by name, with the class that checks its request.
+
+A task is a function of (memory, request, report) and returns dataclasses, dicts, lists,
+arrays, strings and numbers. One module for each room; this table only gathers them.
+"""
+
+from __future__ import annotations
+
+from vitalroll.desk import about
+
+TASKS = {
+    **about.TASKS,
+}

@@ -1,0 +1,1 @@
+"""A spreadsheet becomes a cohort, and every row set aside is named with its line."""
