@@ -1,0 +1,85 @@
+/** A block that asks the engine, shows the answer, and hands it to the report. */
+import { h } from './element.js';
+import { refusalNote } from './said.js';
+
+const PATIENCE_MS = 250;
+
+/**
+ * The block asks again whenever its request changes, and redraws when the language does.
+ * @param {import('../app.js').App} app
+ * @param {object} block
+ * @param {string} block.id of the block, and of its piece in the report
+ * @param {string} block.title key of its heading
+ * @param {(state: import('../store.js').State) => ({task: string, request: object}|null)} block.ask
+ *   null while there is nothing to ask
+ * @param {(answer: any, state: import('../store.js').State) => Array<Node|null|false>} block.draw
+ * @param {string} [block.empty] key of the sentence shown while there is nothing to ask
+ * @param {number} [block.level] of the heading, 2 unless told
+ */
+export function answerBlock(app, { id, title, ask, draw, empty, level = 2 }) {
+  const heading = h(`h${level}`, { id: `${id}-heading` });
+  const body = h('div', { class: 'answer', 'aria-live': 'polite', 'aria-busy': 'false' });
+  const box = h('section', { id, 'aria-labelledby': `${id}-heading` }, heading, body);
+  let asked = null;
+  let language = null;
+  let latest = null;
+  let wasConnected = false;
+
+  function show(nodes) {
+    body.replaceChildren(...nodes.filter((node) => node instanceof Node));
+    body.setAttribute('aria-busy', 'false');
+  }
+
+  function redraw() {
+    heading.textContent = app.words.say(title);
+    if (!latest) {
+      show(empty ? [h('p', { class: 'hint' }, app.words.say(empty))] : []);
+      app.report.withdraw(id);
+    } else if (latest.refusal) {
+      show([refusalNote(app, latest.refusal)]);
+      app.report.withdraw(id);
+    } else {
+      const { answer, state } = latest;
+      show(draw(answer, state));
+      app.report.show({ id, title, draw: () => draw(answer, state) });
+    }
+  }
+
+  async function update() {
+    if (box.isConnected) wasConnected = true;
+    else if (wasConnected) return stop();
+    const { state } = app.store;
+    const question = state.engine.ready ? ask(state) : null;
+    const key = JSON.stringify([question, question && state.cohort?.serial]);
+    if (key === asked) {
+      if (language !== state.language) redraw();
+      language = state.language;
+      return;
+    }
+    asked = key;
+    language = state.language;
+    if (!question) {
+      latest = null;
+      return redraw();
+    }
+    heading.textContent = app.words.say(title);
+    const waiting = setTimeout(() => {
+      body.setAttribute('aria-busy', 'true');
+    }, PATIENCE_MS);
+    try {
+      const answer = await app.engine.ask(question.task, question.request, { key: id });
+      if (key === asked) latest = { answer, state };
+    } catch (refusal) {
+      if (refusal.code === 'superseded') return;
+      if (!refusal.code) throw refusal;
+      if (key === asked) latest = { refusal };
+    } finally {
+      clearTimeout(waiting);
+    }
+    if (key === asked) redraw();
+  }
+
+  const stop = app.store.subscribe(update);
+  update();
+  return box;
+}

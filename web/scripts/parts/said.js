@@ -1,0 +1,54 @@
+/** The engine's codes as sentences. */
+import { h } from './element.js';
+
+/**
+ * The cautions that must stand beside a number.
+ * @param {import('../app.js').App} app
+ * @param {Array<{code: string, parameters: Record<string, any>}>} cautions
+ */
+export function cautionList(app, cautions) {
+  if (!cautions?.length) return null;
+  const sentences = [...new Set(cautions.map(({ code, parameters }) => app.words.say(`caution-${code}`, named(app, parameters))))];
+  return h('ul', { class: 'cautions', 'aria-label': app.words.say('cautions-label') },
+    sentences.map((sentence) => h('li', {}, sentence)));
+}
+
+/**
+ * Why there is no answer, in words.
+ * @param {import('../app.js').App} app
+ * @param {{code: string, parameters: Record<string, any>, field?: string|null, line?: number|null}} refusal
+ */
+export function refusalSentence(app, { code, parameters, field, line }) {
+  const { say, has } = app.words;
+  const key = has(`refusal-${code}`) ? `refusal-${code}` : 'refusal-internal';
+  return say(key, { ...named(app, parameters), field: field ?? '', line: line ?? '' });
+}
+
+export function refusalNote(app, refusal) {
+  return h('p', { class: 'refusal', role: 'alert' }, refusalSentence(app, refusal));
+}
+
+/** Meanings and covariates among the parameters, by the names people know. */
+function named(app, parameters = {}) {
+  const values = { ...parameters };
+  if (typeof values.meaning === 'string') values.meaning = app.words.say(`meaning-${values.meaning}`);
+  for (const name of ['covariate', 'column', 'group', 'id']) {
+    if (typeof values[name] === 'string') values[name] = covariateName(app, values[name]);
+  }
+  return values;
+}
+
+/** A covariate or column by its heading in the file, or by our word for a derived one. */
+export function covariateName(app, id) {
+  const { cohort, source } = app.store.state;
+  const known = cohort?.covariates.find((each) => each.id === id) ?? source?.columns.find((each) => each.id === id);
+  if (known?.heading) return known.heading;
+  return app.words.has(`covariate-${id}`) ? app.words.say(`covariate-${id}`) : id;
+}
+
+/** A level of a covariate; sexes and "no group" have our words, everything else is as written. */
+export function levelName(app, id, level) {
+  if (level === null) return app.words.say('everyone');
+  if (id === 'sex' && app.words.has(`sex-${level}`)) return app.words.say(`sex-${level}`);
+  return level;
+}

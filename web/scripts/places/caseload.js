@@ -1,0 +1,7 @@
+import { h } from '../parts/element.js';
+import { live } from '../parts/live.js';
+
+/** @param {import('../app.js').App} app */
+export function caseloadPlace(app) {
+  return live(app, () => null, () => [h('h1', {}, app.words.say('caseload-title'))]);
+}

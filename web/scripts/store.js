@@ -1,0 +1,102 @@
+/**
+ * Everything the person has chosen, in one place, with a way back.
+ *
+ * A place of the page can be built anew from this at any time: after a change of language,
+ * after undo, after the engine had to be started again.
+ */
+
+/** @typedef {ReturnType<typeof beginnings>} State */
+
+/** What a page that has just been opened holds. */
+export function beginnings(language) {
+  return {
+    language,
+    engine: { stage: 'engine-stage-waiting', done: 0, total: 0, ready: false, failure: null, version: null },
+    /** Answer of register.open, or null before a register is opened. */
+    source: null,
+    /** Values of the columns that need meanings, by column: answers of register.values. */
+    values: {},
+    /** How the person reads the columns; the request of register.build. */
+    reading: emptyReading(),
+    /** Answer of register.build, or null. */
+    cohort: null,
+    question: { interest: ['died_of_disease', 'died_of_other_cause', 'died_cause_unknown'], group: null },
+    outcomes: { interval: 'log-log', step: 'year' },
+    compare: { exposed: null, reference: null, step: 'year', intervals: 5, weight: 'log_rank', covariates: [], ties: 'efron' },
+    caseload: {
+      years: 5, basis: 'history', perYear: null,
+      resources: { visits: 0, medicine_units: 0, cost: 0 },
+      whatIf: { on: true, fewer_newcomers: 0, fewer_lost: 50, fewer_deaths: 0, from_year: 1 },
+    },
+    counts: {
+      lifeTable: { entering: null, rows: [] },
+      strata: [],
+      balance: { prevalent: null, new_per_year: null, leaving: [], years: 5, population: null },
+    },
+    report: { title: '', hospital: '', author: '', date: '', leftOut: [] },
+  };
+}
+
+/** A reading of no columns at all. */
+export function emptyReading() {
+  return { roles: {}, meanings: {}, blank_meaning: null, sexes: {}, date_orders: {}, closing_date: '' };
+}
+
+/** Parts of the state that are choices: these can be undone. */
+const CHOICES = ['reading', 'question', 'outcomes', 'compare', 'caseload', 'counts', 'report'];
+const STEPS_KEPT = 100;
+
+/** @param {State} state */
+export function makeStore(state) {
+  const listeners = new Set();
+  const past = [];
+
+  function tell() {
+    for (const listener of [...listeners]) listener(store.state);
+  }
+
+  const store = {
+    state,
+
+    /**
+     * Replace parts of the state. A change of choices can be undone.
+     * @param {Partial<State>} parts whole new values for top-level names
+     */
+    change(parts) {
+      if (Object.keys(parts).some((name) => CHOICES.includes(name))) {
+        past.push(Object.fromEntries(CHOICES.map((name) => [name, store.state[name]])));
+        if (past.length > STEPS_KEPT) past.shift();
+      }
+      store.state = { ...store.state, ...parts };
+      tell();
+    },
+
+    /** Change some names inside one top-level part. */
+    amend(part, inner) {
+      store.change({ [part]: { ...store.state[part], ...inner } });
+    },
+
+    canUndo: () => past.length > 0,
+
+    /** Take back the last change of choices. */
+    undo() {
+      const before = past.pop();
+      if (!before) return;
+      store.state = { ...store.state, ...before };
+      tell();
+    },
+
+    /** What has been undone or opened before is not to be returned to (another register was opened). */
+    forgetPast() {
+      past.length = 0;
+      tell();
+    },
+
+    /** @returns {() => void} a function that ends the subscription */
+    subscribe(listener) {
+      listeners.add(listener);
+      return () => listeners.delete(listener);
+    },
+  };
+  return store;
+}
