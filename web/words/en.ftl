@@ -113,6 +113,97 @@ register-title = Register
 
 ## Outcomes
 
+outcomes-title = What became of the patients
+outcomes-lead = Choose which endings count as the outcome, and if you like a column to compare groups by. Everything below follows.
+
+axis-years-since-start = Years since start
+row-atRisk = At risk
+row-events = Events
+row-censored = Censored
+group = Group
+years-since-start = Years since start
+standard-error = Standard error
+lost = Lost
+events-so-far = Outcomes so far
+censored-so-far = Censored so far
+beyond-follow-up = beyond follow-up
+count-share = { $count } ({ $share })
+from-to = { $lower } to { $upper }
+sentence-group = { $group }: {""}
+levels-left-out = Left out because nobody is in them: { $levels }.
+
+survival-title = Survival over time
+survival-sentence-deaths = { $group }{ $survival } were alive { $years ->
+    [one] { $years } year
+   *[other] { $years } years
+  } after starting (95 % interval { $interval }), judging from { $n } patients and { $events } deaths.
+survival-sentence-other = { $group }{ $survival } were free of the chosen outcome { $years ->
+    [one] { $years } year
+   *[other] { $years } years
+  } after starting (95 % interval { $interval }), judging from { $n } patients and { $events } outcomes.
+survival-sentence-short = { $group }follow-up of these { $n } patients is shorter than one year; read the curve as far as it goes.
+median-reached = Half had met it by { $median } years.
+median-not-reached = Fewer than half had met it by the end of follow-up, so there is no median.
+survival-figure-deaths = Share still alive, by years since start
+survival-figure-other = Share still free of the outcome, by years since start
+survival-figure-described = { $curves ->
+    [one] A falling step curve with its 95 % band; the numbers at risk stand below it, and the table behind the figure holds every value.
+   *[other] { $curves } falling step curves with their 95 % bands; the numbers at risk stand below them, and the table behind the figure holds every value.
+  }
+survival-counts-caption = At risk, outcomes and censored at each year
+survival-at-years-caption = Survival at chosen times, with 95 % limits
+survival-heading-deaths = Alive
+survival-heading-other = Free of the outcome
+losses-caption = What those lost to follow-up could change
+losses-note = The truth lies between the two columns. The curve above takes those lost to be like those who stayed; if that is doubtful, quote both columns.
+if-all-lost-died = If all lost had met the outcome at last contact
+if-none-lost-died = If none had, up to the closing date
+no-losses = Nobody was lost to follow-up, so losses change nothing here.
+interval-kind = Kind of confidence interval
+interval-log-log = log-log (usual choice)
+interval-log = log
+interval-plain = plain
+survival-method = Product limit (Kaplan & Meier 1958), Greenwood's variance (1926), { $interval } limits; where the curve has not moved from 100 % or has reached 0 %, beta-product limits (Fay and others 2013). Outcomes come before censorings on the same day. The median is the first time the curve is at or below 50 % (Brookmeyer & Crowley 1982). Drawn while at least 10 are at risk; short strokes mark patients censored.
+
+life-table-title = Life table
+life-table-caption = Actuarial life table
+life-table-caption-group = Actuarial life table: { $group }
+life-table-step = Length of the intervals
+step-year = Years
+step-quarter = Quarters
+step-month = Months
+interval-years = Years
+interval-months = Months
+interval-from-to = { $from } to { $to }
+entering = Entering
+withdrawn = Otherwise withdrawn
+events = Outcomes
+effective = Effective number
+chance = Chance in interval
+odds = Odds in interval
+survival-to-end = Survival to end (95 % limits)
+hazard-per-year = Hazard per year
+life-table-method = Actuarial method (Berkson & Gage 1950; Cutler & Ederer 1958): those lost or withdrawn in an interval count for half of it. Greenwood's standard error; hazard at the middle of the interval (Gehan 1969).
+
+leaving-title = Every way of leaving
+leaving-sentence = { $group }after { $years ->
+    [one] { $years } year
+   *[other] { $years } years
+  }, { $stayed } were still under care; the commonest way of leaving was “{ $way }”, with { $share }.
+leaving-sentence-nobody = { $group }nobody has left yet.
+leaving-figure = Where the patients are, by years since start: { $group }
+leaving-figure-described = A stacked area: those still under care at the bottom, above them { $ways ->
+    [one] one way of leaving
+   *[other] { $ways } ways of leaving
+  }, together always 100 %. The table below holds the values.
+leaving-caption = Cumulative incidence of each way of leaving: { $group }
+leaving-note = The last column shows what one minus survival would wrongly say, as if the other ways of leaving did not exist. Do not quote it.
+way-of-leaving = Way of leaving
+events-in-all = In all
+cumulative-incidence = Cumulative incidence (95 % limits)
+one-minus-survival = One minus survival (too high)
+leaving-method = Aalen & Johansen (1978), all ways of leaving at once; variance as in Marubini & Valsecchi (1995).
+
 ## Compare
 
 compare-title = Compare

@@ -113,6 +113,97 @@ register-title = Registre
 
 ## Outcomes
 
+outcomes-title = Ce que sont devenus les patients
+outcomes-lead = Choisissez les issues qui comptent comme événement et, si vous voulez, une colonne pour comparer des groupes. Tout ce qui suit en découle.
+
+axis-years-since-start = Années depuis le début
+row-atRisk = À risque
+row-events = Événem.
+row-censored = Censurés
+group = Groupe
+years-since-start = Années depuis le début
+standard-error = Erreur type
+lost = Perdus de vue
+events-so-far = Événements jusque-là
+censored-so-far = Censurés jusque-là
+beyond-follow-up = au-delà du suivi
+count-share = { $count } ({ $share })
+from-to = { $lower } à { $upper }
+sentence-group = { $group } : {""}
+levels-left-out = Laissés de côté car personne n’en fait partie : { $levels }.
+
+survival-title = Survie au cours du temps
+survival-sentence-deaths = { $group }{ $survival } étaient en vie { $years ->
+    [one] { $years } an
+   *[other] { $years } ans
+  } après le début (intervalle à 95 % : { $interval }), d’après { $n } patients et { $events } décès.
+survival-sentence-other = { $group }{ $survival } n’avaient pas connu l’événement choisi { $years ->
+    [one] { $years } an
+   *[other] { $years } ans
+  } après le début (intervalle à 95 % : { $interval }), d’après { $n } patients et { $events } événements.
+survival-sentence-short = { $group }le suivi de ces { $n } patients est inférieur à un an ; lisez la courbe jusqu’où elle va.
+median-reached = La moitié l’avait connu à { $median } ans.
+median-not-reached = Moins de la moitié l’avait connu à la fin du suivi : il n’y a pas de médiane.
+survival-figure-deaths = Part encore en vie, selon les années depuis le début
+survival-figure-other = Part n’ayant pas connu l’événement, selon les années depuis le début
+survival-figure-described = { $curves ->
+    [one] Une courbe en escalier descendante avec sa bande à 95 % ; les effectifs à risque sont en dessous et le tableau derrière la figure contient toutes les valeurs.
+   *[other] { $curves } courbes en escalier descendantes avec leurs bandes à 95 % ; les effectifs à risque sont en dessous et le tableau derrière la figure contient toutes les valeurs.
+  }
+survival-counts-caption = À risque, événements et censurés à chaque année
+survival-at-years-caption = Survie à des moments choisis, avec limites à 95 %
+survival-heading-deaths = En vie
+survival-heading-other = Sans l’événement
+losses-caption = Ce que les perdus de vue pourraient changer
+losses-note = La vérité se trouve entre les deux colonnes. La courbe ci-dessus suppose que les perdus de vue ressemblent à ceux qui sont restés ; en cas de doute, citez les deux colonnes.
+if-all-lost-died = Si tous avaient connu l’événement au dernier contact
+if-none-lost-died = Si aucun, jusqu’à la date de clôture
+no-losses = Personne n’a été perdu de vue : les pertes ne changent rien ici.
+interval-kind = Type d’intervalle de confiance
+interval-log-log = log-log (choix habituel)
+interval-log = log
+interval-plain = simple
+survival-method = Produit-limite (Kaplan & Meier 1958), variance de Greenwood (1926), limites { $interval } ; là où la courbe est restée à 100 % ou a atteint 0 %, limites bêta-produit (Fay et coll. 2013). Les événements précèdent les censures du même jour. La médiane est le premier moment où la courbe est à 50 % ou moins (Brookmeyer & Crowley 1982). Tracée tant qu’au moins 10 sont à risque ; les petits traits marquent les patients censurés.
+
+life-table-title = Table de survie
+life-table-caption = Table de survie actuarielle
+life-table-caption-group = Table de survie actuarielle : { $group }
+life-table-step = Longueur des intervalles
+step-year = Années
+step-quarter = Trimestres
+step-month = Mois
+interval-years = Années
+interval-months = Mois
+interval-from-to = { $from } à { $to }
+entering = Entrants
+withdrawn = Autres sorties
+events = Événements
+effective = Effectif corrigé
+chance = Probabilité dans l’intervalle
+odds = Cote dans l’intervalle
+survival-to-end = Survie à la fin (limites à 95 %)
+hazard-per-year = Risque instantané par an
+life-table-method = Méthode actuarielle (Berkson & Gage 1950 ; Cutler & Ederer 1958) : les perdus de vue et autres sorties d’un intervalle comptent pour moitié. Erreur type de Greenwood ; risque instantané au milieu de l’intervalle (Gehan 1969).
+
+leaving-title = Toutes les façons de sortir
+leaving-sentence = { $group }après { $years ->
+    [one] { $years } an
+   *[other] { $years } ans
+  }, { $stayed } étaient encore suivis ; la sortie la plus fréquente était « { $way } », avec { $share }.
+leaving-sentence-nobody = { $group }personne n’est encore sorti.
+leaving-figure = Où en sont les patients, selon les années depuis le début : { $group }
+leaving-figure-described = Une aire empilée : ceux encore suivis en bas, au-dessus { $ways ->
+    [one] une façon de sortir
+   *[other] { $ways } façons de sortir
+  }, toujours 100 % ensemble. Le tableau ci-dessous contient les valeurs.
+leaving-caption = Incidence cumulée de chaque façon de sortir : { $group }
+leaving-note = La dernière colonne montre ce que « un moins la survie » dirait à tort, comme si les autres sorties n’existaient pas. Ne la citez pas.
+way-of-leaving = Façon de sortir
+events-in-all = En tout
+cumulative-incidence = Incidence cumulée (limites à 95 %)
+one-minus-survival = Un moins la survie (trop élevé)
+leaving-method = Aalen & Johansen (1978), toutes les façons de sortir à la fois ; variance selon Marubini & Valsecchi (1995).
+
 ## Compare
 
 compare-title = Comparer
