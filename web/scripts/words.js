@@ -80,6 +80,9 @@ function formats(language, say) {
   const count = decimals[0];
   const decimal = (number, digits = 2) => decimals[digits](number);
   const percent = (share, digits = 1) => percentFormats[digits](share);
+  const signed = written({ minimumFractionDigits: 1, maximumFractionDigits: 1, signDisplay: 'exceptZero' });
+  /** A difference of shares, in percentage points, with its sign. */
+  const points = (difference) => (difference === null || difference === undefined ? '–' : signed(difference * 100));
   /** A ratio keeps three significant digits, so that 0.043 and 12.6 are both readable. */
   const ratio = (number) => significant(number);
   const day = (iso) => (iso ? dayFormat.format(new Date(`${iso}T00:00:00Z`)) : '–');
@@ -99,5 +102,5 @@ function formats(language, say) {
     return say('estimate', { value: write(value), lower: write(lower), upper: write(upper) });
   };
   const bytes = (size) => say('megabytes', { size: decimals[1](size / 1e6) });
-  return { count, decimal, percent, ratio, day, pValue, estimate, bytes };
+  return { count, decimal, percent, points, ratio, day, pValue, estimate, bytes };
 }

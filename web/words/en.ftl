@@ -208,6 +208,117 @@ leaving-method = Aalen & Johansen (1978), all ways of leaving at once; variance 
 
 compare-title = Compare
 
+compare-lead = Whether one group did better than another, first plainly, then with what else differs between them taken into account. None of this shows that the group was the cause.
+compare-choose-group = Choose a column to group by, above.
+compare-exposed = Group in question
+compare-reference = Compared with
+patients = Patients
+measure = Measure
+p-value = p
+test = Test
+chi-squared = Chi-squared
+degrees-of-freedom = Degrees of freedom
+
+difference-title = The difference in survival
+difference-sentence = After { $years ->
+    [one] { $years } year
+   *[other] { $years } years
+  }, { $inExposed } in “{ $exposed }” and { $inReference } in “{ $reference }” were free of the outcome: a difference of { $difference } percentage points (95 % interval { $interval }).
+difference-caption = Free of the outcome at chosen times, and the difference
+difference-points = Difference, percentage points
+difference-method = Difference of two product-limit estimates; the variances of the two groups are added (Greenwood 1926). Nothing is adjusted for.
+
+rank-test-title = Could the curves differ by chance?
+rank-sentence-differ = Over the whole of follow-up the groups differ more than chance would easily explain (chi-squared { $chi }, { $df ->
+    [one] { $df } degree
+   *[other] { $df } degrees
+  } of freedom, p { $p }).
+rank-sentence-may-be-chance = Over the whole of follow-up, chance alone could explain the difference between the groups (chi-squared { $chi }, { $df ->
+    [one] { $df } degree
+   *[other] { $df } degrees
+  } of freedom, p { $p }).
+rank-does-not-mean = The p-value is not the size of a difference, and a large one does not show that the groups are alike.
+rank-caption = Outcomes observed, and expected if all groups had the same hazards
+observed = Observed
+expected = Expected
+observed-to-expected = Observed / expected
+rank-weight = Weight given to each time
+rank-weight-hint = Choose it before looking at the result.
+rank-log_rank = Equal: log-rank
+rank-gehan = Number at risk: Gehan
+rank-tarone_ware = Its square root: Tarone-Ware
+rank-fleming_harrington = Survival so far: Fleming-Harrington
+rank-method-log_rank = Log-rank test (Mantel 1966; Peto & Peto 1972), hypergeometric variance.
+rank-method-gehan = Gehan's generalised Wilcoxon test: weights are the numbers at risk, so early differences count more.
+rank-method-tarone_ware = Tarone & Ware (1977): weights are square roots of the numbers at risk.
+rank-method-fleming_harrington = Fleming & Harrington (1991), weight S(t−): early differences count more.
+
+intervals-title = Interval by interval
+intervals-lead = Of those who began each interval in “{ $exposed }” and in “{ $reference }”, how many met the outcome in it. Those lost or withdrawn in an interval count for half of it.
+intervals-caption = The two groups in each interval of follow-up (95 % limits)
+effective-of = Effective number, { $group }
+risk-ratio = Risk ratio
+odds-ratio = Odds ratio
+risk-difference = Risk difference, percentage points
+intervals-left-out = Left out of the pooled figures because a group or an outcome is missing in them: { $intervals }.
+intervals-method = Effective numbers n − w/2 (Cutler & Ederer 1958); risk ratio limits Katz (1978), odds ratio Woolf (1955), risk difference Newcombe (1998); pooled over intervals by Mantel & Haenszel (1959) with variances of Robins, Breslow & Greenland (1986) and Greenland & Robins (1985).
+pooled-caption = Pooled over the strata (Mantel-Haenszel, 95 % limits)
+pooled-sentence = Pooled, the risk in “{ $exposed }” was { $ratio } times that in “{ $reference }” (95 % interval { $interval }; p { $p }).
+odds-are-not-risks = An odds ratio is not a ratio of risks: when the outcome is common it lies further from 1. Quote the risk ratio and the risk difference to people.
+crude = Crude
+pooled = Pooled
+strata-agree = The strata agree well enough to be pooled (Breslow-Day with Tarone's correction: chi-squared { $chi }, degrees of freedom { $df }, p { $p }).
+strata-differ = The strata differ from one another (Breslow-Day with Tarone's correction: chi-squared { $chi }, degrees of freedom { $df }, p { $p }): read them one by one; the pooled figure hides the difference.
+
+cox-title = Taking other things into account
+cox-choose-covariates = Tick what to take into account, below.
+cox-covariates = Take into account
+cox-covariates-hint = Only what was known at the start. Leave out what the group itself may have changed.
+cox-reference = { $covariate }: compared with
+cox-per = { $covariate }: per
+cox-ties = Outcomes on the same day
+cox-ties-efron = Efron (usual choice)
+cox-ties-breslow = Breslow
+cox-term-level = { $covariate }: { $level } against { $reference }
+cox-term-number = { $covariate }, per { $per }
+cox-sentence-higher = { $term }: the outcome came sooner; at any time its hazard was { $ratio } times as high (95 % interval { $interval }; p { $p }){ $others ->
+    [0] , nothing else taken into account.
+   *[other] , with the other covariates held equal.
+  }
+cox-sentence-lower = { $term }: the outcome came later; at any time its hazard was { $ratio } times as high (95 % interval { $interval }; p { $p }){ $others ->
+    [0] , nothing else taken into account.
+   *[other] , with the other covariates held equal.
+  }
+cox-sentence-unclear = { $term }: no clear difference; the hazard ratio is { $ratio }, but anything in { $interval } fits these data (p { $p }){ $others ->
+    [0] , nothing else taken into account.
+   *[other] , with the other covariates held equal.
+  }
+cox-does-not-mean = A hazard ratio is neither a ratio of risks nor of odds, and says nothing of how many: read it together with the difference in survival above.
+cox-figure = Hazard ratios with 95 % limits
+cox-figure-described = { $terms ->
+    [one] One hazard ratio with its limits
+   *[other] { $terms } hazard ratios with their limits
+  } on a logarithmic scale; the table below holds the values.
+axis-hazard-ratio = Hazard ratio (1 = no difference)
+cox-caption = Cox regression
+covariate = Covariate
+coefficient = Coefficient
+hazard-ratio = Hazard ratio (95 % limits)
+cox-fit = { $n } patients, { $events } outcomes. Concordance { $concordance }: the share of pairs of patients that the model puts in the right order.
+cox-tests-caption = Tests of the whole model
+test-likelihood_ratio = Likelihood ratio
+test-wald = Wald
+test-score = Score
+proportional = The hazard ratios may be taken as constant over time (score test of proportional hazards: chi-squared { $chi }, degrees of freedom { $df }, p { $p }).
+not-proportional = The hazard ratios change over time (score test of proportional hazards: chi-squared { $chi }, degrees of freedom { $df }, p { $p }): each is only an average, and the difference in survival above says more.
+cox-incomplete = { $incomplete ->
+    [one] One patient was left out because a covariate is missing.
+   *[other] { $incomplete } patients were left out because a covariate is missing.
+  }
+cox-left-out = Left out because they do not vary or repeat what others already say: { $covariates }.
+cox-method-efron = Cox (1972), ties by Efron (1977), Wald limits; proportional hazards by the score test of Grambsch & Therneau (1994).
+cox-method-breslow = Cox (1972), ties by Breslow (1974), Wald limits; proportional hazards by the score test of Grambsch & Therneau (1994).
+
 ## Caseload
 
 caseload-title = Caseload

@@ -208,6 +208,117 @@ leaving-method = Aalen & Johansen (1978), toutes les façons de sortir à la foi
 
 compare-title = Comparer
 
+compare-lead = Un groupe s’en est-il mieux sorti qu’un autre ? D’abord simplement, puis en tenant compte de ce qui les distingue par ailleurs. Rien ici ne montre que le groupe en est la cause.
+compare-choose-group = Choisissez ci-dessus une colonne pour former les groupes.
+compare-exposed = Groupe étudié
+compare-reference = Comparé à
+patients = Patients
+measure = Mesure
+p-value = p
+test = Test
+chi-squared = Khi-deux
+degrees-of-freedom = Degrés de liberté
+
+difference-title = La différence de survie
+difference-sentence = Après { $years ->
+    [one] { $years } an
+   *[other] { $years } ans
+  }, { $inExposed } dans « { $exposed } » et { $inReference } dans « { $reference } » n’avaient pas connu l’événement : une différence de { $difference } points de pourcentage (intervalle à 95 % : { $interval }).
+difference-caption = Sans l’événement à des moments choisis, et la différence
+difference-points = Différence, points de pourcentage
+difference-method = Différence de deux estimations produit-limite ; les variances des deux groupes s’ajoutent (Greenwood 1926). Sans aucun ajustement.
+
+rank-test-title = Les courbes peuvent-elles différer par hasard ?
+rank-sentence-differ = Sur l’ensemble du suivi, les groupes diffèrent plus que le hasard ne l’expliquerait facilement (khi-deux { $chi }, { $df ->
+    [one] { $df } degré
+   *[other] { $df } degrés
+  } de liberté, p { $p }).
+rank-sentence-may-be-chance = Sur l’ensemble du suivi, le hasard seul pourrait expliquer la différence entre les groupes (khi-deux { $chi }, { $df ->
+    [one] { $df } degré
+   *[other] { $df } degrés
+  } de liberté, p { $p }).
+rank-does-not-mean = La valeur de p n’est pas la taille d’une différence, et une grande valeur ne montre pas que les groupes sont semblables.
+rank-caption = Événements observés, et attendus si tous les groupes avaient les mêmes risques
+observed = Observés
+expected = Attendus
+observed-to-expected = Observés / attendus
+rank-weight = Poids donné à chaque moment
+rank-weight-hint = À choisir avant de regarder le résultat.
+rank-log_rank = Égal : log-rank
+rank-gehan = Effectif à risque : Gehan
+rank-tarone_ware = Sa racine carrée : Tarone-Ware
+rank-fleming_harrington = Survie jusque-là : Fleming-Harrington
+rank-method-log_rank = Test du log-rank (Mantel 1966 ; Peto & Peto 1972), variance hypergéométrique.
+rank-method-gehan = Test de Wilcoxon généralisé par Gehan : les poids sont les effectifs à risque, les différences précoces comptent davantage.
+rank-method-tarone_ware = Tarone & Ware (1977) : les poids sont les racines carrées des effectifs à risque.
+rank-method-fleming_harrington = Fleming & Harrington (1991), poids S(t−) : les différences précoces comptent davantage.
+
+intervals-title = Intervalle par intervalle
+intervals-lead = Parmi ceux qui ont commencé chaque intervalle dans « { $exposed } » et dans « { $reference } », combien y ont connu l’événement. Les perdus de vue et autres sorties d’un intervalle comptent pour moitié.
+intervals-caption = Les deux groupes dans chaque intervalle de suivi (limites à 95 %)
+effective-of = Effectif corrigé, { $group }
+risk-ratio = Rapport des risques
+odds-ratio = Rapport des cotes
+risk-difference = Différence des risques, points de pourcentage
+intervals-left-out = Laissés hors des chiffres regroupés car un groupe ou un événement y manque : { $intervals }.
+intervals-method = Effectifs corrigés n − w/2 (Cutler & Ederer 1958) ; limites du rapport des risques Katz (1978), du rapport des cotes Woolf (1955), de la différence Newcombe (1998) ; regroupement par Mantel & Haenszel (1959), variances de Robins, Breslow & Greenland (1986) et Greenland & Robins (1985).
+pooled-caption = Regroupé sur les strates (Mantel-Haenszel, limites à 95 %)
+pooled-sentence = Au total, le risque dans « { $exposed } » était { $ratio } fois celui de « { $reference } » (intervalle à 95 % : { $interval } ; p { $p }).
+odds-are-not-risks = Un rapport des cotes n’est pas un rapport des risques : quand l’événement est fréquent, il s’éloigne davantage de 1. Citez le rapport et la différence des risques.
+crude = Brut
+pooled = Regroupé
+strata-agree = Les strates concordent assez pour être regroupées (Breslow-Day corrigé par Tarone : khi-deux { $chi }, degrés de liberté { $df }, p { $p }).
+strata-differ = Les strates diffèrent entre elles (Breslow-Day corrigé par Tarone : khi-deux { $chi }, degrés de liberté { $df }, p { $p }) : lisez-les une à une ; le chiffre regroupé masque la différence.
+
+cox-title = En tenant compte d’autres facteurs
+cox-choose-covariates = Cochez ci-dessous ce dont il faut tenir compte.
+cox-covariates = Tenir compte de
+cox-covariates-hint = Seulement ce qui était connu au début. Laissez de côté ce que le groupe a pu lui-même modifier.
+cox-reference = { $covariate } : comparé à
+cox-per = { $covariate } : par
+cox-ties = Événements le même jour
+cox-ties-efron = Efron (choix habituel)
+cox-ties-breslow = Breslow
+cox-term-level = { $covariate } : { $level } contre { $reference }
+cox-term-number = { $covariate }, par { $per }
+cox-sentence-higher = { $term } : l’événement est venu plus tôt ; à tout moment, son risque instantané était { $ratio } fois aussi élevé (intervalle à 95 % : { $interval } ; p { $p }){ $others ->
+    [0] , sans tenir compte d’autre chose.
+   *[other] , les autres covariables étant égales.
+  }
+cox-sentence-lower = { $term } : l’événement est venu plus tard ; à tout moment, son risque instantané était { $ratio } fois aussi élevé (intervalle à 95 % : { $interval } ; p { $p }){ $others ->
+    [0] , sans tenir compte d’autre chose.
+   *[other] , les autres covariables étant égales.
+  }
+cox-sentence-unclear = { $term } : pas de différence nette ; le rapport des risques instantanés est { $ratio }, mais tout ce qui va de { $interval } est compatible avec ces données (p { $p }){ $others ->
+    [0] , sans tenir compte d’autre chose.
+   *[other] , les autres covariables étant égales.
+  }
+cox-does-not-mean = Un rapport des risques instantanés n’est ni un rapport de risques ni un rapport de cotes, et ne dit pas combien : lisez-le avec la différence de survie ci-dessus.
+cox-figure = Rapports des risques instantanés avec limites à 95 %
+cox-figure-described = { $terms ->
+    [one] Un rapport des risques instantanés avec ses limites
+   *[other] { $terms } rapports des risques instantanés avec leurs limites
+  } sur une échelle logarithmique ; le tableau ci-dessous contient les valeurs.
+axis-hazard-ratio = Rapport des risques instantanés (1 = aucune différence)
+cox-caption = Régression de Cox
+covariate = Covariable
+coefficient = Coefficient
+hazard-ratio = Rapport des risques instantanés (limites à 95 %)
+cox-fit = { $n } patients, { $events } événements. Concordance { $concordance } : la part des paires de patients que le modèle range dans le bon ordre.
+cox-tests-caption = Tests du modèle entier
+test-likelihood_ratio = Rapport de vraisemblance
+test-wald = Wald
+test-score = Score
+proportional = Les rapports peuvent être tenus pour constants dans le temps (test du score des risques proportionnels : khi-deux { $chi }, degrés de liberté { $df }, p { $p }).
+not-proportional = Les rapports changent au cours du temps (test du score des risques proportionnels : khi-deux { $chi }, degrés de liberté { $df }, p { $p }) : chacun n’est qu’une moyenne, et la différence de survie ci-dessus en dit plus.
+cox-incomplete = { $incomplete ->
+    [one] Un patient a été laissé de côté car une covariable manque.
+   *[other] { $incomplete } patients ont été laissés de côté car une covariable manque.
+  }
+cox-left-out = Laissées de côté car elles ne varient pas ou répètent ce que d’autres disent déjà : { $covariates }.
+cox-method-efron = Cox (1972), ex æquo selon Efron (1977), limites de Wald ; risques proportionnels par le test du score de Grambsch & Therneau (1994).
+cox-method-breslow = Cox (1972), ex æquo selon Breslow (1974), limites de Wald ; risques proportionnels par le test du score de Grambsch & Therneau (1994).
+
 ## Caseload
 
 caseload-title = File active
