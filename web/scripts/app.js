@@ -13,12 +13,13 @@ import { wordsIn } from './words.js';
 
 /** @param {string} language */
 export function makeApp(language) {
+  const store = makeStore(beginnings(language));
   const app = {
-    store: makeStore(beginnings(language)),
+    store,
     words: wordsIn(language),
     /** Set once the engine has started; nothing is asked before. @type {Engine} */
     engine: /** @type {any} */ (null),
-    report: makeReport(),
+    report: makeReport((reportSerial) => store.change({ reportSerial })),
     /** The unpacked demo register. @type {Uint8Array|null} */
     demo: null,
 
@@ -27,7 +28,7 @@ export function makeApp(language) {
       app.words = wordsIn(tag);
       document.documentElement.lang = tag;
       document.documentElement.dir = app.words.direction;
-      app.store.change({ language: tag });
+      store.change({ language: tag });
     },
   };
   return app;

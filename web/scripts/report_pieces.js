@@ -7,31 +7,28 @@
  * @property {() => Array<Node|null|false>} draw its nodes, made anew
  */
 
-export function makeReport() {
+/** @param {(serial: number) => void} tell called with a new serial whenever the pieces change */
+export function makeReport(tell) {
   /** @type {Map<string, Piece>} */
   const pieces = new Map();
-  const listeners = new Set();
-  const tell = () => {
-    for (const listener of listeners) listener();
+  let serial = 0;
+  const changed = () => {
+    serial += 1;
+    tell(serial);
   };
 
   return {
     /** A piece keeps its first position when it is shown again. @param {Piece} piece */
     show(piece) {
       pieces.set(piece.id, piece);
-      tell();
+      changed();
     },
 
     /** The block no longer shows an answer. @param {string} id */
     withdraw(id) {
-      if (pieces.delete(id)) tell();
+      if (pieces.delete(id)) changed();
     },
 
     pieces: () => [...pieces.values()],
-
-    /** @param {() => void} listener */
-    subscribe(listener) {
-      listeners.add(listener);
-    },
   };
 }

@@ -46,6 +46,7 @@ function placeNow() {
 
 function showPlace(app, moveFocus) {
   const now = placeNow();
+  app.store.change({ place: now });
   for (const name of Object.keys(PLACES)) {
     const box = document.getElementById(`place-${name}`);
     box.hidden = name !== now;

@@ -34,6 +34,10 @@ export function beginnings(language) {
       balance: { prevalent: null, new_per_year: null, leaving: [], years: 5, population: null },
     },
     report: { title: '', hospital: '', author: '', date: '', leftOut: [] },
+    /** Changes whenever a piece of the report does. */
+    reportSerial: 0,
+    /** The place that is shown, by its name in the address. */
+    place: 'register',
   };
 }
 

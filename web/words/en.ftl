@@ -330,3 +330,31 @@ counts-title = From counts
 ## Report
 
 report-title = Report
+
+report-lead = Everything shown on the other places stands below, in the order it was first shown. Leave out what is not needed, then print it or keep it as one file.
+report-empty = Nothing has been shown yet. Open a register or type totals, look at the answers, and come back.
+report-field-title = Title
+report-field-hospital = Hospital or programme
+report-field-author = Prepared by
+report-field-date = Date
+report-date-hint = As it should be printed; this page never uses the computer's clock.
+report-pieces = In the report
+report-print = Print
+report-save = Save as one HTML file
+report-untitled = Follow-up report
+report-no-byline = Hospital, author and date not supplied
+report-made-with = Worked out on one computer with Vitalroll { $version }; no record left it.
+figure-number = Figure { $number }. { $title }
+table-number = Table { $number }. { $title }
+about-data = The patients
+about-data-sentence = { $n } patients who started between { $first } and { $last }, followed to the closing date of { $closing }: { $years } person-years in all.
+about-file = File
+about-fingerprint = Fingerprint of the file (SHA-256)
+about-rows = Rows in the file
+flow-caption = From the rows of the file to how follow-up ended
+flow-stage = Stage
+flow-rows = Rows in the file
+flow-set-aside = Set aside
+flow-analysed = Analysed
+flow-changed = Analysed with a change
+share = Share

@@ -330,3 +330,31 @@ counts-title = À partir de totaux
 ## Report
 
 report-title = Rapport
+
+report-lead = Tout ce qui a été montré dans les autres rubriques figure ci-dessous, dans l’ordre de sa première apparition. Écartez ce qui est inutile, puis imprimez ou gardez en un seul fichier.
+report-empty = Rien n’a encore été montré. Ouvrez un registre ou saisissez des totaux, regardez les réponses, puis revenez.
+report-field-title = Titre
+report-field-hospital = Hôpital ou programme
+report-field-author = Préparé par
+report-field-date = Date
+report-date-hint = Telle qu’elle doit être imprimée ; cette page n’utilise jamais l’horloge de l’ordinateur.
+report-pieces = Dans le rapport
+report-print = Imprimer
+report-save = Enregistrer en un fichier HTML
+report-untitled = Rapport de suivi
+report-no-byline = Hôpital, auteur et date non renseignés
+report-made-with = Calculé sur un seul ordinateur avec Vitalroll { $version } ; aucun dossier ne l’a quitté.
+figure-number = Figure { $number }. { $title }
+table-number = Tableau { $number }. { $title }
+about-data = Les patients
+about-data-sentence = { $n } patients dont le suivi a commencé entre le { $first } et le { $last }, suivis jusqu’à la date de clôture du { $closing } : { $years } personnes-années au total.
+about-file = Fichier
+about-fingerprint = Empreinte du fichier (SHA-256)
+about-rows = Lignes du fichier
+flow-caption = Des lignes du fichier à la fin du suivi
+flow-stage = Étape
+flow-rows = Lignes du fichier
+flow-set-aside = Écartées
+flow-analysed = Analysées
+flow-changed = Analysées après modification
+share = Part
