@@ -71,9 +71,9 @@ function translateTemplate(app) {
   const { say, language } = app.words;
   if (document.body.dataset.language === language) return;
   document.body.dataset.language = language;
-  for (const element of document.querySelectorAll('[data-word]')) element.textContent = say(element.dataset.word);
+  for (const element of document.querySelectorAll('[data-word]')) element.textContent = say(element.getAttribute('data-word'));
   for (const element of document.querySelectorAll('[data-word-label]')) {
-    element.setAttribute('aria-label', say(element.dataset.wordLabel));
+    element.setAttribute('aria-label', say(element.getAttribute('data-word-label')));
   }
   drawPlaceList(app);
 }

@@ -53,6 +53,7 @@ export function wordsIn(language) {
 
 /** Fluent takes strings and numbers; lists are joined, null is a dash. */
 function fluentValues(parameters) {
+  /** @type {Record<string, string|number>} */
   const values = {};
   for (const [name, value] of Object.entries(parameters)) {
     if (value === null || value === undefined) values[name] = '–';

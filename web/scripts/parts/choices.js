@@ -6,7 +6,7 @@ import { h } from './element.js';
  *   `fault` is a sentence saying what is wrong with the value now
  */
 
-/** A control under its label, with its hint and its fault tied to it. */
+/** A control under its label, with its hint and its fault tied to it. @param {Naming} naming @param {HTMLElement} control */
 function labelled({ id, label, hint, fault }, control) {
   const described = [hint && `${id}-hint`, fault && `${id}-fault`].filter(Boolean).join(' ');
   if (described) control.setAttribute('aria-describedby', described);

@@ -28,7 +28,11 @@ export function refusalNote(app, refusal) {
   return h('p', { class: 'refusal', role: 'alert' }, refusalSentence(app, refusal));
 }
 
-/** Meanings and covariates among the parameters, by the names people know. */
+/**
+ * Meanings and covariates among the parameters, by the names people know.
+ * @param {import('../app.js').App} app
+ * @param {Record<string, any>} [parameters]
+ */
 function named(app, parameters = {}) {
   const values = { ...parameters };
   if (typeof values.meaning === 'string') values.meaning = app.words.say(`meaning-${values.meaning}`);

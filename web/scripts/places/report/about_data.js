@@ -27,6 +27,7 @@ function flowTable(app, cohort) {
   const changed = Object.entries(cohort.changed_counts).map(([code, n]) => ({ label: say(`changed-${code}-short`), n, inside: true }));
   const endings = Object.entries(cohort.outcomes).filter(([, n]) => n > 0)
     .map(([meaning, n]) => ({ label: say(`meaning-${meaning}`), n, share: n / cohort.n, inside: true }));
+  /** @type {Array<{label: string, n: number, share?: number, inside?: boolean}>} */
   const rows = [
     { label: say('flow-rows'), n: cohort.rows },
     ...(aside.length ? [{ label: say('flow-set-aside'), n: aside.reduce((sum, { n }) => sum + n, 0) }, ...aside] : []),
