@@ -79,7 +79,8 @@ def _value(hint: Any, given: Any, path: str) -> Any:
     if origin is dict:
         if not isinstance(given, dict):
             raise Refusal("wrong_type", field=path, expected="object")
-        return {str(key): _value(get_args(hint)[1], item, _join(path, str(key))) for key, item in given.items()}
+        inside = get_args(hint)[1]
+        return {str(key): _value(inside, item, _join(path, str(key))) for key, item in given.items()}
     if dataclasses.is_dataclass(hint):
         return _dataclass(hint, given, path)
     return _scalar(hint, given, path)

@@ -6,8 +6,9 @@ arrays, strings and numbers. One module for each room; this table only gathers t
 
 from __future__ import annotations
 
-from vitalroll.desk import about
+from vitalroll.desk import about, outcome_tasks
 
 TASKS = {
     **about.TASKS,
+    **outcome_tasks.TASKS,
 }
