@@ -204,6 +204,29 @@ cumulative-incidence = Cumulative incidence (95 % limits)
 one-minus-survival = One minus survival (too high)
 leaving-method = Aalen & Johansen (1978), all ways of leaving at once; variance as in Marubini & Valsecchi (1995).
 
+refusal-no_patients = There are no patients to describe.
+refusal-one_patient = One patient alone is not described here: results are for groups. Look at the record itself.
+refusal-nobody_at_risk = Nobody was under observation for even a day, so nothing can be said about time.
+refusal-too_many_groups = { $covariate } has { $groups } groups; at most { $most } can be told apart. Merge some in the register first, or choose another column.
+refusal-groups_too_small = No group of { $covariate } has at least two patients. Choose another column.
+caution-no_events = { $level }: nobody of { $n } met the outcome. The curve stays at 100 %; its lower limit shows how low it could still be.
+caution-all_events_on_day_zero = { $level }: all { $events } outcomes fell on the first day. Check whether the dates of start and end were mixed up.
+caution-last_at_risk_had_event = { $level }: the curve falls to 0 because the very last patient under observation met the outcome. Do not read its end.
+caution-never_at_risk = { $level }: { $n } with a late first visit began and ended observation on one day, and count nowhere.
+caution-begins_late = { $level }: nobody was under observation before day { $days }. The curve speaks only of those who had come that far.
+caution-risk_set_emptied = { $level }: for a time nobody was under observation (last after day { $emptied_days }); the curve starts again on day { $restart_days } and speaks of those who had come that far.
+caution-few_patients = { $level }: only { $n } patients. One more or one fewer would change the figures a great deal.
+caution-few_at_risk = { $level }: fewer than 10 were still at risk at { $years } years ({ $at_risk }). Do not lean on the figure there.
+caution-many_lost = { $level }: { $lost } were lost to follow-up ({ NUMBER($share, style: "percent", maximumFractionDigits: 0) }). If they fared worse than those who stayed, the true survival is lower: quote the bounds as well.
+caution-all_lost = { $level }: all { $n } were lost, so only the bounds can be given.
+caution-lost_is_of_interest = Being lost counts as the outcome here; the bounds for losses then mean nothing.
+caution-few_effective = { $level }: fewer than 10 effectively at risk in the interval beginning on day { $from_days }. Read no further than there.
+caution-nobody_left = { $level }: nobody of { $n } has left yet.
+caution-group_not_recorded = { $n ->
+    [one] One patient has nothing recorded in the grouping column and is in no group.
+   *[other] { $n } patients have nothing recorded in the grouping column and are in no group.
+  }
+
 ## Compare
 
 compare-title = Compare

@@ -204,6 +204,29 @@ cumulative-incidence = Incidence cumulée (limites à 95 %)
 one-minus-survival = Un moins la survie (trop élevé)
 leaving-method = Aalen & Johansen (1978), toutes les façons de sortir à la fois ; variance selon Marubini & Valsecchi (1995).
 
+refusal-no_patients = Il n’y a aucun patient à décrire.
+refusal-one_patient = Un patient seul n’est pas décrit ici : les résultats concernent des groupes. Regardez le dossier lui-même.
+refusal-nobody_at_risk = Personne n’a été observé ne serait-ce qu’un jour : rien ne peut être dit du temps.
+refusal-too_many_groups = { $covariate } compte { $groups } groupes ; on en distingue au plus { $most }. Regroupez-en dans le registre ou choisissez une autre colonne.
+refusal-groups_too_small = Aucun groupe de { $covariate } n’a au moins deux patients. Choisissez une autre colonne.
+caution-no_events = { $level } : personne sur { $n } n’a connu l’événement. La courbe reste à 100 % ; sa limite inférieure montre jusqu’où elle pourrait descendre.
+caution-all_events_on_day_zero = { $level } : les { $events } événements tombent tous le premier jour. Vérifiez que les dates de début et de fin n’ont pas été confondues.
+caution-last_at_risk_had_event = { $level } : la courbe tombe à 0 parce que le tout dernier patient observé a connu l’événement. N’en lisez pas la fin.
+caution-never_at_risk = { $level } : { $n } patients vus tardivement ont commencé et fini leur observation le même jour et ne comptent nulle part.
+caution-begins_late = { $level } : personne n’était observé avant le jour { $days }. La courbe ne concerne que ceux qui sont arrivés jusque-là.
+caution-risk_set_emptied = { $level } : pendant un temps personne n’était observé (en dernier après le jour { $emptied_days }) ; la courbe repart au jour { $restart_days } et concerne ceux qui sont arrivés jusque-là.
+caution-few_patients = { $level } : seulement { $n } patients. Un de plus ou de moins changerait beaucoup les chiffres.
+caution-few_at_risk = { $level } : moins de 10 encore à risque à { $years } ans ({ $at_risk }). Ne vous appuyez pas sur ce chiffre.
+caution-many_lost = { $level } : { $lost } perdus de vue ({ NUMBER($share, style: "percent", maximumFractionDigits: 0) }). S’ils ont évolué moins bien que les autres, la vraie survie est plus basse : citez aussi les bornes.
+caution-all_lost = { $level } : les { $n } patients ont tous été perdus de vue ; seules les bornes peuvent être données.
+caution-lost_is_of_interest = Être perdu de vue compte ici comme événement ; les bornes des pertes n’ont alors aucun sens.
+caution-few_effective = { $level } : moins de 10 effectivement à risque dans l’intervalle qui commence au jour { $from_days }. Ne lisez pas au-delà.
+caution-nobody_left = { $level } : personne sur { $n } n’est encore sorti.
+caution-group_not_recorded = { $n ->
+    [one] Un patient n’a rien d’inscrit dans la colonne des groupes et n’est dans aucun groupe.
+   *[other] { $n } patients n’ont rien d’inscrit dans la colonne des groupes et ne sont dans aucun groupe.
+  }
+
 ## Compare
 
 compare-title = Comparer

@@ -36,6 +36,8 @@ export function refusalNote(app, refusal) {
 function named(app, parameters = {}) {
   const values = { ...parameters };
   if (typeof values.meaning === 'string') values.meaning = app.words.say(`meaning-${values.meaning}`);
+  // A caution about everybody carries level null.
+  if ('level' in values) values.level = levelName(app, app.store.state.question.group, values.level);
   for (const name of ['covariate', 'column', 'group', 'id']) {
     if (typeof values[name] === 'string') values[name] = covariateName(app, values[name]);
   }

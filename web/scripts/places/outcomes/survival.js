@@ -82,7 +82,7 @@ function curveData(answer, name) {
     upper: curve.upper,
     censorYears: inYears(curve.censor_time),
     censorSurvival: curve.censor_survival,
-    stop: curve.stop_time === null ? null : curve.stop_time / DAYS_PER_YEAR,
+    stop: curve.stop_time === 0 ? null : curve.stop_time / DAYS_PER_YEAR,
     counts: {
       atRisk: answer.table[position].at_risk,
       events: answer.table[position].events,
