@@ -7,10 +7,10 @@ import math
 from dataclasses import dataclass
 
 import numpy as np
-from scipy.special import gammaincinv
 
 from vitalroll.errors import Caution, Refusal
 from vitalroll.numbers import DAYS_PER_YEAR, Estimate, two_sided_z
+from vitalroll.outcomes.person_time import poisson_limits
 from vitalroll.register.cohort import Cohort
 
 OVERDISPERSED_ABOVE = 1.5
@@ -97,7 +97,7 @@ def inflow_from_history(cohort: Cohort, *, confidence: float = 0.95) -> Inflow:
     --------
     ``history_too_short`` (whole_years, needed), ``newcomers_overdispersed`` (dispersion),
     ``newcomers_trend`` (percent_per_year, p), ``no_newcomers_lately`` (last, days),
-    ``old_cases_not_newcomers`` (count), ``newcomers_seen_late`` (count, percent),
+    ``old_cases_not_newcomers`` (count), ``newcomers_seen_late`` (count, share),
     ``years_without_newcomers`` (years).
 
     References
@@ -160,19 +160,17 @@ def inflow_typed(per_year: float) -> Inflow:
 def mean_of_counts(counts: np.ndarray, *, spread: float = 1.0, confidence: float = 0.95) -> Estimate:
     """Return the mean of yearly counts with Garwood's limits, scaled by ``spread`` (variance/mean).
 
-    Half the tail of a Gamma with the total T as its shape below, T + 1 above (the chi-squared
-    form of Garwood 1936, halved). NaN without counts.
+    The limits of total/spread, scaled back: a spread of 1 gives Garwood's own. Counts from one
+    to many years can never have a spread above their total. NaN without counts.
     """
     if len(counts) == 0:
         return Estimate(math.nan, math.nan, math.nan)
-    total, years, tail = float(np.sum(counts)), len(counts), (1 - confidence) / 2
-    units = total / spread
-    lower = float(gammaincinv(units, tail)) if total > 0 else 0.0
-    upper = float(gammaincinv(units + 1, 1 - tail))
+    total, years = float(np.sum(counts)), len(counts)
+    lower, upper = poisson_limits(total / spread, confidence)
     return Estimate(
         value=total / years,
-        lower=lower * spread / years,
-        upper=upper * spread / years,
+        lower=float(lower) * spread / years,
+        upper=float(upper) * spread / years,
         standard_error=math.sqrt(total * spread) / years,
     )
 
@@ -236,7 +234,7 @@ def _cautions_about_arrivals(
     late = int(np.count_nonzero(newcomer & (cohort.entry > 0)))
     if late > _SHARE_SEEN_LATE_WORTH_SAYING * len(arrivals):
         cautions.append(
-            Caution("newcomers_seen_late", {"count": late, "percent": 100 * late / len(arrivals)})
+            Caution("newcomers_seen_late", {"count": late, "share": late / len(arrivals)})
         )
     if len(arrivals):
         silent = cohort.closing - int(arrivals[-1])

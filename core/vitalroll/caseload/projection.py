@@ -2,7 +2,7 @@
 
 A discrete cohort-component model. Patients stand in slots by time since their start: slot 0
 holds the newcomers of the month, slot 1 those up to one month from their start, and so on.
-Each month everyone moves on by one slot or leaves in one of the ways in ``retention.WAYS``. The
+Each month everyone moves on by one slot or leaves in one of the ways in ``competing.WAYS_OF_LEAVING``. The
 last slot gathers all who have been here longer than the register supports.
 """
 
@@ -12,10 +12,11 @@ from dataclasses import dataclass
 
 import numpy as np
 
-from vitalroll.caseload.retention import WAYS, Retention
+from vitalroll.caseload.retention import Retention
 from vitalroll.caseload.scenario import WhatIf
 from vitalroll.errors import Refusal
 from vitalroll.numbers import DAYS_PER_MONTH
+from vitalroll.outcomes.competing import WAYS_OF_LEAVING
 from vitalroll.register.cohort import Cohort, meaning_code
 
 MONTHS_PER_YEAR = 12
@@ -78,7 +79,7 @@ class Path:
     under_care : float array, shape (months + 1,)
         Patients under care at the end of each month; the first entry is today.
     newcomers : float array, shape (months,)
-    leaving : float array, shape (months, len(WAYS))
+    leaving : float array, shape (months, len(WAYS_OF_LEAVING))
     beyond_support : float array, shape (months + 1,)
         Those of ``under_care`` who have been here longer than hazards were observed.
     """
@@ -174,7 +175,7 @@ def project(
     steps = MONTHS_PER_YEAR * years
     here = axis.place(today).astype(float)
     under_care, beyond = [here.sum()], [here[-1]]
-    newcomers, leaving = np.empty(steps), np.empty((steps, len(WAYS)))
+    newcomers, leaving = np.empty(steps), np.empty((steps, len(WAYS_OF_LEAVING)))
     for month in range(steps):
         if month == changed_from:
             monthly = monthly * what_if.hazards_kept

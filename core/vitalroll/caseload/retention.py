@@ -6,15 +6,12 @@ import math
 from dataclasses import dataclass, replace
 
 import numpy as np
-from scipy.special import gammaincinv
 
 from vitalroll.errors import Caution, Refusal
 from vitalroll.numbers import DAYS_PER_YEAR
+from vitalroll.outcomes.competing import WAYS_OF_LEAVING
+from vitalroll.outcomes.person_time import poisson_limits
 from vitalroll.outcomes.risk_table import RiskTable
-from vitalroll.register.cohort import MEANINGS
-
-WAYS = MEANINGS[1:]
-"""The ways of leaving care, in the order of every ``ways`` axis in this room."""
 
 ENOUGH_EXITS = 10
 ENOUGH_PERSON_YEARS = 50.0
@@ -33,7 +30,7 @@ class Retention:
         Patients under observation as the stretch begins.
     person_years : float array, shape (stretches,)
         Time observed within the stretch, exact to the day, delayed entry respected.
-    exits : int array, shape (stretches, len(WAYS))
+    exits : int array, shape (stretches, len(WAYS_OF_LEAVING))
         How many left in the stretch, by way of leaving.
     beyond_person_years, beyond_exits : float, int
         What was observed after the last edge: too little to be used.
@@ -50,7 +47,7 @@ class Retention:
 
     @property
     def hazards(self) -> np.ndarray:
-        """Exits per person-year, shape (stretches, len(WAYS))."""
+        """Exits per person-year, shape (stretches, len(WAYS_OF_LEAVING))."""
         return self.exits / self.person_years[:, np.newaxis]
 
     @property
@@ -60,10 +57,7 @@ class Retention:
 
     def limits(self, confidence: float = 0.95) -> tuple[np.ndarray, np.ndarray]:
         """Return Garwood's (1936) limits of the hazards, two arrays shaped like ``hazards``."""
-        tail = (1 - confidence) / 2
-        # The lower limit of a count of 0 is 0, where the gamma quantile has no shape to work with.
-        lower = np.where(self.exits > 0, gammaincinv(np.maximum(self.exits, 1), tail), 0.0)
-        upper = gammaincinv(self.exits + 1, 1 - tail)
+        lower, upper = poisson_limits(self.exits, confidence)
         years = self.person_years[:, np.newaxis]
         return lower / years, upper / years
 
@@ -140,13 +134,13 @@ def person_years_between(table: RiskTable, edges: np.ndarray) -> np.ndarray:
 
 
 def _exits_between(table: RiskTable, edges: np.ndarray) -> np.ndarray:
-    """Return exits by way, shape (stretches, len(WAYS)); who leaves on an edge leaves before it.
+    """Return exits by way, shape (stretches, len(WAYS_OF_LEAVING)); who leaves on an edge leaves before it.
 
     Exits on day 0 carry no time but belong to the first stretch.
     """
     upto = np.searchsorted(table.time, edges * DAYS_PER_YEAR, side="right")
     upto[0] = 0
-    counts = np.vstack((np.zeros((1, len(WAYS)), dtype=np.int64), np.cumsum(table.left[:, 1:], axis=0)))
+    counts = np.vstack((np.zeros((1, len(WAYS_OF_LEAVING)), dtype=np.int64), np.cumsum(table.left[:, 1:], axis=0)))
     return np.diff(counts[upto], axis=0)
 
 
@@ -170,7 +164,7 @@ def _supported_ends(person_years: np.ndarray, exits: np.ndarray) -> list[int]:
 
 def _with_cautions(found: Retention, cautions: list[Caution]) -> Retention:
     for i in np.flatnonzero(found.exits.sum(axis=1) == 0):
-        upper = float(gammaincinv(1, 0.975)) / float(found.person_years[i])
+        upper = float(poisson_limits(0)[1]) / float(found.person_years[i])
         cautions.append(
             Caution(
                 "no_exits_observed",

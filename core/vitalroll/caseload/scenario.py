@@ -6,8 +6,8 @@ from dataclasses import dataclass
 
 import numpy as np
 
-from vitalroll.caseload.retention import WAYS
 from vitalroll.errors import Refusal
+from vitalroll.outcomes.competing import WAYS_OF_LEAVING
 from vitalroll.register.cohort import DEATHS
 
 
@@ -51,6 +51,6 @@ class WhatIf:
 
     @property
     def hazards_kept(self) -> np.ndarray:
-        """What the hazard of each way of leaving is multiplied by, shape (len(WAYS),)."""
+        """What the hazard of each way of leaving is multiplied by, shape (len(WAYS_OF_LEAVING),)."""
         kept = {"lost": 1 - self.fewer_lost / 100} | dict.fromkeys(DEATHS, 1 - self.fewer_deaths / 100)
-        return np.array([kept.get(way, 1.0) for way in WAYS])
+        return np.array([kept.get(way, 1.0) for way in WAYS_OF_LEAVING])

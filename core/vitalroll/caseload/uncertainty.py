@@ -13,7 +13,7 @@ import numpy as np
 
 from vitalroll.caseload.inflow import Inflow
 from vitalroll.caseload.projection import MONTHS_PER_YEAR, Ageing, ageing, moved_on, shares_by_way
-from vitalroll.caseload.retention import WAYS, Retention
+from vitalroll.caseload.retention import Retention
 from vitalroll.caseload.scenario import WhatIf
 from vitalroll.errors import Refusal
 
@@ -33,7 +33,7 @@ class Course:
     under_care : int array, shape (draws, months + 1)
         At the end of each month; the first entry is today.
     newcomers : int array, shape (draws, years)
-    leaving : int array, shape (draws, years, len(WAYS))
+    leaving : int array, shape (draws, years, len(WAYS_OF_LEAVING))
     """
 
     under_care: np.ndarray

@@ -36,6 +36,7 @@ export function refusalNote(app, refusal) {
 function named(app, parameters = {}) {
   const values = { ...parameters };
   if (typeof values.meaning === 'string') values.meaning = app.words.say(`meaning-${values.meaning}`);
+  if (typeof values.share === 'number') values.share = app.words.percent(values.share, 0);
   // A caution about everybody carries level null.
   if ('level' in values) values.level = levelName(app, app.store.state.question.group, values.level);
   for (const name of ['covariate', 'column', 'group', 'id']) {
