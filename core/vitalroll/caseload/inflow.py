@@ -98,7 +98,7 @@ def inflow_from_history(cohort: Cohort, *, confidence: float = 0.95) -> Inflow:
     ``history_too_short`` (whole_years, needed), ``newcomers_overdispersed`` (dispersion),
     ``newcomers_trend`` (percent_per_year, p), ``no_newcomers_lately`` (last, days),
     ``old_cases_not_newcomers`` (count), ``newcomers_seen_late`` (count, share),
-    ``years_without_newcomers`` (years).
+    ``years_without_newcomers`` (count, year: the first of them).
 
     References
     ----------
@@ -211,7 +211,7 @@ def _cautions_about_counts(
         cautions.append(Caution("newcomers_overdispersed", {"dispersion": dispersion}))
     empty = [year.year for year in years if year.whole and year.count == 0]
     if empty:
-        cautions.append(Caution("years_without_newcomers", {"years": empty}))
+        cautions.append(Caution("years_without_newcomers", {"count": len(empty), "year": empty[0]}))
     if len(counts) >= 3 and counts.sum() > 0:
         # Score test of a log-linear trend in Poisson counts, given their total.
         position = np.arange(len(counts)) - (len(counts) - 1) / 2

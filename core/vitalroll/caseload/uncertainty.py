@@ -112,15 +112,15 @@ def redraw(
             raise Refusal("out_of_range", field=field, given=given, least=1)
     axis = ageing(hazards.edges)
     placed = axis.place(today)
-    streams = [np.random.default_rng(child) for child in np.random.SeedSequence(seed).spawn(3)]
-    parameters, baseline, change = streams
+    # Streams of their own, so that what is drawn for a what-if never shifts the baseline's.
+    parameters, counts, others = map(np.random.default_rng, np.random.SeedSequence(seed).spawn(3))
     chunks = []
     for done in range(0, draws, _DRAWS_AT_A_TIME):
         report("draws", done, draws)
         size = min(_DRAWS_AT_A_TIME, draws - done)
         monthly = axis.hazards(drawn_hazards(hazards, size, parameters))
         arriving = drawn_arrivals(inflow, size, years, parameters)
-        chunks.append(_chunk(axis, placed, monthly, arriving, what_if, baseline, change))
+        chunks.append(_chunk(axis, placed, monthly, arriving, what_if, counts, others))
     report("draws", draws, draws)
     return Draws(
         baseline=_joined([chunk.baseline for chunk in chunks]),
@@ -162,10 +162,13 @@ def _chunk(
     monthly: np.ndarray,
     arriving: np.ndarray,
     what_if: WhatIf | None,
-    random: np.random.Generator,
-    change_random: np.random.Generator,
+    counts: np.random.Generator,
+    others: np.random.Generator,
 ) -> Draws:
-    """Run one chunk of draws: monthly hazards (draws, runs, ways), arrivals (draws, years)."""
+    """Run one chunk of draws: monthly hazards (draws, runs, ways), arrivals (draws, years).
+
+    ``counts`` draws who comes and leaves in the baseline; ``others`` the ways and the what-if.
+    """
     draws, years = arriving.shape
     leaving_chance = 1 - axis.staying(monthly)
     here = np.tile(placed.astype(np.int64), (draws, 1))
@@ -173,21 +176,21 @@ def _chunk(
     under_care[:, 0] = here.sum(axis=1)
     newcomers = np.zeros((draws, years), dtype=np.int64)
     left = np.zeros((draws, years, len(axis.begins)), dtype=np.int64)
-    change = _Change(axis, monthly, what_if, years, change_random) if what_if else None
+    change = _Change(axis, monthly, what_if, years, others) if what_if else None
     for month in range(MONTHS_PER_YEAR * years):
         year = month // MONTHS_PER_YEAR
-        here[:, 0] = random.poisson(arriving[:, year])
+        here[:, 0] = counts.poisson(arriving[:, year])
         newcomers[:, year] += here[:, 0]
-        leavers = random.binomial(here, leaving_chance)
+        leavers = counts.binomial(here, leaving_chance)
         if change and year + 1 >= what_if.from_year:
             change.follow(month, here, leavers)
         else:
             left[:, year] += np.add.reduceat(leavers, axis.begins, axis=1)
         here = moved_on(here - leavers)
         under_care[:, month + 1] = here.sum(axis=1)
+    before = _by_way(left, monthly, others)
     if change is None:
-        return Draws(Course(under_care, newcomers, _by_way(left, monthly, random)), None)
-    before = _by_way(left, monthly, change_random)
+        return Draws(Course(under_care, newcomers, before), None)
     baseline_leaving, changed_leaving = change.leaving(before)
     return Draws(
         Course(under_care, newcomers, baseline_leaving),

@@ -127,7 +127,7 @@ def _places(found: Balance, request: BalanceRequest) -> tuple[Occupancy | None, 
     except Refusal as refusal:
         if refusal.code != "utilisation_at_or_above_one":
             raise
-        return None, [Caution(refusal.code, refusal.parameters)]
+        return None, [Caution("utilisation_at_or_above_one", refusal.parameters)]
 
 
 TASKS = {

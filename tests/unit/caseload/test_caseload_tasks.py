@@ -1,0 +1,179 @@
+"""The caseload tasks through the desk's door."""
+
+from __future__ import annotations
+
+import json
+
+import numpy as np
+import pytest
+from caseload_cases import cohort, day, simulated_register
+
+from vitalroll.desk.door import Desk
+from vitalroll.register.cohort import MEANINGS
+
+CLOSING = day(2021, 12, 31)
+
+
+def _desk(register) -> Desk:
+    desk = Desk()
+    desk._memory.built = register
+    return desk
+
+
+@pytest.fixture(scope="module")
+def register():
+    return simulated_register(
+        np.random.default_rng(4), per_year=60, years=7, yearly_hazard=[0.4, 0.2, 0.1], closing=CLOSING
+    )
+
+
+@pytest.fixture(scope="module")
+def desk(register) -> Desk:
+    return _desk(register)
+
+
+def _answer(desk: Desk, task: str, **request) -> dict:
+    answered = desk.answer(task, json.loads(json.dumps(request)))
+    assert "refusal" not in answered, answered
+    json.dumps(answered, allow_nan=False)
+    return answered["answer"]
+
+
+def _refusal(desk: Desk, task: str, **request) -> tuple[str, str | None]:
+    refusal = desk.answer(task, request)["refusal"]
+    return refusal["code"], refusal["field"]
+
+
+def test_the_history_accounts_for_everybody(desk, register):
+    told = _answer(desk, "caseload.history")
+    assert sum(year["count"] for year in told["newcomers"]) == len(register)
+    assert told["today"]["total"] == np.count_nonzero(register.outcome == 0)
+    assert sum(row["count"] for row in told["today"]["by_duration"]) == told["today"]["total"]
+    left = sum(row["exits"] for row in told["retention"]) + told["beyond"]["exits"]
+    assert left + told["today"]["total"] == len(register)
+    time = sum(row["person_years"] for row in told["retention"]) + told["beyond"]["person_years"]
+    assert time == pytest.approx(register.person_days() / 365.25)
+    for row in told["retention"]:
+        assert [way["meaning"] for way in row["ways"]] == list(MEANINGS[1:])
+        assert sum(way["share"] for way in row["ways"]) == pytest.approx(1)
+        assert all(way["lower"] <= way["hazard"] <= way["upper"] for way in row["ways"])
+    assert told["supported_years"] == told["retention"][-1]["to_years"]
+    assert told["closing_date"] == "2021-12-31"
+
+
+def test_the_projection_has_its_shape_and_adds_up(desk):
+    told = _answer(
+        desk,
+        "caseload.project",
+        years=4,
+        newcomers={"basis": "history"},
+        resources={"visits": 4, "medicine_units": 365, "cost": 120.5},
+        what_if={"fewer_newcomers": 10, "fewer_lost": 50, "fewer_deaths": 20, "from_year": 2},
+        draws=300,
+    )
+    assert [year["ends"] for year in told["years"]] == [f"{year}-12-31" for year in range(2022, 2026)]
+    for course in (told["baseline"], told["what_if"]):
+        assert len(course["under_care"]) == 5
+        assert all(len(course[name]) == 4 for name in ("patient_years", "newcomers", "deaths", "lost"))
+        for year in range(4):
+            left = sum(way["values"][year]["value"] for way in course["leaving"])
+            after = course["under_care"][year]["value"] + course["newcomers"][year]["value"] - left
+            assert after == pytest.approx(course["under_care"][year + 1]["value"])
+            assert course["resources"]["cost"][year]["value"] == pytest.approx(
+                120.5 * course["patient_years"][year]["value"]
+            )
+            for name in ("under_care", "patient_years", "newcomers", "deaths"):
+                band = course[name][year]
+                assert band["p95"][0] <= band["p80"][0] <= band["p80"][1] <= band["p95"][1]
+                assert band["p95"][0] <= band["value"] <= band["p95"][1]
+    for name in ("under_care", "deaths", "lost"):
+        for change, before, after in zip(
+            told["difference"][name], told["baseline"][name], told["what_if"][name], strict=True
+        ):
+            assert change["value"] == pytest.approx(after["value"] - before["value"])
+    total = told["difference"]["total"]
+    assert total["cost"]["value"] == pytest.approx(sum(band["value"] for band in told["difference"]["cost"]))
+    # A difference within the same draws is far surer than each of the two.
+    width = total["lost"]["p95"][1] - total["lost"]["p95"][0]
+    assert total["lost"]["p95"][1] < 0
+    assert width < np.ptp(told["baseline"]["lost"][0]["p95"]) * 4
+    assert len(told["tail"]["held_share"]) == 5
+    assert (told["seed"], told["draws"]) == (1, 300)
+
+
+def test_the_bare_request_is_enough(desk):
+    told = _answer(desk, "caseload.project")
+    assert told["what_if"] is None
+    assert told["difference"] is None
+    assert len(told["years"]) == 5
+    assert told["newcomers_per_year"]["model"] == "poisson"
+
+
+def test_typed_newcomers_are_used_and_need_their_number(desk):
+    told = _answer(desk, "caseload.project", newcomers={"basis": "typed", "per_year": 33}, draws=100)
+    assert told["baseline"]["newcomers"][0]["value"] == pytest.approx(33)
+    assert told["newcomers_per_year"]["model"] == "typed"
+    assert _refusal(desk, "caseload.project", newcomers={"basis": "typed"}) == (
+        "missing_field",
+        "newcomers.per_year",
+    )
+
+
+def test_a_horizon_longer_than_the_history_is_said(desk):
+    codes = {c["code"]: c["parameters"] for c in _answer(desk, "caseload.project", years=12, draws=100)["cautions"]}
+    assert codes["horizon_beyond_history"]["years"] == 12
+    assert codes["horizon_beyond_history"]["history_years"] == pytest.approx(7, abs=0.2)
+    assert codes["hazard_held"]["share"] > 0.25
+
+
+@pytest.mark.parametrize(
+    ("request_", "refused"),
+    [
+        ({"what_if": {"fewer_lost": 120}}, ("out_of_range", "what_if.fewer_lost")),
+        ({"what_if": {"fewer_deaths": -5}}, ("out_of_range", "what_if.fewer_deaths")),
+        ({"years": 3, "what_if": {"from_year": 4}}, ("out_of_range", "what_if.from_year")),
+        ({"years": 31}, ("out_of_range", "years")),
+        ({"resources": {"cost": -1}}, ("out_of_range", "resources.cost")),
+        ({"newcomers": {"basis": "guess"}}, ("not_one_of", "newcomers.basis")),
+    ],
+)
+def test_nonsense_is_refused_by_its_field(desk, request_, refused):
+    assert _refusal(desk, "caseload.project", **request_) == refused
+
+
+def test_less_than_two_whole_years_cannot_be_projected_but_typed_newcomers_can():
+    rows = [(day(2020, 7, 1) + 10 * i, 0, 100, "under_care") for i in range(50)]
+    desk = _desk(cohort(rows, CLOSING))
+    assert _refusal(desk, "caseload.project") == ("history_too_short", "newcomers.basis")
+    told = _answer(desk, "caseload.project", newcomers={"basis": "typed", "per_year": 40}, draws=100)
+    # Nobody ever left: everybody stays, and it is said.
+    assert told["baseline"]["under_care"][-1]["value"] == pytest.approx(50 + 5 * 40)
+    assert "no_exits_observed" in {caution["code"] for caution in told["cautions"]}
+    history = _answer(desk, "caseload.history")
+    assert history["newcomers_per_year"]["dispersion"] is None
+    assert "history_too_short" in {caution["code"] for caution in history["cautions"]}
+
+
+def test_nobody_under_care_is_refused_for_the_future_but_not_for_the_past():
+    desk = _desk(cohort([(day(2015) + 7 * i, 0, 200, "lost") for i in range(300)], CLOSING))
+    assert _refusal(desk, "caseload.project") == ("nobody_under_care", None)
+    assert _answer(desk, "caseload.history")["today"] == {"total": 0, "by_duration": []}
+
+
+def test_no_register_is_refused():
+    assert _refusal(Desk(), "caseload.history") == ("no_register", None)
+    assert _refusal(Desk(), "caseload.project") == ("no_register", None)
+
+
+def test_patients_under_care_but_long_unseen_are_said():
+    rows = [(day(2015) + 20 * i, 0, CLOSING - day(2015) - 20 * i, "under_care") for i in range(90)]
+    rows += [(day(2016) + 20 * i, 0, 60, "under_care") for i in range(30)]
+    cautions = _answer(_desk(cohort(rows, CLOSING)), "caseload.history")["cautions"]
+    said = {caution["code"]: caution["parameters"] for caution in cautions}
+    assert said["under_care_long_unseen"] == {"count": 30, "share": 0.25, "days": 365}
+
+
+def test_a_closing_date_on_29_february_goes_on_to_the_28th():
+    rows = [(day(2015) + 20 * i, 0, 100, "under_care") for i in range(90)]
+    told = _answer(_desk(cohort(rows, day(2020, 2, 29))), "caseload.project", years=4, draws=100)
+    assert [year["ends"] for year in told["years"]] == ["2021-02-28", "2022-02-28", "2023-02-28", "2024-02-29"]
