@@ -9,6 +9,7 @@ from __future__ import annotations
 
 import dataclasses
 import math
+import sys
 import types
 from dataclasses import dataclass
 from typing import Annotated, Any, Literal, Union, get_args, get_origin, get_type_hints
@@ -88,7 +89,8 @@ def _value(hint: Any, given: Any, path: str) -> Any:
 
 def _scalar(hint: type, given: Any, path: str) -> Any:
     if hint is float and isinstance(given, int) and not isinstance(given, bool):
-        given = float(given)
+        # A whole number may be too great for a float; infinity is then refused below.
+        given = float(given) if abs(given) <= sys.float_info.max else math.inf
     if hint is int and isinstance(given, float) and given.is_integer():
         given = int(given)
     if hint is bytes and isinstance(given, (bytearray, memoryview)):

@@ -4,6 +4,7 @@ from __future__ import annotations
 
 import dataclasses
 import math
+from collections.abc import Mapping
 from typing import Any
 
 import numpy as np
@@ -32,13 +33,15 @@ def _plain(value: Any, path: str, nulls: list[dict[str, Any]]) -> Any:
         nulls.append({"path": path, "at": None, "reason": _reason(number)})
         return None
     if isinstance(value, np.ndarray):
+        if value.ndim == 0:
+            return _plain(value.item(), path, nulls)
         return _array(value, path, nulls)
     if dataclasses.is_dataclass(value):
         return {
             field.name: _plain(getattr(value, field.name), _under(path, field.name), nulls)
             for field in dataclasses.fields(value)
         }
-    if isinstance(value, dict):
+    if isinstance(value, Mapping):
         return {str(key): _plain(item, _under(path, str(key)), nulls) for key, item in value.items()}
     if isinstance(value, (list, tuple)):
         return [_plain(item, _under(path, str(i)), nulls) for i, item in enumerate(value)]

@@ -109,15 +109,15 @@ def count_risk(entry: np.ndarray, exit: np.ndarray, outcome: np.ndarray) -> Risk
     width = len(MEANINGS)
     last = int(exit.max()) if len(exit) else 0
     if last <= _LONGEST_COUNTED_DIRECTLY:
-        per_day = np.bincount(exit * width + outcome, minlength=(last + 1) * width).reshape(-1, width)
-        came = np.bincount(entry[late], minlength=last + 1)
-        time = np.flatnonzero(per_day.any(axis=1) | (came > 0))
+        per_day = _counted(exit * width + outcome, (last + 1) * width).reshape(-1, width)
+        came = _counted(entry[late], last + 1)
+        time = np.flatnonzero(per_day.any(axis=1) | (came > 0)).astype(np.int64)
         left, entered = per_day[time], came[time]
     else:
         time = np.unique(np.concatenate((exit, entry[late])))
         row = np.searchsorted(time, exit)
-        left = np.bincount(row * width + outcome, minlength=len(time) * width).reshape(-1, width)
-        entered = np.bincount(np.searchsorted(time, entry[late]), minlength=len(time))
+        left = _counted(row * width + outcome, len(time) * width).reshape(-1, width)
+        entered = _counted(np.searchsorted(time, entry[late]), len(time))
     from_start = int(len(entry) - np.count_nonzero(late))
     change = np.cumsum(entered - left.sum(axis=1))
     return RiskTable(
@@ -130,6 +130,14 @@ def count_risk(entry: np.ndarray, exit: np.ndarray, outcome: np.ndarray) -> Risk
         person_days=int(np.sum(exit - entry)),
         never_at_risk=never_at_risk,
     )
+
+
+def _counted(positions: np.ndarray, length: int) -> np.ndarray:
+    """Count positions into an array of 64-bit integers, also where an address has only 32 bits.
+
+    In WebAssembly bincount takes and gives 32-bit integers, in which products of counts overflow.
+    """
+    return np.bincount(positions.astype(np.intp, copy=False), minlength=length).astype(np.int64, copy=False)
 
 
 def risk_tables_by(cohort: Cohort, group: str | None) -> dict[str | None, RiskTable]:

@@ -9,6 +9,7 @@ speaks only of patients who had come that far.
 from __future__ import annotations
 
 from dataclasses import dataclass
+from itertools import pairwise
 
 import numpy as np
 
@@ -117,7 +118,7 @@ def span(table: RiskTable, parts: list[Stretch]) -> Span:
     """Return the days covered by the stretches of a table."""
     restarts = tuple(
         Restart(int(table.time[before.stop - 1]), after.begins)
-        for before, after in zip(parts, parts[1:], strict=False)
+        for before, after in pairwise(parts)
     )
     return Span(parts[0].begins, int(table.time[-1]), restarts)
 
