@@ -19,6 +19,8 @@ place-caseload = Caseload
 place-counts = From counts
 place-report = Report
 
+needs-javascript = Vitalroll needs JavaScript, which is switched off in this browser.
+
 ## The engine's start and the seal
 
 engine-stage-waiting = Getting ready…

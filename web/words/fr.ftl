@@ -19,6 +19,8 @@ place-caseload = File active
 place-counts = À partir de totaux
 place-report = Rapport
 
+needs-javascript = Vitalroll a besoin de JavaScript, désactivé dans ce navigateur.
+
 ## The engine's start and the seal
 
 engine-stage-waiting = Préparation…

@@ -1,0 +1,43 @@
+"""Set up, build and run every test: ``python3 build_scripts/check.py``."""
+
+import argparse
+import subprocess
+import sys
+
+import environment
+
+ROOMS = ["unit", "reference", "build", "wasm", "browser"]
+
+
+def main():
+    """Carry out the command."""
+    asked = argparse.ArgumentParser(description="Set up, build and check Vitalroll.")
+    asked.add_argument("--only", choices=ROOMS, action="append", help="only these tests (may be given several times)")
+    options = asked.parse_args()
+    environment.enter("check")
+
+    from browsers import chromium
+    from make_dist import WEB, build
+    from node import node_and_npm
+
+    rooms = options.only or ROOMS
+    if "browser" in rooms:
+        chromium()
+    build()
+    node, _ = node_and_npm()
+    steps = [
+        ("Style of the Python", [sys.executable, "-m", "ruff", "check", "."]),
+        ("Types of the page", [node, str(WEB / "node_modules" / "typescript" / "bin" / "tsc"), "-p", str(WEB)]),
+        ("Tests", [sys.executable, "-m", "pytest", *["tests/%s" % room for room in rooms]]),
+    ]
+    failed = []
+    for name, command in steps:
+        print("== %s" % name, flush=True)
+        if subprocess.run(command, cwd=str(environment.HOUSE)).returncode:
+            failed.append(name)
+    if failed:
+        sys.exit("Failed: %s." % ", ".join(failed))
+
+
+if __name__ == "__main__":
+    main()

@@ -1,0 +1,50 @@
+/** The seal: from here on the browser refuses every request of this page and of its worker. */
+import policies from './policy.json';
+
+const PATIENCE_MS = 3000;
+
+/** Put the sealing policy beside the one the page came with; it can be added but never taken away. */
+export function seal(document) {
+  const meta = document.createElement('meta');
+  meta.setAttribute('http-equiv', 'Content-Security-Policy');
+  meta.setAttribute('content', policies.sealed);
+  document.head.append(meta);
+  closeSideDoors();
+}
+
+/** What no policy of today closes: peer connections are taken away before a register can be opened. */
+function closeSideDoors() {
+  for (const name of ['RTCPeerConnection', 'webkitRTCPeerConnection', 'RTCDataChannel', 'WebTransport']) {
+    if (name in globalThis) Object.defineProperty(globalThis, name, { value: undefined, writable: false, configurable: false });
+  }
+}
+
+/**
+ * Try harmless requests to the page's own address and see the browser refuse them.
+ * @returns {Promise<{ sealed: boolean, tried: number, refused: number }>}
+ */
+export async function provesSealed() {
+  const attempts = [tryFetch, tryImage];
+  const refused = (await Promise.all(attempts.map((attempt) => attempt()))).filter(Boolean).length;
+  return { sealed: refused === attempts.length, tried: attempts.length, refused };
+}
+
+/** True when the policy itself, not a missing network, refused the request. */
+function refusedByPolicy(directive, request) {
+  return new Promise((settle) => {
+    const heard = (event) => {
+      if (event.effectiveDirective !== directive) return;
+      document.removeEventListener('securitypolicyviolation', heard);
+      settle(true);
+    };
+    document.addEventListener('securitypolicyviolation', heard);
+    setTimeout(() => settle(false), PATIENCE_MS);
+    request();
+  });
+}
+
+const tryFetch = () => refusedByPolicy('connect-src', () => fetch('seal-proof', { cache: 'no-store' }).catch(() => null));
+
+const tryImage = () => refusedByPolicy('img-src', () => {
+  new Image().src = new URL('seal-proof.png', document.baseURI).href;
+});
