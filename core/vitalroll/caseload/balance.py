@@ -174,7 +174,11 @@ def occupancy(arrivals_per_year: float, stay_years: float, places: float) -> Occ
     mean = arrivals_per_year * stay_years if arrivals_per_year > 0 else 0.0
     if mean >= places:
         raise Refusal(
-            "utilisation_at_or_above_one", field="places", utilisation=mean / places, places=places, needed=mean
+            "utilisation_at_or_above_one",
+            field="places",
+            utilisation=mean / places,
+            places=places,
+            needed=mean,
         )
     # pdtrik returns where the distribution function, made continuous, crosses 0.95.
     taken = math.ceil(float(pdtrik(0.95, mean))) if mean > 0 else 0

@@ -233,9 +233,7 @@ def _cautions_about_arrivals(
         cautions.append(Caution("old_cases_not_newcomers", {"count": old}))
     late = int(np.count_nonzero(newcomer & (cohort.entry > 0)))
     if late > _SHARE_SEEN_LATE_WORTH_SAYING * len(arrivals):
-        cautions.append(
-            Caution("newcomers_seen_late", {"count": late, "share": late / len(arrivals)})
-        )
+        cautions.append(Caution("newcomers_seen_late", {"count": late, "share": late / len(arrivals)}))
     if len(arrivals):
         silent = cohort.closing - int(arrivals[-1])
         if math.exp(-per_year * silent / DAYS_PER_YEAR) < _CHANCE_OF_A_SILENT_END:

@@ -2,7 +2,6 @@
 
 from __future__ import annotations
 
-from collections.abc import Callable
 from dataclasses import dataclass
 
 import numpy as np
@@ -18,7 +17,7 @@ from vitalroll.caseload.projection import (
 from vitalroll.caseload.resources import PerPatientYear
 from vitalroll.caseload.retention import Retention
 from vitalroll.caseload.scenario import WhatIf
-from vitalroll.caseload.uncertainty import Band, Course, bands, redraw
+from vitalroll.caseload.uncertainty import Band, Course, Report, bands, no_report, redraw
 from vitalroll.errors import Refusal
 from vitalroll.outcomes.competing import WAYS_OF_LEAVING
 from vitalroll.register.cohort import DEATHS
@@ -89,7 +88,7 @@ def prospect(
     what_if: WhatIf | None = None,
     draws: int = 1000,
     seed: int = 1,
-    report: Callable[[str, int, int], None] = lambda stage, done, total: None,
+    report: Report = no_report,
 ) -> Prospect:
     """Project the caseload with its uncertainty; parameters as for ``uncertainty.redraw``.
 

@@ -140,8 +140,9 @@ def _exits_between(table: RiskTable, edges: np.ndarray) -> np.ndarray:
     """
     upto = np.searchsorted(table.time, edges * DAYS_PER_YEAR, side="right")
     upto[0] = 0
-    counts = np.vstack((np.zeros((1, len(WAYS_OF_LEAVING)), dtype=np.int64), np.cumsum(table.left[:, 1:], axis=0)))
-    return np.diff(counts[upto], axis=0)
+    nobody = np.zeros((1, len(WAYS_OF_LEAVING)), dtype=np.int64)
+    left = np.vstack((nobody, np.cumsum(table.left[:, 1:], axis=0)))
+    return np.diff(left[upto], axis=0)
 
 
 def _under_observation(table: RiskTable, years: np.ndarray) -> np.ndarray:

@@ -17,11 +17,18 @@ from vitalroll.caseload.retention import Retention
 from vitalroll.caseload.scenario import WhatIf
 from vitalroll.errors import Refusal
 
+Report = Callable[[str, int, int], None]
+"""Called now and then with (stage, done, total)."""
+
 _DRAWS_AT_A_TIME = 100
 """Small enough that one chunk's patients stay in the processor's cache."""
 
 _SHAPE_WITHOUT_EXITS = 0.5
 """Gamma shape for the hazard of a stretch in which nobody left (Jeffreys' prior, no events)."""
+
+
+def no_report(stage: str, done: int, total: int) -> None:
+    """Report to nobody."""
 
 
 @dataclass(frozen=True)
@@ -76,7 +83,7 @@ def redraw(
     what_if: WhatIf | None = None,
     draws: int = 1000,
     seed: int = 1,
-    report: Callable[[str, int, int], None] = lambda stage, done, total: None,
+    report: Report = no_report,
 ) -> Draws:
     """Draw rates and counts again and again and run the caseload forward with each.
 
@@ -219,9 +226,7 @@ class _Change:
         # from asking that the what-if's staying be exactly its own: staying' =
         # staying + (1 - staying) prevented (1 - again).
         reached = self._prevented * (1 - staying)
-        kept = np.divide(
-            staying_changed - staying, reached, out=np.ones_like(reached), where=reached > 0
-        )
+        kept = np.divide(staying_changed - staying, reached, out=np.ones_like(reached), where=reached > 0)
         self._again = np.clip(1 - kept, 0, 1)
         self._missing = np.zeros((draws, axis.slots), dtype=np.int64)
         self._extra = np.zeros((draws, axis.slots), dtype=np.int64)

@@ -241,7 +241,8 @@ def _stretches(hazards: Retention) -> list[dict[str, Any]]:
 def _by_duration(months_here: np.ndarray) -> list[dict[str, int]]:
     counts = np.bincount(months_here // MONTHS_PER_YEAR)
     return [
-        {"from_years": year, "to_years": year + 1, "count": count} for year, count in enumerate(counts.tolist())
+        {"from_years": year, "to_years": year + 1, "count": count}
+        for year, count in enumerate(counts.tolist())
     ]
 
 
@@ -261,9 +262,7 @@ def _course(outlook: Outlook) -> dict[str, Any]:
         "newcomers": outlook.newcomers.bands(),
         "deaths": outlook.deaths.bands(),
         "lost": outlook.lost.bands(),
-        "leaving": [
-            {"meaning": way, "values": measure.bands()} for way, measure in outlook.leaving.items()
-        ],
+        "leaving": [{"meaning": way, "values": measure.bands()} for way, measure in outlook.leaving.items()],
         "resources": {name: measure.bands() for name, measure in outlook.resources.items()},
     }
 

@@ -37,11 +37,11 @@ def _lives(random: np.random.Generator) -> tuple[np.ndarray, np.ndarray]:
 def _register(arrival: np.ndarray, leaving: np.ndarray) -> Cohort:
     seen = arrival < 0
     start = CLOSING + np.floor(arrival[seen] * DAYS_PER_YEAR).astype(int)
-    exit = np.minimum(CLOSING, CLOSING + np.floor(leaving[seen] * DAYS_PER_YEAR).astype(int)) - start
+    seen_for = np.minimum(CLOSING, CLOSING + np.floor(leaving[seen] * DAYS_PER_YEAR).astype(int)) - start
     gone = leaving[seen] < 0
     return Cohort(
         entry=np.zeros(len(start), dtype=int),
-        exit=np.maximum(exit, 0),
+        exit=np.maximum(seen_for, 0),
         outcome=np.where(gone, meaning_code("lost"), meaning_code("under_care")),
         start=start,
         line=np.arange(len(start)) + 2,
@@ -68,9 +68,7 @@ def test_bands_hold_the_truth_as_often_as_they_say():
             draws=200,
             seed=trial,
         )
-        low95, low80, high80, high95 = np.quantile(
-            drawn.baseline.under_care[:, -1], (0.025, 0.1, 0.9, 0.975)
-        )
+        low95, low80, high80, high95 = np.quantile(drawn.baseline.under_care[:, -1], (0.025, 0.1, 0.9, 0.975))
         truth = np.count_nonzero((arrival <= HORIZON) & (leaving > HORIZON))
         held80 += low80 <= truth <= high80
         held95 += low95 <= truth <= high95

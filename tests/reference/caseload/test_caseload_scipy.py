@@ -87,7 +87,8 @@ def test_hazards_by_time_since_start_agree_with_the_survival_integral():
     today = np.random.default_rng(3).integers(0, 70, 500)
 
     def survival(years: np.ndarray) -> np.ndarray:
-        spent = np.minimum(np.maximum(np.asarray(years)[..., np.newaxis] - np.arange(4), 0), [1, 1, 1, np.inf])
+        past = np.maximum(np.asarray(years)[..., np.newaxis] - np.arange(4), 0)
+        spent = np.minimum(past, [1, 1, 1, np.inf])
         return np.exp(-(spent @ rates))
 
     path = project(today, _hazards(yearly), 90.0, years=6)
@@ -102,7 +103,7 @@ def test_hazards_by_time_since_start_agree_with_the_survival_integral():
 def test_the_caseload_at_constant_rate_solves_its_equation():
     found = balance(320, 75, 48, years=10)
     solved = integrate.solve_ivp(
-        lambda t, p: 75 - 0.15 * p, (0, 10), [320.0], t_eval=range(11), rtol=1e-10, atol=1e-9
+        lambda _, p: 75 - 0.15 * p, (0, 10), [320.0], t_eval=range(11), rtol=1e-10, atol=1e-9
     )
     path = [point.under_care_at_constant_rate for point in found.path]
     np.testing.assert_allclose(path, solved.y[0], rtol=1e-8)

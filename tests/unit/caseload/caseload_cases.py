@@ -21,10 +21,10 @@ def day(year: int, month: int = 1, day_of_month: int = 1) -> int:
 
 def cohort(rows: list[tuple[int, int, int, str]], closing: int) -> Cohort:
     """Build a cohort from (start ordinal, entry days, exit days, meaning)."""
-    start, entry, exit, meaning = zip(*rows, strict=True)
+    start, entry, leaving, meaning = zip(*rows, strict=True)
     return Cohort(
         entry=np.array(entry),
-        exit=np.array(exit),
+        exit=np.array(leaving),
         outcome=np.array([meaning_code(word) for word in meaning]),
         start=np.array(start),
         line=np.arange(len(rows)) + 2,

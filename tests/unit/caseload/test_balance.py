@@ -44,7 +44,7 @@ def test_lung_cancer_in_connecticut():
 
 
 @given(st.floats(1, 1e5), st.floats(0.1, 1e4), st.floats(0.1, 1e4), st.integers(1, 30))
-def test_the_path_at_constant_rate_goes_to_the_steady_state_and_starts_as_the_balance(now, new, leaving, years):
+def test_at_a_constant_rate_the_caseload_goes_to_its_steady_state(now, new, leaving, years):
     found = balance(now, new, leaving, years=years)
     path = [point.under_care_at_constant_rate for point in found.path]
     assert path[0] == pytest.approx(now)

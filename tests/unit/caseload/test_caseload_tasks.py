@@ -120,7 +120,8 @@ def test_typed_newcomers_are_used_and_need_their_number(desk):
 
 
 def test_a_horizon_longer_than_the_history_is_said(desk):
-    codes = {c["code"]: c["parameters"] for c in _answer(desk, "caseload.project", years=12, draws=100)["cautions"]}
+    cautions = _answer(desk, "caseload.project", years=12, draws=100)["cautions"]
+    codes = {caution["code"]: caution["parameters"] for caution in cautions}
     assert codes["horizon_beyond_history"]["years"] == 12
     assert codes["horizon_beyond_history"]["history_years"] == pytest.approx(7, abs=0.2)
     assert codes["hazard_held"]["share"] > 0.25
@@ -176,4 +177,5 @@ def test_patients_under_care_but_long_unseen_are_said():
 def test_a_closing_date_on_29_february_goes_on_to_the_28th():
     rows = [(day(2015) + 20 * i, 0, 100, "under_care") for i in range(90)]
     told = _answer(_desk(cohort(rows, day(2020, 2, 29))), "caseload.project", years=4, draws=100)
-    assert [year["ends"] for year in told["years"]] == ["2021-02-28", "2022-02-28", "2023-02-28", "2024-02-29"]
+    ends = [year["ends"] for year in told["years"]]
+    assert ends == ["2021-02-28", "2022-02-28", "2023-02-28", "2024-02-29"]

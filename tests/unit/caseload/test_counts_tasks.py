@@ -44,9 +44,8 @@ LEAVING = [{"label": "died", "per_year": 10}, {"label": "lost <b>", "per_year": 
 
 
 def test_a_balance_from_counts():
-    told = _answer(
-        "counts.balance", prevalent=200, new_per_year=50, leaving=LEAVING, years=2, population=100_200, places=300
-    )
+    counts = {"prevalent": 200, "new_per_year": 50, "leaving": LEAVING, "population": 100_200}
+    told = _answer("counts.balance", **counts, years=2, places=300)
     assert [point["under_care"] for point in told["path"]] == [200, 210, 220]
     assert told["leaving_per_year"] == 40
     assert told["leaving"][1] == {"label": "lost <b>", "per_year": 30, "share": 0.75, "turnover": 15}
@@ -64,7 +63,8 @@ def test_too_few_places_are_a_caution_beside_the_balance():
 
 
 def test_a_balance_without_leaving_has_no_steady_state():
-    answered = Desk().answer("counts.balance", {"prevalent": 20, "new_per_year": 5, "leaving": [], "places": 9})
+    counts = {"prevalent": 20, "new_per_year": 5, "leaving": [], "places": 9}
+    answered = Desk().answer("counts.balance", counts)
     assert answered["answer"]["steady_state"] is None
     assert {"path": "steady_state", "at": None, "reason": "plus_infinity"} in answered["nulls"]
     assert answered["answer"]["occupancy"] is None
@@ -75,7 +75,8 @@ def test_balances_that_cannot_be_are_refused():
         "nobody_under_care",
         "prevalent",
     )
-    assert _refusal("counts.balance", prevalent=5, new_per_year=5, leaving=[{"label": "x", "per_year": -1}]) == (
+    fewer = [{"label": "x", "per_year": -1}]
+    assert _refusal("counts.balance", prevalent=5, new_per_year=5, leaving=fewer) == (
         "out_of_range",
         "leaving.0.per_year",
     )

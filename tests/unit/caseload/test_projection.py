@@ -53,9 +53,7 @@ def test_nobody_leaving_gives_the_balance():
 def test_littles_law_holds_in_the_steady_state():
     """Caseload = newcomers a year x mean stay, with hazards that change with time since start."""
     hazards = [0.9, 0.5, 0.7]
-    path = project(
-        np.zeros(1, dtype=int), known_hazards(*({"lost": h} for h in hazards)), 100.0, years=40
-    )
+    path = project(np.zeros(1, dtype=int), known_hazards(*({"lost": h} for h in hazards)), 100.0, years=40)
     reached = np.exp(-np.concatenate(([0], np.cumsum(hazards))))
     mean_stay = sum((reached[i] - reached[i + 1]) / h for i, h in enumerate(hazards))
     mean_stay += reached[3] / hazards[-1]

@@ -95,7 +95,9 @@ def test_nobody_observed_for_a_day_is_refused():
 
 @given(
     st.lists(
-        st.tuples(st.integers(0, 3000), st.integers(0, 3000), st.sampled_from(["lost", "under_care", "stopped"])),
+        st.tuples(
+            st.integers(0, 3000), st.integers(0, 3000), st.sampled_from(["lost", "under_care", "stopped"])
+        ),
         min_size=1,
         max_size=40,
     )
@@ -105,9 +107,9 @@ def test_person_time_is_exact_and_no_exit_is_dropped(rows):
     rows = [(min(a, b), max(a, b), way) for a, b, way in rows]
     table = risk_table(cohort([(START, *row) for row in rows], CLOSING))
     edges = np.arange(10.0)
-    entry, exit = np.array([row[0] for row in rows]), np.array([row[1] for row in rows])
+    entry, leaving = np.array([row[0] for row in rows]), np.array([row[1] for row in rows])
     slow = [
-        np.sum(np.clip(exit, a, b) - np.clip(entry, a, b)) / DAYS_PER_YEAR
+        np.sum(np.clip(leaving, a, b) - np.clip(entry, a, b)) / DAYS_PER_YEAR
         for a, b in zip(edges[:-1] * DAYS_PER_YEAR, edges[1:] * DAYS_PER_YEAR, strict=True)
     ]
     np.testing.assert_allclose(person_years_between(table, edges), slow, rtol=1e-12, atol=1e-9)

@@ -43,9 +43,7 @@ percentages = st.floats(0, 100)
 
 @settings(max_examples=25, deadline=None)
 @given(
-    st.lists(
-        st.lists(st.integers(0, 30), min_size=7, max_size=7).map(np.array), min_size=1, max_size=4
-    ),
+    st.lists(st.lists(st.integers(0, 30), min_size=7, max_size=7).map(np.array), min_size=1, max_size=4),
     st.lists(st.integers(0, 80), min_size=1, max_size=40),
     st.floats(0, 90),
     st.builds(WhatIf, percentages, percentages, percentages, st.integers(1, 3)),
@@ -54,9 +52,8 @@ percentages = st.floats(0, 100)
 def test_every_patient_is_somewhere_in_every_draw_with_and_without_the_change(
     exits, today, newcomers, what_if, seed
 ):
-    hazards = Retention(
-        np.arange(len(exits) + 1.0), np.zeros(len(exits), int), np.full(len(exits), 60.0), np.array(exits), 0, 0
-    )
+    n = len(exits)
+    hazards = Retention(np.arange(n + 1.0), np.zeros(n, int), np.full(n, 60.0), np.array(exits), 0, 0)
     drawn = redraw(
         np.array(today), hazards, inflow_typed(newcomers), years=3, what_if=what_if, draws=5, seed=seed
     )
@@ -66,9 +63,7 @@ def test_every_patient_is_somewhere_in_every_draw_with_and_without_the_change(
         assert course.under_care.min() >= 0
         assert course.leaving.min() >= 0
     before = 12 * (what_if.from_year - 1) + 1
-    np.testing.assert_array_equal(
-        drawn.what_if.under_care[:, :before], drawn.baseline.under_care[:, :before]
-    )
+    np.testing.assert_array_equal(drawn.what_if.under_care[:, :before], drawn.baseline.under_care[:, :before])
 
 
 def test_draws_with_known_rates_are_centred_on_what_is_expected():
@@ -99,6 +94,20 @@ def test_the_what_if_varies_as_a_register_with_those_hazards_would():
         assert abs(mine.mean() - other.mean()) < 4 * pooled
         # The ratio of two sample variances of 3000 has a standard error of sqrt(4/3000) = 0.037.
         assert abs(math.log(mine.var() / other.var())) < 4 * 0.037
+
+
+def test_who_is_kept_may_still_leave_in_the_same_month():
+    # Half a hazard of 12 a year is kept: exp(-0.5) stay through a month, newcomers (1 - exp(-0.5))/0.5.
+    drawn = redraw(
+        np.full(500, 300),
+        known_hazards({"lost": 12.0}),
+        inflow_typed(6000.0),
+        years=1,
+        what_if=WhatIf(fewer_lost=50),
+        draws=2000,
+    )
+    expected = 500 * math.exp(-0.5) + 500 * (1 - math.exp(-0.5)) / 0.5
+    assert _apart(drawn.what_if.under_care[:, 1:2], np.array([expected])) < 4
 
 
 def test_chance_alone_spreads_as_the_binomial_and_the_poisson():
@@ -174,10 +183,10 @@ def test_newcomers_who_stay_away_are_missing_from_the_caseload():
 
 
 def test_a_seed_gives_the_same_draws_and_the_baseline_does_not_depend_on_the_what_if():
-    one = redraw(TODAY, HAZARDS, inflow_typed(90.0), years=2, draws=150, seed=9)
-    same = redraw(TODAY, HAZARDS, inflow_typed(90.0), years=2, draws=150, seed=9)
-    beside = redraw(TODAY, HAZARDS, inflow_typed(90.0), years=2, draws=150, seed=9, what_if=WhatIf(10, 10, 10))
-    other = redraw(TODAY, HAZARDS, inflow_typed(90.0), years=2, draws=150, seed=10)
+    def run(seed, what_if=None):
+        return redraw(TODAY, HAZARDS, inflow_typed(90.0), years=2, draws=150, seed=seed, what_if=what_if)
+
+    one, same, other, beside = run(9), run(9), run(10), run(9, WhatIf(10, 10, 10))
     np.testing.assert_array_equal(one.baseline.leaving, same.baseline.leaving)
     np.testing.assert_array_equal(one.baseline.under_care, beside.baseline.under_care)
     np.testing.assert_array_equal(one.baseline.newcomers, beside.baseline.newcomers)
