@@ -28,7 +28,15 @@ def test_results_of_every_kind():
     result = Result(
         Estimate(0.5, 0.25, nan, float("inf")),
         np.array([[1, 2], [3, 4]]),
-        (np.int64(3), np.bool_(True), np.float64(0.1), None, "é", MappingProxyType({"a": -np.inf}), np.array(2.5)),
+        (
+            np.int64(3),
+            np.bool_(True),
+            np.float64(0.1),
+            None,
+            "é",
+            MappingProxyType({"a": -np.inf}),
+            np.array(2.5),
+        ),
     )
     found, nulls = plain(result)
     assert found == {

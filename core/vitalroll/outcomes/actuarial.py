@@ -147,8 +147,8 @@ def life_table(
     Returns
     -------
     LifeTable
-        One row per interval up to the last day anyone was seen; intervals in which nobody was
-        under observation have none. See ``tabulate`` for formulas and cautions.
+        One row per interval up to the last day anyone was seen; intervals with an effective number
+        of 0 have none. See ``tabulate`` for formulas and cautions.
 
     Raises
     ------
@@ -316,6 +316,9 @@ def _hazard(effective: float, events: int, width: float, confidence: float) -> E
 def _cautions(
     counts: GroupedCounts, rows: Sequence[LifeTableRow], restarts: list[tuple[float, float]]
 ) -> tuple[Caution, ...]:
+    if not rows:
+        # All came late and left in the interval they came in: halves in, halves out, nothing remains.
+        return (Caution("few_effective", {"from_days": float(counts.edges[0]), "effective": 0.0}),)
     found = []
     few = next((row for row in rows if row.effective < FEW_EFFECTIVE), None)
     if few is not None:

@@ -69,9 +69,7 @@ class Leaving:
         )
 
 
-def leaving(
-    table: RiskTable, *, ways: Sequence[str] = WAYS_OF_LEAVING, confidence: float = 0.95
-) -> Leaving:
+def leaving(table: RiskTable, *, ways: Sequence[str] = WAYS_OF_LEAVING, confidence: float = 0.95) -> Leaving:
     """Estimate the cumulative incidence of every way of leaving (Aalen & Johansen).
 
     Parameters

@@ -15,8 +15,11 @@ from vitalroll.register.cohort import Cohort, meaning_code
 
 @dataclass(frozen=True)
 class Bound:
-    """Survival at one time if all the lost had the outcome the day they were last seen, and if none
-    had it up to the closing date. NaN where nobody would have been followed that long."""
+    """Survival at one time under the worst and the best that can be supposed of the lost.
+
+    ``all_died``: all had the outcome the day they were last seen. ``none_died``: none had it up to
+    the closing date. NaN where nobody would have been followed that long.
+    """
 
     years: float
     all_died: float
@@ -66,9 +69,7 @@ def _lost_stay_to_closing(cohort: Cohort) -> Cohort:
     return replace(cohort, exit=np.where(lost, to_closing, cohort.exit))
 
 
-def _losses(
-    table: RiskTable, stayed: RiskTable, interest: Collection[str], years: Sequence[float]
-) -> Losses:
+def _losses(table: RiskTable, stayed: RiskTable, interest: Collection[str], years: Sequence[float]) -> Losses:
     lost = int(table.left_by("lost").sum())
     worst = product_limit(table, {*interest, "lost"})
     best = worst if "lost" in interest else product_limit(stayed, interest)

@@ -117,8 +117,7 @@ def stretches(table: RiskTable, at_risk: np.ndarray, events: np.ndarray) -> list
 def span(table: RiskTable, parts: list[Stretch]) -> Span:
     """Return the days covered by the stretches of a table."""
     restarts = tuple(
-        Restart(int(table.time[before.stop - 1]), after.begins)
-        for before, after in pairwise(parts)
+        Restart(int(table.time[before.stop - 1]), after.begins) for before, after in pairwise(parts)
     )
     return Span(parts[0].begins, int(table.time[-1]), restarts)
 

@@ -1,6 +1,7 @@
 """The actuarial life table."""
 
 import math
+from itertools import pairwise
 
 import numpy as np
 import pytest
@@ -105,7 +106,7 @@ def test_agrees_with_counting_patients(rows, step):
     edges = interval_edges(step, 60)
     counts = grouped_counts(count_risk(entry, exit, outcome), DIED, edges)
     died, lost = outcome == MEANINGS.index("died_of_disease"), outcome == MEANINGS.index("lost")
-    for i, (a, b) in enumerate(zip(edges[:-1], edges[1:], strict=True)):
+    for i, (a, b) in enumerate(pairwise(edges)):
         inside = (exit > a) & (exit <= b) | (exit == 0) & (i == 0)
         assert counts.events[i] == (inside & died).sum()
         assert counts.lost[i] == (inside & lost).sum()
@@ -155,6 +156,15 @@ def test_an_emptied_risk_set_starts_survival_again(table_of):
     assert [row.from_days / DAYS_PER_YEAR for row in table.rows] == [0, 2]
     assert table.rows[1].survival.value == 0.0  # two came late: half of them, 1, is the one that died
     assert [c.code for c in table.cautions] == ["few_effective", "risk_set_emptied"]
+
+
+def test_nobody_effective_makes_no_rows(table_of):
+    """One who came late and left in the same interval counts half in and half out."""
+    table = life_table(table_of([200], "+", entries=[100]), DIED)
+    assert table.rows == ()
+    assert [(c.code, dict(c.parameters)) for c in table.cautions] == [
+        ("few_effective", {"from_days": 0, "effective": 0})
+    ]
 
 
 def test_late_beginning_is_said(table_of):

@@ -1,6 +1,7 @@
 """The tasks behind the Outcomes place, through the desk's door."""
 
 import json
+from itertools import pairwise
 
 import numpy as np
 import pytest
@@ -9,7 +10,7 @@ from vitalroll.desk.door import Desk
 from vitalroll.numbers import DAYS_PER_YEAR
 from vitalroll.outcomes.product_limit import product_limit
 from vitalroll.outcomes.risk_table import risk_table
-from vitalroll.register.cohort import DEATHS, MEANINGS, Cohort
+from vitalroll.register.cohort import DEATHS, MEANINGS, Categorical, Cohort
 
 
 @pytest.fixture
@@ -32,8 +33,6 @@ def clinic():
     start = 730_000 + rng.integers(0, 2500, n)
     exit = np.minimum(rng.exponential(2500, n).astype(int) + 1, closing - start)
     under_care = exit == closing - start
-    from vitalroll.register.cohort import Categorical
-
     return Cohort(
         entry=np.where(rng.random(n) < 0.1, exit // 3, 0),
         exit=exit,
@@ -129,7 +128,8 @@ def test_times_beyond_follow_up_are_said_to_be(ask, cohort_of):
     early, late = reply["answer"]["curves"][0]["at_years"]
     assert (early["beyond_follow_up"], late["beyond_follow_up"]) == (False, True)
     assert late["estimate"]["value"] is None
-    assert {"path": "curves.0.at_years.1.estimate.value", "at": None, "reason": "not_a_number"} in reply["nulls"]
+    path = "curves.0.at_years.1.estimate.value"
+    assert {"path": path, "at": None, "reason": "not_a_number"} in reply["nulls"]
 
 
 def test_a_group_that_was_lost_entirely_has_bounds_only(ask, cohort_of):
@@ -181,7 +181,7 @@ def test_life_table_accounts_for_everybody(ask, clinic):
     reply = ask(clinic, "life_table", step="quarter")["answer"]
     rows = reply["tables"][0]["rows"]
     assert reply["step"] == "quarter"
-    for before, after in zip(rows, rows[1:], strict=False):
+    for before, after in pairwise(rows):
         left = before["lost"] + before["withdrawn"] + before["events"]
         assert after["entering"] == before["entering"] + before["joined"] - left
     assert sum(row["events"] for row in rows) == np.isin(clinic.outcome, [1, 2, 3]).sum()
@@ -206,7 +206,8 @@ def test_leaving_names_only_ways_that_occurred_in_some_group(ask, cohort_of):
     """The same ways in every group, so that they can be set side by side."""
     cohort = cohort_of([1, 2, 3, 4], "d++l", groups=["a", "a", "b", "b"])
     groups = ask(cohort, "leaving", group="c0")["answer"]["groups"]
-    assert [[way["meaning"] for way in group["ways"]] for group in groups] == [["died_of_disease", "lost"]] * 2
+    for group in groups:
+        assert [way["meaning"] for way in group["ways"]] == ["died_of_disease", "lost"]
 
 
 @pytest.mark.parametrize(

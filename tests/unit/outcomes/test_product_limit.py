@@ -258,7 +258,11 @@ def test_never_at_risk_is_said(table_of):
 
 @pytest.mark.parametrize(
     ("options", "code"),
-    [({"confidence": 95.0}, "out_of_range"), ({"confidence": 1.0}, "out_of_range"), ({"interval": "x"}, "not_one_of")],
+    [
+        ({"confidence": 95.0}, "out_of_range"),
+        ({"confidence": 1.0}, "out_of_range"),
+        ({"interval": "x"}, "not_one_of"),
+    ],
 )
 def test_options_that_make_no_sense_are_refused(table_of, options, code):
     """With the code and the field."""

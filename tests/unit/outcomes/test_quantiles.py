@@ -20,7 +20,10 @@ DIED = ("died_of_disease",)
 
 def in_days(quantile):
     found = quantile.estimate
-    return [None if math.isnan(x) else round(x * DAYS_PER_YEAR, 6) for x in (found.value, found.lower, found.upper)]
+    return [
+        None if math.isnan(x) else round(x * DAYS_PER_YEAR, 6)
+        for x in (found.value, found.lower, found.upper)
+    ]
 
 
 def test_aml_medians(table_of):
@@ -62,7 +65,10 @@ def test_not_reached_carries_its_lower_limit(table_of):
 def test_limits_do_not_depend_on_the_scale_of_the_curve(table_of):
     """Brookmeyer-Crowley limits are on the log-log scale even when the curve is not."""
     table = table_of(range(1, 31), "d" * 20 + "+" * 10)
-    limits = {str(in_days(time_quantile(product_limit(table, DIED, interval=i)))) for i in ("log-log", "log", "plain")}
+    limits = {
+        str(in_days(time_quantile(product_limit(table, DIED, interval=i))))
+        for i in ("log-log", "log", "plain")
+    }
     assert len(limits) == 1
 
 
@@ -104,11 +110,7 @@ def test_follow_up_is_not_reached_when_all_died(table_of):
     assert not follow_up_median(table_of([1, 2, 3], "ddd"), DIED).reached
 
 
-@given(
-    st.lists(
-        st.tuples(st.integers(0, 12), st.integers(0, len(MEANINGS) - 1)), min_size=1, max_size=40
-    )
-)
+@given(st.lists(st.tuples(st.integers(0, 12), st.integers(0, len(MEANINGS) - 1)), min_size=1, max_size=40))
 @settings(deadline=None)
 def test_survival_times_follow_up_is_the_share_under_observation(rows):
     """S(t) G(t) = share whose observation goes on after t, ties included."""

@@ -61,7 +61,7 @@ def test_agrees_with_counting_every_patient_on_every_day(rows):
         assert table.entered[i] == (seen & (entry == day) & (entry > 0)).sum()
     assert table.left.sum() == table.n == seen.sum()
     days = np.arange(0.5, 20, 0.75)
-    expected = [(seen & ((entry < day)) & (exit >= day)).sum() for day in days]
+    expected = [(seen & (entry < day) & (exit >= day)).sum() for day in days]
     assert table.at_risk_on(days).tolist() == expected
 
 
