@@ -144,7 +144,8 @@ survival-sentence-other = { $group }{ $survival } were free of the chosen outcom
    *[other] { $years } years
   } after starting (95 % interval { $interval }), judging from { $n } patients and { $events } outcomes.
 survival-sentence-short = { $group }follow-up of these { $n } patients is shorter than one year; read the curve as far as it goes.
-median-reached = Half had met it by { $median } years.
+median-reached = Half had met it by { $median } years (95 % interval { $lower } to { $upper }).
+median-reached-open = Half had met it by { $median } years (95 % interval from { $lower }; its upper limit was not reached).
 median-not-reached = Fewer than half had met it by the end of follow-up, so there is no median.
 survival-figure-deaths = Share still alive, by years since start
 survival-figure-other = Share still free of the outcome, by years since start
@@ -198,12 +199,15 @@ leaving-figure-described = A stacked area: those still under care at the bottom,
     [one] one way of leaving
    *[other] { $ways } ways of leaving
   }, together always 100 %. The table below holds the values.
-leaving-caption = Cumulative incidence of each way of leaving: { $group }
+leaving-caption = Cumulative incidence of each way of leaving, with 95 % limits: { $group }
 leaving-note = The last column shows what one minus survival would wrongly say, as if the other ways of leaving did not exist. Do not quote it.
 way-of-leaving = Way of leaving
 events-in-all = In all
-cumulative-incidence = Cumulative incidence (95 % limits)
-one-minus-survival = One minus survival (too high)
+by-years = By { $years ->
+    [one] { $years } year
+   *[other] { $years } years
+  }
+one-minus-survival = One minus survival at { $years } (too high)
 leaving-method = Aalen & Johansen (1978), all ways of leaving at once; variance as in Marubini & Valsecchi (1995).
 
 refusal-no_patients = There are no patients to describe.
@@ -296,7 +300,7 @@ strata-agree = The strata agree well enough to be pooled (Breslow-Day with Taron
 strata-differ = The strata differ from one another (Breslow-Day with Tarone's correction: chi-squared { $chi }, degrees of freedom { $df }, p { $p }): read them one by one; the pooled figure hides the difference.
 
 cox-title = Taking other things into account
-cox-choose-covariates = Tick what to take into account, below.
+cox-choose-covariates = Tick what to take into account.
 cox-covariates = Take into account
 cox-covariates-hint = Only what was known at the start. Leave out what the group itself may have changed.
 cox-reference = { $covariate }: compared with

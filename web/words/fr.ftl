@@ -144,7 +144,8 @@ survival-sentence-other = { $group }{ $survival } n’avaient pas connu l’év�
    *[other] { $years } ans
   } après le début (intervalle à 95 % : { $interval }), d’après { $n } patients et { $events } événements.
 survival-sentence-short = { $group }le suivi de ces { $n } patients est inférieur à un an ; lisez la courbe jusqu’où elle va.
-median-reached = La moitié l’avait connu à { $median } ans.
+median-reached = La moitié l’avait connu à { $median } ans (intervalle à 95 % : { $lower } à { $upper }).
+median-reached-open = La moitié l’avait connu à { $median } ans (intervalle à 95 % : à partir de { $lower } ; limite supérieure non atteinte).
 median-not-reached = Moins de la moitié l’avait connu à la fin du suivi : il n’y a pas de médiane.
 survival-figure-deaths = Part encore en vie, selon les années depuis le début
 survival-figure-other = Part n’ayant pas connu l’événement, selon les années depuis le début
@@ -198,12 +199,15 @@ leaving-figure-described = Une aire empilée : ceux encore suivis en bas, au-des
     [one] une façon de sortir
    *[other] { $ways } façons de sortir
   }, toujours 100 % ensemble. Le tableau ci-dessous contient les valeurs.
-leaving-caption = Incidence cumulée de chaque façon de sortir : { $group }
+leaving-caption = Incidence cumulée de chaque façon de sortir, avec limites à 95 % : { $group }
 leaving-note = La dernière colonne montre ce que « un moins la survie » dirait à tort, comme si les autres sorties n’existaient pas. Ne la citez pas.
 way-of-leaving = Façon de sortir
 events-in-all = En tout
-cumulative-incidence = Incidence cumulée (limites à 95 %)
-one-minus-survival = Un moins la survie (trop élevé)
+by-years = À { $years ->
+    [one] { $years } an
+   *[other] { $years } ans
+  }
+one-minus-survival = Un moins la survie à { $years } (trop élevé)
 leaving-method = Aalen & Johansen (1978), toutes les façons de sortir à la fois ; variance selon Marubini & Valsecchi (1995).
 
 refusal-no_patients = Il n’y a aucun patient à décrire.
@@ -296,7 +300,7 @@ strata-agree = Les strates concordent assez pour être regroupées (Breslow-Day 
 strata-differ = Les strates diffèrent entre elles (Breslow-Day corrigé par Tarone : khi-deux { $chi }, degrés de liberté { $df }, p { $p }) : lisez-les une à une ; le chiffre regroupé masque la différence.
 
 cox-title = En tenant compte d’autres facteurs
-cox-choose-covariates = Cochez ci-dessous ce dont il faut tenir compte.
+cox-choose-covariates = Cochez ce dont il faut tenir compte.
 cox-covariates = Tenir compte de
 cox-covariates-hint = Seulement ce qui était connu au début. Laissez de côté ce que le groupe a pu lui-même modifier.
 cox-reference = { $covariate } : comparé à

@@ -2,7 +2,7 @@
 import * as Plot from '@observablehq/plot';
 import { INK, SOFT_INK, TEXT_SIZE, plateStyle, seriesFill, spreadLabels } from './series.js';
 
-const LABEL_ROOM = 190;
+const LABEL_ROOM = 224;
 const NARROW = 520;
 
 /**
@@ -19,7 +19,7 @@ export function leavingStack({ layers, lastYear }, { width, words }) {
   const marginBottom = 44 + legendRows * (TEXT_SIZE + 6);
   const bands = stacked(layers);
   const last = bands.map((band) => ({ label: band.label, middle: (band.lower.at(-1) + band.upper.at(-1)) / 2 }));
-  const ends = spreadLabels(last.map(({ label, middle }) => ({ label, y: (1 - middle) * plotHeight })));
+  const ends = spreadLabels(last.map(({ label, middle }) => ({ label, y: (1 - middle) * plotHeight })), plotHeight);
   return Plot.plot({
     ...plateStyle(width),
     height: plotHeight + marginTop + marginBottom,
@@ -40,7 +40,7 @@ export function leavingStack({ layers, lastYear }, { width, words }) {
       Plot.text([words.say('axis-years-since-start')], { frameAnchor: 'bottom', dy: 36, fill: SOFT_INK }),
       beside
         ? ends.map((end) => Plot.text([end.label], {
-            frameAnchor: 'top-right', dx: LABEL_ROOM - 2, dy: end.y, textAnchor: 'end', lineAnchor: 'middle', fill: INK,
+            frameAnchor: 'top-right', dx: 8, dy: end.y, textAnchor: 'start', lineAnchor: 'middle', fill: INK,
           }))
         : [],
       beside ? [] : legend(layers),

@@ -34,13 +34,18 @@ export function plateStyle(width) {
 
 /**
  * Labels at the right end of lines, moved apart so that none covers another.
- * @param {Array<{label: string, y: number}>} ends y as pixels
+ * @param {Array<{label: string, y: number}>} ends y in pixels from the top
+ * @param {number} height of the plot in pixels; labels stay within it where there is room
  * @param {number} gap least distance in pixels
  */
-export function spreadLabels(ends, gap = TEXT_SIZE + 2) {
+export function spreadLabels(ends, height, gap = TEXT_SIZE + 3) {
   const placed = ends.map((end) => ({ ...end })).sort((a, b) => a.y - b.y);
   for (let i = 1; i < placed.length; i += 1) {
     placed[i].y = Math.max(placed[i].y, placed[i - 1].y + gap);
+  }
+  for (let i = placed.length - 1; i >= 0; i -= 1) {
+    const below = i === placed.length - 1 ? height : placed[i + 1].y - gap;
+    placed[i].y = Math.min(placed[i].y, below);
   }
   return placed;
 }

@@ -7,6 +7,14 @@ const MOST_WITH_ALL_ROWS = 4;
 const MARGIN_LEFT = 66;
 const MARGIN_RIGHT = 22;
 
+/** A short upright stroke: someone's observation ended there. */
+const STROKE = {
+  draw(context) {
+    context.moveTo(0, -4);
+    context.lineTo(0, 4);
+  },
+};
+
 /**
  * @typedef {object} Curve
  * @property {string} label
@@ -82,7 +90,7 @@ function curveMarks(curve, position) {
     Plot.lineY(line, {
       x: 'years', y: 'survival', curve: 'step-after', stroke, strokeWidth: 1.8, strokeDasharray: dash ?? 'none',
     }),
-    Plot.tickX(censored, { x: 'years', y: 'survival', stroke, strokeOpacity: 0.55, strokeWidth: 0.8, insetTop: -4, insetBottom: -4 }),
+    Plot.dot(censored, { x: 'years', y: 'survival', symbol: STROKE, stroke, strokeOpacity: 0.6, strokeWidth: 0.9 }),
   ];
 }
 

@@ -36,7 +36,7 @@ const FORGETS = 'register.forget';
  * @param {{ members: Map<string, Uint8Array>, onStage: (stage: string, done: number, total: number) => void, onDeath: (reason: string) => void }} options
  */
 export async function startEngine({ members, onStage, onDeath }) {
-  const source = URL.createObjectURL(new Blob([members.get('worker')], { type: 'text/javascript' }));
+  const source = URL.createObjectURL(new Blob([/** @type {BlobPart} */ (members.get('worker'))], { type: 'text/javascript' }));
   const handed = new Map(['wasm', 'stdlib', 'lock', 'engine'].map((name) => [name, members.get(name)]));
   /** @type {Question[]} */
   let waiting = [];

@@ -14,12 +14,12 @@ const PATIENCE_MS = 250;
  *   null while there is nothing to ask
  * @param {(answer: any, state: import('../store.js').State) => Array<Node|null|false>} block.draw
  * @param {string} [block.empty] key of the sentence shown while there is nothing to ask
- * @param {number} [block.level] of the heading, 2 unless told
+ * @param {Node} [block.choices] what can be chosen about this answer alone
  */
-export function answerBlock(app, { id, title, ask, draw, empty, level = 2 }) {
-  const heading = h(`h${level}`, { id: `${id}-heading` });
+export function answerBlock(app, { id, title, ask, draw, empty, choices }) {
+  const heading = h('h2', { id: `${id}-heading` });
   const body = h('div', { class: 'answer', 'aria-live': 'polite', 'aria-busy': 'false' });
-  const box = h('section', { id, 'aria-labelledby': `${id}-heading` }, heading, body);
+  const box = h('section', { id, 'aria-labelledby': `${id}-heading` }, heading, choices, body);
   let asked = null;
   let language = null;
   let latest = null;

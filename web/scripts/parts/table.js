@@ -51,3 +51,15 @@ export function tableAsCsv(columns, rows) {
   };
   return csv(columns.map((column) => column.heading), rows.map((row) => columns.map((column) => cell(column, row))));
 }
+
+/**
+ * The column that names the group, where there are groups.
+ * @param {import('../app.js').App} app
+ * @param {Array<{level: string|null}>} rows
+ * @param {(level: string|null) => string} name
+ * @returns {Column<any>[]}
+ */
+export function groupColumn(app, rows, name) {
+  if (rows.every((row) => row.level === null)) return [];
+  return [{ heading: app.words.say('group'), show: (row) => name(row.level), text: true }];
+}

@@ -9,15 +9,14 @@ import { covariateChoices, coxRequest } from './covariates.js';
 
 /** @param {import('../../app.js').App} app */
 export function coxBlock(app) {
-  return h('div', {},
-    answerBlock(app, {
-      id: 'cox',
-      title: 'cox-title',
-      empty: 'cox-choose-covariates',
-      ask: coxRequest,
-      draw: (answer) => drawCox(app, answer),
-    }),
-    covariateChoices(app));
+  return answerBlock(app, {
+    id: 'cox',
+    title: 'cox-title',
+    empty: 'cox-choose-covariates',
+    choices: covariateChoices(app),
+    ask: coxRequest,
+    draw: (answer) => drawCox(app, answer),
+  });
 }
 
 function drawCox(app, answer) {

@@ -9,24 +9,30 @@ import { table } from '../../parts/table.js';
 import { DAYS_PER_MONTH, DAYS_PER_YEAR } from '../../units.js';
 import { pairRequest } from './pair.js';
 
+/** How many intervals are compared, by their length. */
+const INTERVALS_SHOWN = { year: 5, quarter: 8 };
+
 /** @param {import('../../app.js').App} app */
 export function intervalsBlock(app) {
-  return h('div', {},
-    answerBlock(app, {
-      id: 'intervals',
-      title: 'intervals-title',
-      empty: 'compare-choose-group',
-      ask: (state) => {
-        const request = pairRequest(state);
-        return request && { task: 'compare.intervals', request: { ...request, step: state.compare.step, intervals: state.compare.intervals } };
-      },
-      draw: (answer, state) => drawIntervals(app, answer, pairRequest(state), state.compare.step),
-    }),
-    live(app, (state) => [state.compare.step, state.question.group], (state) => state.question.group ? [choiceRow(selectOne({
-      id: 'compare-step', label: app.words.say('life-table-step'), value: state.compare.step,
-      options: ['year', 'quarter'].map((step) => ({ value: step, label: app.words.say(`step-${step}`) })),
-      onchange: (step) => app.store.amend('compare', { step, intervals: step === 'year' ? 5 : 8 }),
-    }))] : []));
+  return answerBlock(app, {
+    id: 'intervals',
+    title: 'intervals-title',
+    empty: 'compare-choose-group',
+    choices: stepChoice(app),
+    ask: (state) => {
+      const request = pairRequest(state);
+      return request && { task: 'compare.intervals', request: { ...request, step: state.compare.step, intervals: state.compare.intervals } };
+    },
+    draw: (answer, state) => drawIntervals(app, answer, pairRequest(state), state.compare.step),
+  });
+}
+
+function stepChoice(app) {
+  return live(app, (state) => [state.compare.step, state.question.group], (state) => state.question.group ? [choiceRow(selectOne({
+    id: 'compare-step', label: app.words.say('life-table-step'), value: state.compare.step,
+    options: Object.keys(INTERVALS_SHOWN).map((step) => ({ value: step, label: app.words.say(`step-${step}`) })),
+    onchange: (step) => app.store.amend('compare', { step, intervals: INTERVALS_SHOWN[step] }),
+  }))] : []);
 }
 
 function drawIntervals(app, answer, { group, exposed, reference }, step) {

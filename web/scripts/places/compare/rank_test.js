@@ -10,22 +10,25 @@ const WEIGHTS = ['log_rank', 'gehan', 'tarone_ware', 'fleming_harrington'];
 
 /** @param {import('../../app.js').App} app */
 export function rankTestBlock(app) {
-  return h('div', {},
-    answerBlock(app, {
-      id: 'rank-test',
-      title: 'rank-test-title',
-      empty: 'compare-choose-group',
-      ask: ({ cohort, question, compare }) => cohort && question.group && {
-        task: 'compare.rank_test',
-        request: { interest: question.interest, group: question.group, weight: compare.weight },
-      },
-      draw: (answer, state) => drawRankTest(app, answer, state.question.group),
-    }),
-    live(app, (state) => [state.compare.weight, state.question.group], (state) => state.question.group ? [choiceRow(selectOne({
-      id: 'compare-weight', label: app.words.say('rank-weight'), hint: app.words.say('rank-weight-hint'), value: state.compare.weight,
-      options: WEIGHTS.map((weight) => ({ value: weight, label: app.words.say(`rank-${weight}`) })),
-      onchange: (weight) => app.store.amend('compare', { weight }),
-    }))] : []));
+  return answerBlock(app, {
+    id: 'rank-test',
+    title: 'rank-test-title',
+    empty: 'compare-choose-group',
+    choices: weightChoice(app),
+    ask: ({ cohort, question, compare }) => cohort && question.group && {
+      task: 'compare.rank_test',
+      request: { interest: question.interest, group: question.group, weight: compare.weight },
+    },
+    draw: (answer, state) => drawRankTest(app, answer, state.question.group),
+  });
+}
+
+function weightChoice(app) {
+  return live(app, (state) => [state.compare.weight, state.question.group], (state) => state.question.group ? [choiceRow(selectOne({
+    id: 'compare-weight', label: app.words.say('rank-weight'), hint: app.words.say('rank-weight-hint'), value: state.compare.weight,
+    options: WEIGHTS.map((weight) => ({ value: weight, label: app.words.say(`rank-${weight}`) })),
+    onchange: (weight) => app.store.amend('compare', { weight }),
+  }))] : []);
 }
 
 function drawRankTest(app, answer, group) {

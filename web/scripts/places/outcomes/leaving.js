@@ -24,7 +24,7 @@ export function leavingBlock(app) {
 }
 
 function drawGroup(app, group, name) {
-  const { say, percent } = app.words;
+  const { say } = app.words;
   const years = group.time.map((days) => days / DAYS_PER_YEAR);
   const ways = group.ways.filter((way) => way.events > 0);
   const layers = [
@@ -58,19 +58,25 @@ function leavingSentence(app, group, ways, inGroup) {
   });
 }
 
+/** One line for each way, one column for each year; the wrong figure stands beside the last year. */
 function incidenceTable(app, ways, name) {
   const { say, count, percent, estimate } = app.words;
-  const rows = ways.flatMap((way) => YEARS.map((years, i) => ({
-    meaning: say(`meaning-${way.meaning}`), years, events: way.events, incidence: way.at_years[i], wrong: way.one_minus_survival_at_years[i],
-  })));
+  const last = YEARS.length - 1;
   return table(app, {
-    name: 'ways-of-leaving', caption: say('leaving-caption', { group: name }), rows, note: say('leaving-note'),
+    name: 'ways-of-leaving', caption: say('leaving-caption', { group: name }), rows: ways, note: say('leaving-note'),
     columns: [
-      { heading: say('way-of-leaving'), show: (row) => row.meaning, text: true },
-      { heading: say('years-since-start'), show: (row) => count(row.years), full: (row) => row.years },
-      { heading: say('events-in-all'), show: (row) => count(row.events), full: (row) => row.events },
-      { heading: say('cumulative-incidence'), show: (row) => estimate(row.incidence, (share) => percent(share)), full: (row) => row.incidence?.value },
-      { heading: say('one-minus-survival'), show: (row) => percent(row.wrong), full: (row) => row.wrong },
+      { heading: say('way-of-leaving'), show: (way) => say(`meaning-${way.meaning}`), text: true },
+      { heading: say('events-in-all'), show: (way) => count(way.events), full: (way) => way.events },
+      ...YEARS.map((years, i) => ({
+        heading: say('by-years', { years }),
+        show: (way) => estimate(way.at_years[i], (share) => percent(share)),
+        full: (way) => way.at_years[i].value,
+      })),
+      {
+        heading: say('one-minus-survival', { years: YEARS[last] }),
+        show: (way) => percent(way.one_minus_survival_at_years[last]),
+        full: (way) => way.one_minus_survival_at_years[last],
+      },
     ],
   });
 }

@@ -7,28 +7,32 @@ import { figure } from '../../parts/figure.js';
 import { live } from '../../parts/live.js';
 import { kindOfOutcome } from '../../parts/question.js';
 import { cautionList, levelName } from '../../parts/said.js';
-import { table } from '../../parts/table.js';
+import { groupColumn, table } from '../../parts/table.js';
 import { DAYS_PER_YEAR } from '../../units.js';
 
 const YEARS = [1, 3, 5];
+const INTERVALS = ['log-log', 'log', 'plain'];
 
 /** @param {import('../../app.js').App} app */
 export function survivalBlock(app) {
-  return h('div', {},
-    answerBlock(app, {
-      id: 'survival',
-      title: 'survival-title',
-      ask: ({ cohort, question, outcomes }) => cohort && {
-        task: 'outcomes.survival',
-        request: { interest: question.interest, group: question.group, years: YEARS, interval: outcomes.interval },
-      },
-      draw: (answer, state) => drawSurvival(app, answer, state),
-    }),
-    live(app, (state) => state.outcomes.interval, (state) => [choiceRow(selectOne({
-      id: 'outcomes-interval', label: app.words.say('interval-kind'), value: state.outcomes.interval,
-      options: ['log-log', 'log', 'plain'].map((kind) => ({ value: kind, label: app.words.say(`interval-${kind}`) })),
-      onchange: (interval) => app.store.amend('outcomes', { interval }),
-    }))]));
+  return answerBlock(app, {
+    id: 'survival',
+    title: 'survival-title',
+    choices: intervalChoice(app),
+    ask: ({ cohort, question, outcomes }) => cohort && {
+      task: 'outcomes.survival',
+      request: { interest: question.interest, group: question.group, years: YEARS, interval: outcomes.interval },
+    },
+    draw: (answer, state) => drawSurvival(app, answer, state),
+  });
+}
+
+function intervalChoice(app) {
+  return live(app, (state) => state.outcomes.interval, (state) => [choiceRow(selectOne({
+    id: 'outcomes-interval', label: app.words.say('interval-kind'), value: state.outcomes.interval,
+    options: INTERVALS.map((kind) => ({ value: kind, label: app.words.say(`interval-${kind}`) })),
+    onchange: (interval) => app.store.amend('outcomes', { interval }),
+  }))]);
 }
 
 function drawSurvival(app, answer, { question }) {
@@ -53,22 +57,21 @@ function drawSurvival(app, answer, { question }) {
 
 /** The last of the asked-for years that follow-up reaches, in words. */
 function sentence(app, curve, interest, name) {
-  const { say, percent, estimate } = app.words;
-  const reached = curve.at_years.filter((at) => !at.beyond_follow_up);
+  const { say, percent } = app.words;
   const group = curve.level === null ? '' : say('sentence-group', { group: name(curve.level) });
-  const at = reached.at(-1);
+  const at = curve.at_years.filter((each) => !each.beyond_follow_up && each.estimate.value !== null).at(-1);
   if (!at) return h('p', { class: 'sentence' }, say('survival-sentence-short', { group, n: curve.n }));
   return h('p', { class: 'sentence' }, say(`survival-sentence-${kindOfOutcome(interest)}`, {
-    group, years: at.years, n: curve.n, events: curve.events,
-    survival: percent(at.estimate.value), interval: estimateInterval(app, at.estimate),
-  }), ' ', curve.median.reached
-    ? say('median-reached', { median: estimate(curve.median.estimate, (years) => app.words.decimal(years, 1)) })
-    : say('median-not-reached'));
+    group, years: at.years, n: curve.n, events: curve.events, survival: percent(at.estimate.value),
+    interval: say('from-to', { lower: percent(at.estimate.lower), upper: percent(at.estimate.upper) }),
+  }), ' ', medianSentence(app, curve.median));
 }
 
-function estimateInterval(app, { lower, upper }) {
-  const { percent, say } = app.words;
-  return say('from-to', { lower: percent(lower), upper: percent(upper) });
+function medianSentence(app, { reached, estimate }) {
+  const { say, decimal } = app.words;
+  if (!reached) return say('median-not-reached');
+  const years = { median: decimal(estimate.value, 1), lower: decimal(estimate.lower, 1), upper: decimal(estimate.upper, 1) };
+  return say(estimate.upper === null ? 'median-reached-open' : 'median-reached', years);
 }
 
 /** The engine's answer as the drawing wants it: years instead of days. */
@@ -97,13 +100,13 @@ function countsTable(app, answer, name) {
   const { say, count } = app.words;
   const rows = answer.table.flatMap((group) =>
     answer.table_times.map((years, i) => ({
-      level: name(group.level), years, at_risk: group.at_risk[i], events: group.events[i], censored: group.censored[i],
+      level: group.level, years, at_risk: group.at_risk[i], events: group.events[i], censored: group.censored[i],
     })));
   const number = (field) => ({ show: (row) => count(row[field]), full: (row) => row[field] });
   return table(app, {
     name: 'survival-counts', caption: say('survival-counts-caption'), rows,
     columns: [
-      { heading: say('group'), show: (row) => row.level, text: true },
+      ...groupColumn(app, rows, name),
       { heading: say('years-since-start'), ...number('years') },
       { heading: say('row-atRisk'), ...number('at_risk') },
       { heading: say('events-so-far'), ...number('events') },
@@ -114,19 +117,20 @@ function countsTable(app, answer, name) {
 
 function atYearsTable(app, answer, name) {
   const { say, count, percent, estimate } = app.words;
-  const rows = answer.curves.flatMap((curve) => curve.at_years.map((at) => ({ ...at, level: name(curve.level) })));
+  const rows = answer.curves.flatMap((curve) => curve.at_years.map((at) => ({ ...at, level: curve.level })));
+  const share = (number) => percent(number);
   return table(app, {
     name: 'survival-at-years', caption: say('survival-at-years-caption'), rows,
     columns: [
-      { heading: say('group'), show: (row) => row.level, text: true },
+      ...groupColumn(app, rows, name),
       { heading: say('years-since-start'), show: (row) => count(row.years), full: (row) => row.years },
       { heading: say('row-atRisk'), show: (row) => count(row.at_risk), full: (row) => row.at_risk },
       {
         heading: say(`survival-heading-${kindOfOutcome(answer.interest)}`),
-        show: (row) => (row.beyond_follow_up ? say('beyond-follow-up') : estimate(row.estimate, percent)),
-        full: (row) => row.estimate?.value,
+        show: (row) => (row.beyond_follow_up ? say('beyond-follow-up') : estimate(row.estimate, share)),
+        full: (row) => row.estimate.value,
       },
-      { heading: say('standard-error'), show: (row) => (row.beyond_follow_up ? '–' : percent(row.estimate.standard_error)), full: (row) => row.estimate?.standard_error },
+      { heading: say('standard-error'), show: (row) => percent(row.estimate.standard_error), full: (row) => row.estimate.standard_error },
     ],
   });
 }
@@ -134,13 +138,13 @@ function atYearsTable(app, answer, name) {
 /** What the figure would be if everyone lost had met the outcome, or none had. */
 function lossesTable(app, answer, name) {
   const { say, count, percent } = app.words;
-  const rows = answer.curves.flatMap((curve) =>
-    curve.losses.bounds.map((bound) => ({ ...bound, level: name(curve.level), lost: curve.losses.lost, share: curve.losses.share })));
+  const rows = answer.curves.flatMap(({ level, losses }) =>
+    losses.bounds.map((bound) => ({ ...bound, level, lost: losses.lost, share: losses.share })));
   if (!rows.some((row) => row.lost > 0)) return h('p', {}, say('no-losses'));
   return table(app, {
     name: 'loss-bounds', caption: say('losses-caption'), rows, note: say('losses-note'),
     columns: [
-      { heading: say('group'), show: (row) => row.level, text: true },
+      ...groupColumn(app, rows, name),
       { heading: say('years-since-start'), show: (row) => count(row.years), full: (row) => row.years },
       { heading: say('lost'), show: (row) => say('count-share', { count: count(row.lost), share: percent(row.share) }), full: (row) => row.lost },
       { heading: say('if-all-lost-died'), show: (row) => percent(row.all_died), full: (row) => row.all_died },
