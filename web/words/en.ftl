@@ -138,23 +138,24 @@ survival-title = Survival over time
 survival-sentence-deaths = { $group }{ $survival } were alive { $years ->
     [one] { $years } year
    *[other] { $years } years
-  } after starting (95 % interval { $interval }), judging from { $n } patients and { $events } deaths.
+  } after starting (95% interval { $interval }), judging from { $n } patients and { $events } deaths.
 survival-sentence-other = { $group }{ $survival } were free of the chosen outcome { $years ->
     [one] { $years } year
    *[other] { $years } years
-  } after starting (95 % interval { $interval }), judging from { $n } patients and { $events } outcomes.
+  } after starting (95% interval { $interval }), judging from { $n } patients and { $events } outcomes.
 survival-sentence-short = { $group }follow-up of these { $n } patients is shorter than one year; read the curve as far as it goes.
-median-reached = Half had met it by { $median } years (95 % interval { $lower } to { $upper }).
-median-reached-open = Half had met it by { $median } years (95 % interval from { $lower }; its upper limit was not reached).
+median-reached = Half had met it by { $median } years (95% interval { $lower } to { $upper }).
+median-reached-open = Half had met it by { $median } years (95% interval from { $lower }; its upper limit was not reached).
+median-unsupported = Half had met it only after fewer than 10 were still followed, so no median is given.
 median-not-reached = Fewer than half had met it by the end of follow-up, so there is no median.
 survival-figure-deaths = Share still alive, by years since start
 survival-figure-other = Share still free of the outcome, by years since start
 survival-figure-described = { $curves ->
-    [one] A falling step curve with its 95 % band; the numbers at risk stand below it, and the table behind the figure holds every value.
-   *[other] { $curves } falling step curves with their 95 % bands; the numbers at risk stand below them, and the table behind the figure holds every value.
+    [one] A falling step curve with its 95% band; the numbers at risk stand below it, and the table behind the figure holds every value.
+   *[other] { $curves } falling step curves with their 95% bands; the numbers at risk stand below them, and the table behind the figure holds every value.
   }
 survival-counts-caption = At risk, outcomes and censored at each year
-survival-at-years-caption = Survival at chosen times, with 95 % limits
+survival-at-years-caption = Survival at chosen times, with 95% limits
 survival-heading-deaths = Alive
 survival-heading-other = Free of the outcome
 losses-caption = What those lost to follow-up could change
@@ -166,7 +167,7 @@ interval-kind = Kind of confidence interval
 interval-log-log = log-log (usual choice)
 interval-log = log
 interval-plain = plain
-survival-method = Product limit (Kaplan & Meier 1958), Greenwood's variance (1926), { $interval } limits; where the curve has not moved from 100 % or has reached 0 %, beta-product limits (Fay and others 2013). Outcomes come before censorings on the same day. The median is the first time the curve is at or below 50 % (Brookmeyer & Crowley 1982). Drawn while at least 10 are at risk; short strokes mark patients censored.
+survival-method = Product limit (Kaplan & Meier 1958), Greenwood's variance (1926), { $interval } limits; where the curve has not moved from 100% or has reached 0%, beta-product limits (Fay and others 2013). Outcomes come before censorings on the same day. The median is the first time the curve is at or below 50% (Brookmeyer & Crowley 1982). Drawn while at least 10 are at risk; short strokes mark patients censored.
 
 life-table-title = Life table
 life-table-caption = Actuarial life table
@@ -184,7 +185,7 @@ events = Outcomes
 effective = Effective number
 chance = Chance in interval
 odds = Odds in interval
-survival-to-end = Survival to end (95 % limits)
+survival-to-end = Survival to end (95% limits)
 hazard-per-year = Hazard per year
 life-table-method = Actuarial method (Berkson & Gage 1950; Cutler & Ederer 1958): those lost or withdrawn in an interval count for half of it. Greenwood's standard error; hazard at the middle of the interval (Gehan 1969).
 
@@ -198,8 +199,8 @@ leaving-figure = Where the patients are, by years since start: { $group }
 leaving-figure-described = A stacked area: those still under care at the bottom, above them { $ways ->
     [one] one way of leaving
    *[other] { $ways } ways of leaving
-  }, together always 100 %. The table below holds the values.
-leaving-caption = Cumulative incidence of each way of leaving, with 95 % limits: { $group }
+  }, together always 100%. The table below holds the values.
+leaving-caption = Cumulative incidence of each way of leaving, with 95% limits: { $group }
 leaving-note = The last column shows what one minus survival would wrongly say, as if the other ways of leaving did not exist. Do not quote it.
 way-of-leaving = Way of leaving
 events-in-all = In all
@@ -215,7 +216,7 @@ refusal-one_patient = One patient alone is not described here: results are for g
 refusal-nobody_at_risk = Nobody was under observation for even a day, so nothing can be said about time.
 refusal-too_many_groups = { $covariate } has { $groups } groups; at most { $most } can be told apart. Merge some in the register first, or choose another column.
 refusal-groups_too_small = No group of { $covariate } has at least two patients. Choose another column.
-caution-no_events = { $level }: nobody of { $n } met the outcome. The curve stays at 100 %; its lower limit shows how low it could still be.
+caution-no_events = { $level }: nobody of { $n } met the outcome. The curve stays at 100%; its lower limit shows how low it could still be.
 caution-all_events_on_day_zero = { $level }: all { $events } outcomes fell on the first day. Check whether the dates of start and end were mixed up.
 caution-last_at_risk_had_event = { $level }: the curve falls to 0 because the very last patient under observation met the outcome. Do not read its end.
 caution-never_at_risk = { $level }: { $n } with a late first visit began and ended observation on one day, and count nowhere.
@@ -252,7 +253,7 @@ difference-title = The difference in survival
 difference-sentence = After { $years ->
     [one] { $years } year
    *[other] { $years } years
-  }, { $inExposed } in “{ $exposed }” and { $inReference } in “{ $reference }” were free of the outcome: a difference of { $difference } percentage points (95 % interval { $interval }).
+  }, { $inExposed } in “{ $exposed }” and { $inReference } in “{ $reference }” were free of the outcome: a difference of { $difference } percentage points (95% interval { $interval }).
 difference-caption = Free of the outcome at chosen times, and the difference
 difference-points = Difference, percentage points
 difference-method = Difference of two product-limit estimates; the variances of the two groups are added (Greenwood 1926). Nothing is adjusted for.
@@ -284,15 +285,15 @@ rank-method-fleming_harrington = Fleming & Harrington (1991), weight S(t−): ea
 
 intervals-title = Interval by interval
 intervals-lead = Of those who began each interval in “{ $exposed }” and in “{ $reference }”, how many met the outcome in it. Those lost or withdrawn in an interval count for half of it.
-intervals-caption = The two groups in each interval of follow-up (95 % limits)
+intervals-caption = The two groups in each interval of follow-up (95% limits)
 effective-of = Effective number, { $group }
 risk-ratio = Risk ratio
 odds-ratio = Odds ratio
 risk-difference = Risk difference, percentage points
 intervals-left-out = Left out of the pooled figures because a group or an outcome is missing in them: { $intervals }.
 intervals-method = Effective numbers n − w/2 (Cutler & Ederer 1958); risk ratio limits Katz (1978), odds ratio Woolf (1955), risk difference Newcombe (1998); pooled over intervals by Mantel & Haenszel (1959) with variances of Robins, Breslow & Greenland (1986) and Greenland & Robins (1985).
-pooled-caption = Pooled over the strata (Mantel-Haenszel, 95 % limits)
-pooled-sentence = Pooled, the risk in “{ $exposed }” was { $ratio } times that in “{ $reference }” (95 % interval { $interval }; p { $p }).
+pooled-caption = Pooled over the strata (Mantel-Haenszel, 95% limits)
+pooled-sentence = Pooled, the risk in “{ $exposed }” was { $ratio } times that in “{ $reference }” (95% interval { $interval }; p { $p }).
 odds-are-not-risks = An odds ratio is not a ratio of risks: when the outcome is common it lies further from 1. Quote the risk ratio and the risk difference to people.
 crude = Crude
 pooled = Pooled
@@ -310,11 +311,11 @@ cox-ties-efron = Efron (usual choice)
 cox-ties-breslow = Breslow
 cox-term-level = { $covariate }: { $level } against { $reference }
 cox-term-number = { $covariate }, per { $per }
-cox-sentence-higher = { $term }: the outcome came sooner; at any time its hazard was { $ratio } times as high (95 % interval { $interval }; p { $p }){ $others ->
+cox-sentence-higher = { $term }: the outcome came sooner; at any time its hazard was { $ratio } times as high (95% interval { $interval }; p { $p }){ $others ->
     [0] , nothing else taken into account.
    *[other] , with the other covariates held equal.
   }
-cox-sentence-lower = { $term }: the outcome came later; at any time its hazard was { $ratio } times as high (95 % interval { $interval }; p { $p }){ $others ->
+cox-sentence-lower = { $term }: the outcome came later; at any time its hazard was { $ratio } times as high (95% interval { $interval }; p { $p }){ $others ->
     [0] , nothing else taken into account.
    *[other] , with the other covariates held equal.
   }
@@ -323,7 +324,7 @@ cox-sentence-unclear = { $term }: no clear difference; the hazard ratio is { $ra
    *[other] , with the other covariates held equal.
   }
 cox-does-not-mean = A hazard ratio is neither a ratio of risks nor of odds, and says nothing of how many: read it together with the difference in survival above.
-cox-figure = Hazard ratios with 95 % limits
+cox-figure = Hazard ratios with 95% limits
 cox-figure-described = { $terms ->
     [one] One hazard ratio with its limits
    *[other] { $terms } hazard ratios with their limits
@@ -332,7 +333,7 @@ axis-hazard-ratio = Hazard ratio (1 = no difference)
 cox-caption = Cox regression
 covariate = Covariate
 coefficient = Coefficient
-hazard-ratio = Hazard ratio (95 % limits)
+hazard-ratio = Hazard ratio (95% limits)
 cox-fit = { $n } patients, { $events } outcomes. Concordance { $concordance }: the share of pairs of patients that the model puts in the right order.
 cox-tests-caption = Tests of the whole model
 test-likelihood_ratio = Likelihood ratio

@@ -146,6 +146,7 @@ survival-sentence-other = { $group }{ $survival } n’avaient pas connu l’év�
 survival-sentence-short = { $group }le suivi de ces { $n } patients est inférieur à un an ; lisez la courbe jusqu’où elle va.
 median-reached = La moitié l’avait connu à { $median } ans (intervalle à 95 % : { $lower } à { $upper }).
 median-reached-open = La moitié l’avait connu à { $median } ans (intervalle à 95 % : à partir de { $lower } ; limite supérieure non atteinte).
+median-unsupported = La moitié ne l’avait connu qu’après que moins de 10 patients étaient encore suivis : pas de médiane.
 median-not-reached = Moins de la moitié l’avait connu à la fin du suivi : il n’y a pas de médiane.
 survival-figure-deaths = Part encore en vie, selon les années depuis le début
 survival-figure-other = Part n’ayant pas connu l’événement, selon les années depuis le début

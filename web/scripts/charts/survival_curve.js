@@ -3,15 +3,16 @@ import * as Plot from '@observablehq/plot';
 import { FAINT_RULE, INK, SOFT_INK, TEXT_SIZE, plateStyle, seriesStyle } from './series.js';
 
 const LINE = TEXT_SIZE + 3;
+const GROUP_GAP = 6;
 const MOST_WITH_ALL_ROWS = 4;
-const MARGIN_LEFT = 66;
+const MARGIN_LEFT = 84;
 const MARGIN_RIGHT = 22;
 
 /** A short upright stroke: someone's observation ended there. */
 const STROKE = {
   draw(context) {
-    context.moveTo(0, -4);
-    context.lineTo(0, 4);
+    context.moveTo(0, -5);
+    context.lineTo(0, 0);
   },
 };
 
@@ -36,7 +37,7 @@ export function survivalCurve({ curves, ticks }, { width, words }) {
   const shown = readableTicks(ticks, width);
   const rows = countRows(curves, ticks, shown, words);
   const height = Math.min(420, Math.max(260, width * 0.55));
-  const below = 44 + (rows.length + 1) * LINE;
+  const below = 58 + rows.length * LINE + curves.length * GROUP_GAP;
   return Plot.plot({
     ...plateStyle(width),
     height: height + below,
@@ -44,7 +45,7 @@ export function survivalCurve({ curves, ticks }, { width, words }) {
     marginRight: MARGIN_RIGHT,
     marginTop: 18,
     marginBottom: below,
-    x: { domain: [0, ticks.at(-1)], label: null },
+    x: { domain: [0, Math.max(ticks.at(-1), ...curves.map((curve) => points(curve).at(-1).years))], label: null },
     y: { domain: [0, 1], label: null },
     marks: [
       Plot.gridY({ ticks: [0, 0.25, 0.5, 0.75, 1], stroke: FAINT_RULE, strokeOpacity: 1 }),
@@ -54,7 +55,7 @@ export function survivalCurve({ curves, ticks }, { width, words }) {
       Plot.ruleY([0], { stroke: INK }),
       curves.flatMap((curve, position) => curveMarks(curve, position)),
       endLabels(curves),
-      rows.flatMap((row, position) => rowMarks(row, 58 + position * LINE)),
+      rows.flatMap((row, position) => rowMarks(row, 58 + position * LINE + row.position * GROUP_GAP)),
     ],
   });
 }
@@ -90,7 +91,7 @@ function curveMarks(curve, position) {
     Plot.lineY(line, {
       x: 'years', y: 'survival', curve: 'step-after', stroke, strokeWidth: 1.8, strokeDasharray: dash ?? 'none',
     }),
-    Plot.dot(censored, { x: 'years', y: 'survival', symbol: STROKE, stroke, strokeOpacity: 0.6, strokeWidth: 0.9 }),
+    Plot.dot(censored, { x: 'years', y: 'survival', symbol: STROKE, stroke, strokeOpacity: 0.5, strokeWidth: 0.8 }),
   ];
 }
 

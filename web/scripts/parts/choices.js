@@ -76,7 +76,7 @@ export function tickSeveral({ id, legend, hint, options, values, onchange }) {
         },
       }),
       ' ', label));
-  return h('fieldset', { class: 'choice' }, h('legend', {}, legend), hint && h('p', { class: 'hint' }, hint), boxes);
+  return h('fieldset', { class: 'choice' }, h('legend', {}, legend), hint && h('p', { class: 'hint' }, hint), h('div', { class: 'ticks' }, boxes));
 }
 
 /** Choices side by side where there is room. */

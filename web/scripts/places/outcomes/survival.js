@@ -64,12 +64,14 @@ function sentence(app, curve, interest, name) {
   return h('p', { class: 'sentence' }, say(`survival-sentence-${kindOfOutcome(interest)}`, {
     group, years: at.years, n: curve.n, events: curve.events, survival: percent(at.estimate.value),
     interval: say('from-to', { lower: percent(at.estimate.lower), upper: percent(at.estimate.upper) }),
-  }), ' ', medianSentence(app, curve.median));
+  }), ' ', medianSentence(app, curve));
 }
 
-function medianSentence(app, { reached, estimate }) {
+function medianSentence(app, { median: { reached, estimate }, stop_time: supported }) {
   const { say, decimal } = app.words;
   if (!reached) return say('median-not-reached');
+  // A median where the curve is no longer drawn hangs on a handful of patients.
+  if (supported > 0 && estimate.value * DAYS_PER_YEAR > supported) return say('median-unsupported');
   const years = { median: decimal(estimate.value, 1), lower: decimal(estimate.lower, 1), upper: decimal(estimate.upper, 1) };
   return say(estimate.upper === null ? 'median-reached-open' : 'median-reached', years);
 }
