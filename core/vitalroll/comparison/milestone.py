@@ -55,7 +55,7 @@ def milestone_difference(
     & Andersen (2007) Statistics in Medicine 26:4505-4519, the untransformed difference.
     """
     day = years * DAYS_PER_YEAR
-    given = exposed.speaks_of(day) and reference.speaks_of(day)
+    given = exposed.span.speaks_of(day) and reference.span.speaks_of(day)
     at_exposed, at_reference = exposed.at(day), reference.at(day)
     return Milestone(
         years=years,

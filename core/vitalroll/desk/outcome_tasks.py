@@ -260,7 +260,7 @@ def _at_risk_at(table: RiskTable, covered: Span, years: float) -> dict[str, Any]
     return {
         "years": years,
         "at_risk": table.at_risk_on(np.array([day]))[0],
-        "beyond_follow_up": day > covered.last_time,
+        "beyond_follow_up": covered.is_beyond(day),
         "since_days": covered.since(day),
     }
 
@@ -308,7 +308,7 @@ def _few_at_risk(table: RiskTable, covered: Span, years: Years) -> Iterable[Caut
         return
     for year in sorted(years):
         at_risk = int(table.at_risk_on(np.array([year * DAYS_PER_YEAR]))[0])
-        if covered.covers(year * DAYS_PER_YEAR) and at_risk < FEW_AT_RISK:
+        if covered.speaks_of(year * DAYS_PER_YEAR) and at_risk < FEW_AT_RISK:
             yield Caution("few_at_risk", {"years": year, "at_risk": at_risk})
             return
 

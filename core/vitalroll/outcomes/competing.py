@@ -57,8 +57,7 @@ class Leaving:
     def at(self, meaning: str, day: float) -> Estimate:
         """Return the incidence of one way of leaving by ``day``; NaN where nobody can say."""
         way = next(way for way in self.ways if way.meaning == meaning)
-        ended = day > self.span.last_time and self.under_care[-1] == 0
-        if not (ended or self.span.covers(day)):
+        if not self.span.speaks_of(day):
             return NOT_GIVEN
         row = int(np.searchsorted(self.time, day, side="right")) - 1
         return Estimate(
@@ -107,7 +106,7 @@ def leaving(table: RiskTable, *, ways: Sequence[str] = WAYS_OF_LEAVING, confiden
     parts = stretches(table, table.at_risk, everything)
     pieces = [_piece(table, part, everything, by_way, confidence) for part in parts]
     joined = {name: np.concatenate([piece[name] for piece in pieces]) for name in pieces[0]}
-    covered = span(table, parts)
+    covered = span(table, parts, table.at_risk, everything)
     cautions = covered.cautions()
     if not everything.any():
         cautions += (Caution("nobody_left", {"n": table.n}),)

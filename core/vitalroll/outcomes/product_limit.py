@@ -63,18 +63,9 @@ class SurvivalCurve:
     upper: np.ndarray
     cautions: tuple[Caution, ...]
 
-    def speaks_of(self, day: float) -> bool:
-        """Return whether there is an estimate at ``day``.
-
-        There is none before the curve begins, in a gap, or beyond the last day anyone was seen,
-        except that a curve which has come down to 0 stays there.
-        """
-        ended = day > self.span.last_time and self.survival[-1] == 0
-        return bool(ended or self.span.covers(day))
-
     def at(self, day: float) -> Estimate:
         """Return the survival after ``day`` with its limits; NaN where the curve says nothing."""
-        if not self.speaks_of(day):
+        if not self.span.speaks_of(day):
             return NOT_GIVEN
         row = int(np.searchsorted(self.time, day, side="right")) - 1
         return Estimate(
@@ -151,7 +142,7 @@ def curve_over(
     parts = stretches(table, at_risk, events)
     pieces = [_piece(table, part, at_risk, events, interval, confidence) for part in parts]
     joined = {name: np.concatenate([piece[name] for piece in pieces]) for name in pieces[0]}
-    covered = span(table, parts)
+    covered = span(table, parts, at_risk, events)
     total = int(events.sum())
     return SurvivalCurve(
         n=table.n,

@@ -46,19 +46,28 @@ class Restart:
 
 @dataclass(frozen=True)
 class Span:
-    """The days about which a curve made of stretches can speak."""
+    """The days about which a curve made of stretches can speak.
+
+    ``ended`` says that all who were at risk on the last day had an event: what the curve has come
+    to then it stays at for ever.
+    """
 
     begins: int
     last_time: int
     restarts: tuple[Restart, ...]
+    ended: bool
 
-    def covers(self, day: float) -> bool:
-        """Return whether ``day`` lies within follow-up and not where the risk set was empty."""
-        return self.begins <= day <= self.last_time and not self.in_a_gap(day)
+    def speaks_of(self, day: float) -> bool:
+        """Return whether there is an estimate at ``day``.
 
-    def in_a_gap(self, day: float) -> bool:
-        """Return whether the risk set was empty on ``day`` and filled again later."""
-        return any(restart.emptied < day < restart.day for restart in self.restarts)
+        There is none before the curve begins, while the risk set was empty, and beyond follow-up.
+        """
+        in_a_gap = any(restart.emptied < day < restart.day for restart in self.restarts)
+        return day >= self.begins and not in_a_gap and not self.is_beyond(day)
+
+    def is_beyond(self, day: float) -> bool:
+        """Return whether ``day`` is after the last one anyone was seen and nothing is known of it."""
+        return day > self.last_time and not self.ended
 
     def since(self, day: float) -> int:
         """Return the day that a patient must have reached for the curve at ``day`` to concern him or her."""
@@ -114,12 +123,13 @@ def stretches(table: RiskTable, at_risk: np.ndarray, events: np.ndarray) -> list
     return found
 
 
-def span(table: RiskTable, parts: list[Stretch]) -> Span:
-    """Return the days covered by the stretches of a table."""
+def span(table: RiskTable, parts: list[Stretch], at_risk: np.ndarray, events: np.ndarray) -> Span:
+    """Return the days covered by the stretches made of a table."""
     restarts = tuple(
         Restart(int(table.time[before.stop - 1]), after.begins) for before, after in pairwise(parts)
     )
-    return Span(parts[0].begins, int(table.time[-1]), restarts)
+    ended = bool(events[-1] == at_risk[-1] > 0)
+    return Span(parts[0].begins, int(table.time[-1]), restarts, ended)
 
 
 def remaining_at_risk(table: RiskTable) -> np.ndarray:

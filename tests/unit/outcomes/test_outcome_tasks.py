@@ -132,6 +132,12 @@ def test_times_beyond_follow_up_are_said_to_be(ask, cohort_of):
     assert {"path": path, "at": None, "reason": "not_a_number"} in reply["nulls"]
 
 
+def test_a_curve_that_came_down_to_zero_stays_there(ask, cohort_of):
+    """All had died by then: that is known, not beyond follow-up."""
+    late = ask(cohort_of([100, 400], "dd"), "survival", years=[30])["answer"]["curves"][0]["at_years"][0]
+    assert (late["beyond_follow_up"], late["estimate"]["value"]) == (False, 0)
+
+
 def test_a_group_that_was_lost_entirely_has_bounds_only(ask, cohort_of):
     """No estimate is given; the bounds are from nothing to everything."""
     cohort = cohort_of([100] * 12 + [2000] * 12, "l" * 12 + "+" * 12, groups=["a"] * 12 + ["b"] * 12)

@@ -196,7 +196,7 @@ def test_a_last_observation_censored_does_not_drop_to_zero(table_of):
     """And beyond it nothing is given."""
     curve = product_limit(table_of([2, 4], "d+"), DIED)
     assert curve.at(4).value == 0.5
-    assert not curve.speaks_of(5)
+    assert not curve.span.speaks_of(5)
     assert math.isnan(curve.at(5).value)
 
 
@@ -248,6 +248,13 @@ def test_late_comers_do_not_tighten_the_exact_limit(table_of):
     """Two were at risk early on, so a death then could easily have been missed, however many came later."""
     curve = product_limit(table_of([9] * 52, "+" * 52, entries=[0, 0] + [5] * 50), DIED)
     assert curve.lower == pytest.approx([0.025**0.5] * len(curve.lower))
+
+
+def test_counts_too_great_for_32_bits(table_of):
+    """One death among 70,000: n (n - d) is 4.9e9, which 32 bits, as in WebAssembly, cannot hold."""
+    found = product_limit(table_of([1] + [9] * 69_999, ["d"] + ["+"] * 69_999), DIED).at(1)
+    assert found.value == pytest.approx(69_999 / 70_000, rel=1e-15)
+    assert found.standard_error == pytest.approx(math.sqrt(69_999) / 70_000**1.5, rel=1e-12)
 
 
 def test_never_at_risk_is_said(table_of):
