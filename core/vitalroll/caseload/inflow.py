@@ -4,7 +4,8 @@ from __future__ import annotations
 
 import datetime
 import math
-from dataclasses import dataclass
+from collections.abc import Sequence
+from dataclasses import dataclass, field
 
 import numpy as np
 
@@ -21,7 +22,7 @@ FEWEST_WHOLE_YEARS = 2
 
 _CHANCE_OF_A_LATE_FIRST_ARRIVAL = 0.05
 _CHANCE_OF_A_SILENT_END = 0.001
-_SHARE_SEEN_LATE_WORTH_SAYING = 0.05
+_DAYS_OF_OPENING = 365
 
 
 @dataclass(frozen=True)
@@ -53,6 +54,10 @@ class Inflow:
         Whole calendar years behind the mean.
     history_years : float
         From the first day anyone was seen here to the closing date.
+    days_at_arrival : int array
+        Days between start and arrival here, one entry for each newcomer of the history: 0 for
+        those who started here, more for those who came later from elsewhere. A single 0 when
+        the history has no newcomers.
     cautions : tuple of Caution
     """
 
@@ -62,6 +67,7 @@ class Inflow:
     model: str
     whole_years: int
     history_years: float
+    days_at_arrival: np.ndarray = field(default_factory=lambda: np.zeros(1, dtype=np.int64))
     cautions: tuple[Caution, ...] = ()
 
     @property
@@ -73,9 +79,10 @@ class Inflow:
 def inflow_from_history(cohort: Cohort, *, confidence: float = 0.95) -> Inflow:
     """Count newcomers by calendar year and give their mean over the whole years.
 
-    A newcomer counts in the year in which observation began here (the start, or with delayed
-    entry the day first seen). Those whose disease started before the register's first day are
-    old cases that were entered when it opened, not newcomers.
+    A newcomer counts in the year in which observation began here: the start, or with delayed
+    entry the day first seen. Those whose start lies before the register's first day and who
+    were first seen within a year of it are taken for old cases, entered as they came by after it
+    opened, not for newcomers.
 
     The last year is whole only if the closing date is its last day. The first year is whole
     unless its newcomers begin later than chance allows: if its c newcomers were spread evenly
@@ -97,8 +104,8 @@ def inflow_from_history(cohort: Cohort, *, confidence: float = 0.95) -> Inflow:
     --------
     ``history_too_short`` (whole_years, needed), ``newcomers_overdispersed`` (dispersion),
     ``newcomers_trend`` (percent_per_year, p), ``no_newcomers_lately`` (last, days),
-    ``old_cases_not_newcomers`` (count), ``newcomers_seen_late`` (count, share),
-    ``years_without_newcomers`` (count, year: the first of them).
+    ``old_cases_not_newcomers`` (count), ``years_without_newcomers`` (count, year: the first of
+    them).
 
     References
     ----------
@@ -113,7 +120,7 @@ def inflow_from_history(cohort: Cohort, *, confidence: float = 0.95) -> Inflow:
     if np.any(seen_first > cohort.closing):
         raise Refusal("start_after_closing", line=int(cohort.line[np.argmax(seen_first > cohort.closing)]))
     opening = int(seen_first.min())
-    newcomer = cohort.start >= opening
+    newcomer = (cohort.start >= opening) | (seen_first >= opening + _DAYS_OF_OPENING)
     arrivals = np.sort(seen_first[newcomer])
     years = _by_year(arrivals, opening, cohort.closing)
     counts = np.array([year.count for year in years if year.whole], dtype=np.int64)
@@ -122,7 +129,7 @@ def inflow_from_history(cohort: Cohort, *, confidence: float = 0.95) -> Inflow:
     per_year = mean_of_counts(counts, spread=dispersion if overdispersed else 1.0, confidence=confidence)
     cautions = [
         *_cautions_about_counts(years, counts, dispersion),
-        *_cautions_about_arrivals(cohort, newcomer, arrivals, per_year.value),
+        *_cautions_about_arrivals(arrivals, len(cohort) - len(arrivals), cohort.closing, per_year.value),
     ]
     return Inflow(
         years=years,
@@ -131,12 +138,16 @@ def inflow_from_history(cohort: Cohort, *, confidence: float = 0.95) -> Inflow:
         model="negative_binomial" if overdispersed else "poisson",
         whole_years=len(counts),
         history_years=(cohort.closing - opening + 1) / DAYS_PER_YEAR,
+        days_at_arrival=cohort.entry[newcomer] if newcomer.any() else np.zeros(1, dtype=np.int64),
         cautions=tuple(cautions),
     )
 
 
-def inflow_typed(per_year: float) -> Inflow:
+def inflow_typed(per_year: float, *, days_at_arrival: Sequence[int] | np.ndarray = (0,)) -> Inflow:
     """Take a yearly number of newcomers as given: the rate is certain, the counts are Poisson.
+
+    ``days_at_arrival`` says how long after their start they come, as in ``Inflow``; by default
+    all come on the day they start.
 
     Raises
     ------
@@ -154,6 +165,7 @@ def inflow_typed(per_year: float) -> Inflow:
         model="typed",
         whole_years=0,
         history_years=math.nan,
+        days_at_arrival=np.asarray(days_at_arrival, dtype=np.int64),
     )
 
 
@@ -225,17 +237,13 @@ def _cautions_about_counts(
 
 
 def _cautions_about_arrivals(
-    cohort: Cohort, newcomer: np.ndarray, arrivals: np.ndarray, per_year: float
+    arrivals: np.ndarray, old_cases: int, closing: int, per_year: float
 ) -> list[Caution]:
     cautions = []
-    old = int(np.count_nonzero(~newcomer))
-    if old:
-        cautions.append(Caution("old_cases_not_newcomers", {"count": old}))
-    late = int(np.count_nonzero(newcomer & (cohort.entry > 0)))
-    if late > _SHARE_SEEN_LATE_WORTH_SAYING * len(arrivals):
-        cautions.append(Caution("newcomers_seen_late", {"count": late, "share": late / len(arrivals)}))
+    if old_cases:
+        cautions.append(Caution("old_cases_not_newcomers", {"count": old_cases}))
     if len(arrivals):
-        silent = cohort.closing - int(arrivals[-1])
+        silent = closing - int(arrivals[-1])
         if math.exp(-per_year * silent / DAYS_PER_YEAR) < _CHANCE_OF_A_SILENT_END:
             last = datetime.date.fromordinal(int(arrivals[-1])).isoformat()
             cautions.append(Caution("no_newcomers_lately", {"last": last, "days": silent}))

@@ -108,10 +108,11 @@ def prospect(
         today, hazards, inflow, years=years, what_if=what_if, draws=draws, seed=seed, report=report
     )
     rate = inflow.per_year.value
-    expected = project(today, hazards, rate, years=years)
+    late = inflow.days_at_arrival
+    expected = project(today, hazards, rate, years=years, days_at_arrival=late)
     changed = None
     if what_if:
-        altered = project(today, hazards, rate, years=years, what_if=what_if)
+        altered = project(today, hazards, rate, years=years, days_at_arrival=late, what_if=what_if)
         changed = _outlook(altered, drawn.what_if, resources)
     return Prospect(
         baseline=_outlook(expected, drawn.baseline, resources),

@@ -1,7 +1,7 @@
 """The expected caseload, month by month: today's patients run forward, newcomers added.
 
 A discrete cohort-component model. Patients stand in slots by time since their start: slot 0
-holds the newcomers of the month, slot 1 those up to one month from their start, and so on.
+holds those who start within the month, slot 1 those up to one month from their start, and so on.
 Each month everyone moves on by one slot or leaves in one of the ways in ``competing.WAYS_OF_LEAVING``. The
 last slot gathers all who have been here longer than the register supports.
 """
@@ -55,10 +55,21 @@ class Ageing:
         """Count patients into the slots, given whole months since start."""
         return np.bincount(np.minimum(months_since_start + 1, self.slots - 1), minlength=self.slots)
 
+    def arriving(self, days_since_start: np.ndarray) -> np.ndarray:
+        """Return the shares of newcomers that go into each slot, shape (slots,), adding up to 1.
+
+        Who arrives with half a month or more since the start goes where he or she will be found,
+        on average, at the end of the month: into the slot before that. Such a newcomer goes through
+        the hazard of a whole month in the month of arrival, instead of half a one.
+        """
+        slots = np.rint(np.asarray(days_since_start) / DAYS_PER_MONTH).astype(np.int64)
+        counts = np.bincount(np.minimum(slots, self.slots - 1), minlength=self.slots)
+        return counts / counts.sum()
+
     def staying(self, monthly: np.ndarray) -> np.ndarray:
         """Return each slot's chance of staying through a month (..., slots), from ``hazards``.
 
-        exp(-H), except for the newcomers of the month: they arrive evenly spread over it, so
+        exp(-H), except for those who start within the month: they arrive evenly spread over it, so
         survival is averaged over the month, (1 - exp(-H))/H (Capocaccia & De Angelis 1997, Stat
         Med 16:425-440, average in the same way over the year of diagnosis).
         """
@@ -132,6 +143,7 @@ def project(
     newcomers_per_year: float,
     *,
     years: int,
+    days_at_arrival: np.ndarray | None = None,
     what_if: WhatIf | None = None,
 ) -> Path:
     """Run the caseload forward and return what is expected.
@@ -144,6 +156,8 @@ def project(
     newcomers_per_year : float
         Arriving evenly through the year.
     years : int
+    days_at_arrival : int array, optional
+        Days since start of newcomers as they arrive, a sample; by default all start here.
     what_if : WhatIf, optional
         Holds from the first month of its ``from_year``.
 
@@ -171,6 +185,7 @@ def project(
     monthly = axis.hazards(hazards.hazards)
     staying, shares = axis.staying(monthly), shares_by_way(monthly)
     arriving = newcomers_per_year / MONTHS_PER_YEAR
+    into = axis.arriving(np.zeros(1) if days_at_arrival is None else days_at_arrival)
     changed_from = MONTHS_PER_YEAR * (what_if.from_year - 1) if what_if else None
     steps = MONTHS_PER_YEAR * years
     here = axis.place(today).astype(float)
@@ -181,7 +196,8 @@ def project(
             monthly = monthly * what_if.hazards_kept
             staying, shares = axis.staying(monthly), shares_by_way(monthly)
             arriving = arriving * what_if.newcomers_kept
-        here[0] = newcomers[month] = arriving
+        newcomers[month] = arriving
+        here = here + arriving * into
         leavers = here * (1 - staying)
         leaving[month] = np.add.reduceat(leavers, axis.begins) @ shares
         here = moved_on(here - leavers)

@@ -118,7 +118,7 @@ def redraw(
         if given < 1:
             raise Refusal("out_of_range", field=field, given=given, least=1)
     axis = ageing(hazards.edges)
-    placed = axis.place(today)
+    placed, into = axis.place(today), axis.arriving(inflow.days_at_arrival)
     # Streams of their own, so that what is drawn for a what-if never shifts the baseline's.
     parameters, counts, others = map(np.random.default_rng, np.random.SeedSequence(seed).spawn(3))
     chunks = []
@@ -127,7 +127,7 @@ def redraw(
         size = min(_DRAWS_AT_A_TIME, draws - done)
         monthly = axis.hazards(drawn_hazards(hazards, size, parameters))
         arriving = drawn_arrivals(inflow, size, years, parameters)
-        chunks.append(_chunk(axis, placed, monthly, arriving, what_if, counts, others))
+        chunks.append(_chunk(axis, placed, monthly, arriving, into, what_if, counts, others))
     report("draws", draws, draws)
     return Draws(
         baseline=_joined([chunk.baseline for chunk in chunks]),
@@ -168,15 +168,18 @@ def _chunk(
     placed: np.ndarray,
     monthly: np.ndarray,
     arriving: np.ndarray,
+    into: np.ndarray,
     what_if: WhatIf | None,
     counts: np.random.Generator,
     others: np.random.Generator,
 ) -> Draws:
     """Run one chunk of draws: monthly hazards (draws, runs, ways), arrivals (draws, years).
 
-    ``counts`` draws who comes and leaves in the baseline; ``others`` the ways and the what-if.
+    ``into`` is the share of arrivals that goes into each slot. ``counts`` draws who comes and
+    leaves in the baseline; ``others`` the ways and the what-if.
     """
     draws, years = arriving.shape
+    entrances = np.flatnonzero(into)
     leaving_chance = 1 - axis.staying(monthly)
     here = np.tile(placed.astype(np.int64), (draws, 1))
     under_care = np.empty((draws, MONTHS_PER_YEAR * years + 1), dtype=np.int64)
@@ -186,10 +189,12 @@ def _chunk(
     change = _Change(axis, monthly, what_if, years, others) if what_if else None
     for month in range(MONTHS_PER_YEAR * years):
         year = month // MONTHS_PER_YEAR
-        here[:, 0] = counts.poisson(arriving[:, year])
-        newcomers[:, year] += here[:, 0]
+        arrived = counts.poisson(arriving[:, year, np.newaxis] * into[entrances])
+        here[:, entrances] += arrived
+        newcomers[:, year] += arrived.sum(axis=1)
         leavers = counts.binomial(here, leaving_chance)
         if change and year + 1 >= what_if.from_year:
+            change.arrive(year, arrived, entrances)
             change.follow(month, here, leavers)
         else:
             left[:, year] += np.add.reduceat(leavers, axis.begins, axis=1)
@@ -239,11 +244,17 @@ class _Change:
         self._of_missing = np.zeros_like(self._in_both)
         self._of_extra = np.zeros_like(self._in_both)
 
+    def arrive(self, year: int, arrived: np.ndarray, entrances: np.ndarray) -> None:
+        """Let newcomers of the baseline, (draws, entrances), stay away."""
+        if self._what_if.fewer_newcomers:
+            away = self._random.binomial(arrived, 1 - self._what_if.newcomers_kept)
+            self._missing[:, entrances] += away
+            self.kept_away[:, year] += away.sum(axis=1)
+
     def follow(self, month: int, here: np.ndarray, leavers: np.ndarray) -> None:
         """Take one month of the baseline: those here in each slot and those of them who leave."""
         random, year = self._random, month // MONTHS_PER_YEAR
-        of_missing = self._leavers_missing(month, here, leavers)
-        self.kept_away[:, year] += self._missing[:, 0]
+        of_missing = self._leavers_missing(here, leavers)
         averted = random.binomial(leavers - of_missing, self._prevented)
         again = random.binomial(averted, self._again)
         of_extra = random.binomial(self._extra, self._leaving_chance)
@@ -266,16 +277,12 @@ class _Change:
         of_extra = _by_way(self._of_extra, self._changed, self._random)
         return both + averted + of_missing, both + of_extra
 
-    def _leavers_missing(self, month: int, here: np.ndarray, leavers: np.ndarray) -> np.ndarray:
-        """Let newcomers stay away, and return how many of ``leavers`` are among the missing."""
+    def _leavers_missing(self, here: np.ndarray, leavers: np.ndarray) -> np.ndarray:
+        """Return how many of ``leavers`` are among the missing: as likely as anybody here."""
         found = np.zeros_like(leavers)
-        if self._what_if.fewer_newcomers == 0:
-            return found
-        self._missing[:, 0] = self._random.binomial(here[:, 0], 1 - self._what_if.newcomers_kept)
-        since = month - MONTHS_PER_YEAR * (self._what_if.from_year - 1)
-        young = slice(0, min(since + 1, self._axis.slots))
-        missing = self._missing[:, young]
-        found[:, young] = self._random.hypergeometric(missing, here[:, young] - missing, leavers[:, young])
+        where = np.flatnonzero(self._missing.any(axis=0))
+        missing = self._missing[:, where]
+        found[:, where] = self._random.hypergeometric(missing, here[:, where] - missing, leavers[:, where])
         return found
 
     def _count(self, kept: np.ndarray, year: int, by_slot: np.ndarray) -> None:

@@ -120,8 +120,8 @@ def history(memory: Memory, request: HistoryRequest, report: Any) -> dict[str, A
 def project_caseload(memory: Memory, request: ProjectRequest, report: Any) -> dict[str, Any]:
     """Answer ``caseload.project``: how many under care in the coming years, and what it takes.
 
-    A band is {value, p80: [lower, upper], p95: [lower, upper]}; its value is what is expected,
-    not the middle of the draws. Lists have one band for each projected year, except
+    A band is {value, p80: [lower, upper], p95: [lower, upper]}; its value is what is expected at
+    the rates observed, not the middle of the draws. Lists have one band for each projected year, except
     ``under_care``, which starts with today. In the values, those under care, plus newcomers, less
     leaving make up those under care a year later.
 
@@ -189,7 +189,7 @@ def _newcomers(asked: Newcomers, recorded: Inflow) -> Inflow:
     if asked.basis == "typed":
         if asked.per_year is None:
             raise Refusal("missing_field", field="newcomers.per_year")
-        return inflow_typed(asked.per_year)
+        return inflow_typed(asked.per_year, days_at_arrival=recorded.days_at_arrival)
     if recorded.whole_years < FEWEST_WHOLE_YEARS:
         raise Refusal(
             "history_too_short",

@@ -155,6 +155,17 @@ def test_less_than_two_whole_years_cannot_be_projected_but_typed_newcomers_can()
     assert "history_too_short" in {caution["code"] for caution in history["cautions"]}
 
 
+def test_a_register_of_old_cases_only_can_still_be_projected_with_typed_newcomers():
+    opening = day(2020)
+    rows = [(opening - 400 - i, 400 + i, 1000 + i, "under_care") for i in range(60)]
+    desk = _desk(cohort(rows, CLOSING))
+    told = _answer(desk, "caseload.project", newcomers={"basis": "typed", "per_year": 12}, draws=100)
+    assert told["baseline"]["newcomers"][0]["value"] == pytest.approx(12)
+    assert "old_cases_not_newcomers" in {
+        caution["code"] for caution in _answer(desk, "caseload.history")["cautions"]
+    }
+
+
 def test_nobody_under_care_is_refused_for_the_future_but_not_for_the_past():
     desk = _desk(cohort([(day(2015) + 7 * i, 0, 200, "lost") for i in range(300)], CLOSING))
     assert _refusal(desk, "caseload.project") == ("nobody_under_care", None)

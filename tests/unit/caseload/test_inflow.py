@@ -98,12 +98,20 @@ def test_old_cases_entered_at_the_opening_are_not_newcomers():
     assert _codes(found)["old_cases_not_newcomers"] == {"count": 5}
 
 
-def test_newcomers_count_when_first_seen_and_late_ones_are_said():
+def test_who_started_before_the_opening_but_came_over_a_year_after_it_is_a_newcomer():
+    rows = [(day(2019, 1, 5) + 20 * i, 0, 10, "under_care") for i in range(36)]
+    rows += [(day(2018, 12, 1), day(2020, 2, 1) - day(2018, 12, 1), 500, "under_care")]
+    found = inflow_from_history(cohort(rows, day(2020, 12, 31)))
+    assert sum(year.count for year in found.years) == 37
+    assert "old_cases_not_newcomers" not in _codes(found)
+
+
+def test_newcomers_count_when_first_seen_with_the_time_they_bring_along():
     rows = [(day(2019, 1, 2) + 10 * i, 0, 500, "under_care") for i in range(36)]
     rows += [(day(2019, 3, 1), 400, 500, "under_care")] * 4  # first seen in April 2020
     found = inflow_from_history(cohort(rows, day(2020, 12, 31)))
     assert [year.count for year in found.years] == [36, 4]
-    assert _codes(found)["newcomers_seen_late"] == {"count": 4, "share": 0.1}
+    assert sorted(found.days_at_arrival) == [0] * 36 + [400] * 4
 
 
 def test_one_whole_year_gives_no_dispersion_and_says_that_it_is_too_short():

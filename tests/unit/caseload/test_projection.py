@@ -83,6 +83,20 @@ def test_beyond_support_the_last_hazard_is_held_and_those_concerned_are_counted(
     assert path.beyond_support[-1] == path.under_care[-1]
 
 
+def test_newcomers_from_elsewhere_bring_their_time_along():
+    # Hazard 1.2 in the first year, none later: who comes after 400 days never leaves.
+    hazards, nobody = known_hazards({"lost": 1.2}, {}), np.zeros(0, dtype=int)
+    late = project(nobody, hazards, 120.0, years=2, days_at_arrival=np.array([400]))
+    assert late.under_care[-1] == pytest.approx(240)
+    mixed = project(nobody, hazards, 120.0, years=2, days_at_arrival=np.array([0, 400]))
+    early = project(nobody, hazards, 120.0, years=2)
+    assert mixed.under_care[-1] == pytest.approx((240 + early.under_care[-1]) / 2)
+    # 10 days are nearer to the start than to a month; 20 days are not.
+    into = ageing(hazards.edges).arriving(np.array([0, 10, 20, 9999]))
+    assert np.flatnonzero(into).tolist() == [0, 1, 25]
+    assert into[0] == 0.5
+
+
 @pytest.mark.parametrize("months", [0, 11, 12, 13, 23, 24, 240])
 def test_every_month_since_start_has_its_place(months):
     axis = ageing(np.array([0.0, 1.0, 2.0]))

@@ -55,7 +55,13 @@ def test_every_patient_is_somewhere_in_every_draw_with_and_without_the_change(
     n = len(exits)
     hazards = Retention(np.arange(n + 1.0), np.zeros(n, int), np.full(n, 60.0), np.array(exits), 0, 0)
     drawn = redraw(
-        np.array(today), hazards, inflow_typed(newcomers), years=3, what_if=what_if, draws=5, seed=seed
+        np.array(today),
+        hazards,
+        inflow_typed(newcomers, days_at_arrival=(0, 0, 200)),
+        years=3,
+        what_if=what_if,
+        draws=5,
+        seed=seed,
     )
     for course in (drawn.baseline, drawn.what_if):
         flow = course.newcomers.sum(axis=1) - course.leaving.sum(axis=(1, 2))
@@ -67,9 +73,11 @@ def test_every_patient_is_somewhere_in_every_draw_with_and_without_the_change(
 
 
 def test_draws_with_known_rates_are_centred_on_what_is_expected():
-    drawn = redraw(TODAY, HAZARDS, inflow_typed(90.0), years=3, what_if=CHANGE, draws=2000, seed=5)
+    late = np.array([0, 0, 100, 500])
+    inflow = inflow_typed(90.0, days_at_arrival=late)
+    drawn = redraw(TODAY, HAZARDS, inflow, years=3, what_if=CHANGE, draws=2000, seed=5)
     for course, what_if in ((drawn.baseline, None), (drawn.what_if, CHANGE)):
-        path = project(TODAY, HAZARDS, 90.0, years=3, what_if=what_if)
+        path = project(TODAY, HAZARDS, 90.0, years=3, days_at_arrival=late, what_if=what_if)
         # Some 36 correlated months and 7 x 3 exits: 4.5 standard errors are far out for any of them.
         assert _apart(course.under_care, path.under_care) < 4.5
         assert _apart(course.newcomers, yearly_sums(path.newcomers)) < 4.5
