@@ -23,6 +23,7 @@ FEWEST_WHOLE_YEARS = 2
 _CHANCE_OF_A_LATE_FIRST_ARRIVAL = 0.05
 _CHANCE_OF_A_SILENT_END = 0.001
 _DAYS_OF_OPENING = 365
+_TIMES_AS_COMMON = 2
 
 
 @dataclass(frozen=True)
@@ -82,7 +83,8 @@ def inflow_from_history(cohort: Cohort, *, confidence: float = 0.95) -> Inflow:
     A newcomer counts in the year in which observation began here: the start, or with delayed
     entry the day first seen. Those whose start lies before the register's first day and who
     were first seen within a year of it are taken for old cases, entered as they came by after it
-    opened, not for newcomers.
+    opened, if they are more than twice as common in that year as late entries are afterwards;
+    otherwise they are newcomers referred late, like those afterwards.
 
     The last year is whole only if the closing date is its last day. The first year is whole
     unless its newcomers begin later than chance allows: if its c newcomers were spread evenly
@@ -120,7 +122,7 @@ def inflow_from_history(cohort: Cohort, *, confidence: float = 0.95) -> Inflow:
     if np.any(seen_first > cohort.closing):
         raise Refusal("start_after_closing", line=int(cohort.line[np.argmax(seen_first > cohort.closing)]))
     opening = int(seen_first.min())
-    newcomer = (cohort.start >= opening) | (seen_first >= opening + _DAYS_OF_OPENING)
+    newcomer = ~_old_cases(cohort, seen_first, opening)
     arrivals = np.sort(seen_first[newcomer])
     years = _by_year(arrivals, opening, cohort.closing)
     counts = np.array([year.count for year in years if year.whole], dtype=np.int64)
@@ -185,6 +187,16 @@ def mean_of_counts(counts: np.ndarray, *, spread: float = 1.0, confidence: float
         upper=float(upper) * spread / years,
         standard_error=math.sqrt(total * spread) / years,
     )
+
+
+def _old_cases(cohort: Cohort, seen_first: np.ndarray, opening: int) -> np.ndarray:
+    """Return which patients were there before the register was, as a boolean array."""
+    early = seen_first < opening + _DAYS_OF_OPENING
+    before = early & (cohort.start < opening)
+    afterwards = np.count_nonzero(~early)
+    late_share = np.count_nonzero(~early & (cohort.entry > 0)) / afterwards if afterwards else 0.0
+    common = np.count_nonzero(before) > _TIMES_AS_COMMON * late_share * np.count_nonzero(early)
+    return before if common else np.zeros_like(before)
 
 
 def _by_year(arrivals: np.ndarray, opening: int, closing: int) -> tuple[YearCount, ...]:

@@ -98,6 +98,16 @@ def test_old_cases_entered_at_the_opening_are_not_newcomers():
     assert _codes(found)["old_cases_not_newcomers"] == {"count": 5}
 
 
+def test_late_referrals_as_common_in_the_first_year_as_later_are_newcomers():
+    # Every fifth patient comes 200 days after the start, in the first year as in the second.
+    rows = [
+        (day(2019, 1, 5) + 10 * i - 200 * (i % 5 == 0), 200 * (i % 5 == 0), 300, "lost") for i in range(72)
+    ]
+    found = inflow_from_history(cohort(rows, day(2020, 12, 31)))
+    assert sum(year.count for year in found.years) == 72
+    assert "old_cases_not_newcomers" not in _codes(found)
+
+
 def test_who_started_before_the_opening_but_came_over_a_year_after_it_is_a_newcomer():
     rows = [(day(2019, 1, 5) + 20 * i, 0, 10, "under_care") for i in range(36)]
     rows += [(day(2018, 12, 1), day(2020, 2, 1) - day(2018, 12, 1), 500, "under_care")]
