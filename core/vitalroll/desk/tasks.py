@@ -6,11 +6,12 @@ arrays, strings and numbers. One module for each room; this table only gathers t
 
 from __future__ import annotations
 
-from vitalroll.desk import about, caseload_tasks, counts_tasks, outcome_tasks
+from vitalroll.desk import about, caseload_tasks, comparison_tasks, counts_tasks, outcome_tasks
 
 TASKS = {
     **about.TASKS,
     **caseload_tasks.TASKS,
+    **comparison_tasks.TASKS,
     **counts_tasks.TASKS,
     **outcome_tasks.TASKS,
 }

@@ -1,0 +1,284 @@
+"""Cox's proportional-hazards regression."""
+
+from __future__ import annotations
+
+from collections.abc import Collection, Sequence
+from dataclasses import dataclass
+from typing import get_args
+
+import numpy as np
+from scipy.special import chdtrc, ndtr
+
+from vitalroll.comparison.concordance import concordance
+from vitalroll.comparison.design import Choice, Column, LeftOutCovariate, design
+from vitalroll.comparison.proportional import ProportionalTest, proportional_tests
+from vitalroll.comparison.risk_sums import (
+    FollowUp,
+    RiskSums,
+    Ties,
+    follow_up,
+    information,
+    log_likelihood,
+    risk_sums,
+    score,
+)
+from vitalroll.comparison.stratified import Chi2Test
+from vitalroll.errors import Caution, Refusal
+from vitalroll.numbers import Estimate, two_sided_z
+from vitalroll.outcomes.limits import check_confidence
+from vitalroll.outcomes.risk_table import interest_codes
+from vitalroll.register.cohort import Cohort
+
+FEW_PER_PARAMETER = 10
+TOO_FEW_PER_PARAMETER = 3
+MOST_STEPS = 50
+MOST_HALVINGS = 30
+CLOSE_ENOUGH = 1e-18
+"""Newton's decrement at which to stop; convergence is quadratic, so the step after it is below round-off."""
+
+RUNAWAY = 12.0
+"""A coefficient this far from zero, per standard deviation, is on its way to infinity."""
+
+
+@dataclass(frozen=True)
+class Term:
+    """One coefficient. ``hazard_ratio`` is for the level against the reference, or per ``per``."""
+
+    id: str
+    level: str | None
+    reference: str | None
+    per: float | None
+    n: int
+    coefficient: float
+    standard_error: float
+    z: float
+    p: float
+    hazard_ratio: Estimate
+
+
+@dataclass(frozen=True)
+class CoxFit:
+    """A fitted model.
+
+    ``log_likelihood`` is without covariates and fitted. ``tests`` has likelihood_ratio, wald and
+    score. ``proportional`` has one test for each term. ``incomplete`` counts patients left out
+    because a covariate is missing.
+    """
+
+    n: int
+    events: int
+    parameters: int
+    incomplete: int
+    ties: Ties
+    terms: tuple[Term, ...]
+    tests: dict[str, Chi2Test]
+    log_likelihood: tuple[float, float]
+    concordance: Estimate
+    proportional: tuple[ProportionalTest, ...]
+    proportional_global: Chi2Test
+    iterations: int
+    left_out: tuple[LeftOutCovariate, ...]
+    cautions: tuple[Caution, ...]
+
+
+def cox(
+    cohort: Cohort,
+    interest: Collection[str],
+    choices: Sequence[Choice],
+    *,
+    ties: Ties = "efron",
+    confidence: float = 0.95,
+) -> CoxFit:
+    """Fit hazards that differ by constant ratios between patients with different covariates.
+
+    Parameters
+    ----------
+    cohort : Cohort
+    interest : names from MEANINGS
+        The outcomes that count; every other way of leaving censors (a cause-specific hazard).
+    choices : sequence of Choice
+    ties : str
+        ``efron`` or ``breslow``.
+    confidence : float
+
+    Raises
+    ------
+    Refusal
+        Those of ``design``; ``no_events_to_compare``; ``too_few_events`` (``events``, ``parameters``) under 3 for
+        each parameter; ``level_without_events`` (``covariate``, ``level``) and ``separation`` when
+        the data hold no finite hazard ratio; ``no_convergence``.
+
+    Cautions
+    --------
+    ``few_events`` (``events``, ``parameters``) under 10 for each parameter; ``not_proportional`` (``p``);
+    ``covariate_missing`` (``n``).
+
+    References
+    ----------
+    Cox (1972) JRSS B 34:187-220; Efron (1977) JASA 72:557-565; Breslow (1974) Biometrics 30:89-99;
+    Peduzzi and others (1995) J Clin Epidemiol 48:1503-1510, relaxed by Vittinghoff & McCulloch (2007).
+    """
+    check_confidence(confidence)
+    if ties not in get_args(Ties):
+        raise Refusal("not_one_of", field="ties", given=ties, choices=list(get_args(Ties)))
+    event_of_all = np.isin(cohort.outcome, interest_codes(interest))
+    # Delayed entry on the day of leaving is no time at risk.
+    usable = ~((cohort.entry > 0) & (cohort.entry == cohort.exit))
+    plan = design(cohort, choices, usable)
+    order = np.argsort(cohort.exit[plan.complete], kind="stable")
+    entry, exit, event = (each[plan.complete][order] for each in (cohort.entry, cohort.exit, event_of_all))
+    values = plan.values[order]
+    events = int(event.sum())
+    parameters = len(plan.columns)
+    _check_events(plan.columns, values, event, parameters)
+    scale = values.std(axis=0)
+    x = (values - values.mean(axis=0)) / scale
+    data = follow_up(entry, exit, event, ties)
+    fit = _maximise(data, x, plan.columns)
+    covariance = np.linalg.inv(fit.information)
+    proportional, whole = proportional_tests(data, x, fit.sums, fit.information, plan.columns)
+    cautions = []
+    if events < FEW_PER_PARAMETER * parameters:
+        cautions.append(Caution("few_events", {"events": events, "parameters": parameters}))
+    if whole.p < 0.05:
+        cautions.append(Caution("not_proportional", {"p": whole.p}))
+    incomplete = int(np.count_nonzero(usable & ~plan.complete))
+    if incomplete:
+        cautions.append(Caution("covariate_missing", {"n": incomplete}))
+    return CoxFit(
+        n=len(event),
+        events=events,
+        parameters=parameters,
+        incomplete=incomplete,
+        ties=ties,
+        terms=tuple(
+            _term(column, fit.coefficients[i] / scale[i], float(np.sqrt(covariance[i, i])) / scale[i], confidence)
+            for i, column in enumerate(plan.columns)
+        ),
+        tests=_tests(fit, parameters),
+        log_likelihood=(fit.null_log_likelihood, fit.log_likelihood),
+        concordance=concordance(entry, exit, event, x @ fit.coefficients, confidence=confidence),
+        proportional=proportional,
+        proportional_global=whole,
+        iterations=fit.iterations,
+        left_out=plan.left_out,
+        cautions=tuple(cautions),
+    )
+
+
+def _check_events(columns: tuple[Column, ...], values: np.ndarray, event: np.ndarray, parameters: int) -> None:
+    events = int(event.sum())
+    if events == 0:
+        raise Refusal("no_events_to_compare")
+    for column, inside in zip(columns, values.T, strict=True):
+        if column.level is not None and not event[inside > 0].any():
+            raise Refusal("level_without_events", covariate=column.id, level=column.level)
+    for name in {column.id for column in columns if column.level is not None}:
+        mine = [i for i, column in enumerate(columns) if column.id == name]
+        in_reference = ~values[:, mine].any(axis=1)
+        if in_reference.any() and not event[in_reference].any():
+            raise Refusal("level_without_events", covariate=name, level=columns[mine[0]].reference)
+    if events < TOO_FEW_PER_PARAMETER * parameters:
+        raise Refusal("too_few_events", events=events, parameters=parameters)
+
+
+@dataclass(frozen=True)
+class _Maximum:
+    coefficients: np.ndarray
+    log_likelihood: float
+    null_log_likelihood: float
+    null_score: np.ndarray
+    null_information: np.ndarray
+    information: np.ndarray
+    sums: RiskSums
+    iterations: int
+
+
+def _maximise(data: FollowUp, x: np.ndarray, columns: tuple[Column, ...]) -> _Maximum:
+    """Climb by Newton's steps from 0, halving a step that would go down."""
+    coefficients = np.zeros(x.shape[1])
+    value, sums = _evaluate(data, x, coefficients)
+    start = value, score(data, x, sums), information(data, x, sums)
+    slope, curvature = start[1], start[2]
+    for iteration in range(1, MOST_STEPS + 1):
+        step = _newton_step(curvature, slope, coefficients, columns)
+        decrement = float(slope @ step)
+        better, coefficients, sums = _climb(data, x, coefficients, step, value, sums)
+        slope, curvature = score(data, x, sums), information(data, x, sums)
+        _check_runaway(coefficients, columns)
+        # The likelihood is known to about 1e-16 of its size; below that no step can be judged.
+        settled = decrement <= max(CLOSE_ENOUGH, 1e-15 * abs(better))
+        value = better
+        if settled:
+            return _Maximum(coefficients, value, *start, curvature, sums, iteration)
+    raise Refusal("no_convergence", steps=MOST_STEPS)
+
+
+def _evaluate(data: FollowUp, x: np.ndarray, coefficients: np.ndarray) -> tuple[float, RiskSums]:
+    eta = x @ coefficients
+    shift = float(eta.max())
+    sums = risk_sums(data, x, np.exp(eta - shift))
+    return log_likelihood(data, eta, sums, shift), sums
+
+
+def _newton_step(
+    curvature: np.ndarray, slope: np.ndarray, coefficients: np.ndarray, columns: tuple[Column, ...]
+) -> np.ndarray:
+    try:
+        return np.linalg.solve(curvature, slope)
+    except np.linalg.LinAlgError:
+        raise _separation(coefficients, columns) from None
+
+
+def _climb(
+    data: FollowUp, x: np.ndarray, here: np.ndarray, step: np.ndarray, value: float, sums: RiskSums
+) -> tuple[float, np.ndarray, RiskSums]:
+    for _ in range(MOST_HALVINGS):
+        there = here + step
+        found, found_sums = _evaluate(data, x, there)
+        if np.isfinite(found) and found >= value - 1e-12 * abs(value):
+            return found, there, found_sums
+        step = step / 2
+    return value, here, sums
+
+
+def _check_runaway(coefficients: np.ndarray, columns: tuple[Column, ...]) -> None:
+    if not np.isfinite(coefficients).all() or np.abs(coefficients).max() > RUNAWAY:
+        raise _separation(coefficients, columns)
+
+
+def _separation(coefficients: np.ndarray, columns: tuple[Column, ...]) -> Refusal:
+    column = columns[int(np.nanargmax(np.abs(np.nan_to_num(coefficients, nan=np.inf, posinf=np.inf))))]
+    return Refusal("separation", covariate=column.id, level=column.level)
+
+
+def _term(column: Column, coefficient: float, error: float, confidence: float) -> Term:
+    z = coefficient / error
+    margin = two_sided_z(confidence) * error
+    ratio = Estimate(
+        float(np.exp(coefficient)), float(np.exp(coefficient - margin)), float(np.exp(coefficient + margin)), error
+    )
+    return Term(
+        id=column.id,
+        level=column.level,
+        reference=column.reference,
+        per=column.per,
+        n=column.n,
+        coefficient=float(coefficient),
+        standard_error=error,
+        z=float(z),
+        p=float(2 * ndtr(-abs(z))),
+        hazard_ratio=ratio,
+    )
+
+
+def _tests(fit: _Maximum, parameters: int) -> dict[str, Chi2Test]:
+    statistics = {
+        "likelihood_ratio": 2 * (fit.log_likelihood - fit.null_log_likelihood),
+        "wald": float(fit.coefficients @ fit.information @ fit.coefficients),
+        "score": float(fit.null_score @ np.linalg.solve(fit.null_information, fit.null_score)),
+    }
+    return {
+        name: Chi2Test(statistic, parameters, float(chdtrc(parameters, statistic)))
+        for name, statistic in statistics.items()
+    }

@@ -1,0 +1,205 @@
+"""Whether one group did better: the tasks behind the Compare place."""
+
+from __future__ import annotations
+
+import dataclasses
+from dataclasses import dataclass
+from typing import Annotated, Any
+
+from vitalroll.comparison.cox import CoxFit, cox
+from vitalroll.comparison.design import Choice
+from vitalroll.comparison.intervals import compare_intervals
+from vitalroll.comparison.milestone import milestone_difference
+from vitalroll.comparison.rank_tests import Weight, rank_test
+from vitalroll.comparison.risk_sums import Ties
+from vitalroll.desk.fields import Between
+from vitalroll.desk.memory import Memory
+from vitalroll.errors import Caution, Refusal
+from vitalroll.outcomes.actuarial import Step, interval_edges
+from vitalroll.outcomes.groups import Groups, groups_of
+from vitalroll.outcomes.product_limit import product_limit
+from vitalroll.outcomes.risk_table import RiskTable
+from vitalroll.register.cohort import DEATHS, Cohort
+
+FEW_EVENTS_IN_GROUP = 5
+"""With fewer outcomes in a group a comparison hangs on one or two patients."""
+
+Confidence = Annotated[float, Between(0.5, 0.9999)]
+
+
+@dataclass(frozen=True)
+class DifferenceRequest:
+    """Fields of ``compare.difference``."""
+
+    group: str
+    exposed: str
+    reference: str
+    interest: tuple[str, ...] = DEATHS
+    years: tuple[Annotated[float, Between(0, 150)], ...] = (1.0, 3.0, 5.0)
+    confidence: Confidence = 0.95
+
+
+@dataclass(frozen=True)
+class IntervalsRequest:
+    """Fields of ``compare.intervals``."""
+
+    group: str
+    exposed: str
+    reference: str
+    interest: tuple[str, ...] = DEATHS
+    step: Step = "year"
+    intervals: Annotated[int, Between(1, 240)] = 5
+    confidence: Confidence = 0.95
+
+
+@dataclass(frozen=True)
+class RankTestRequest:
+    """Fields of ``compare.rank_test``."""
+
+    group: str
+    interest: tuple[str, ...] = DEATHS
+    weight: Weight = "log_rank"
+
+
+@dataclass(frozen=True)
+class CovariateChoice:
+    """One covariate of ``compare.cox``; see ``comparison.design.Choice``."""
+
+    id: str
+    reference: str | None = None
+    per: float = 1.0
+
+
+@dataclass(frozen=True)
+class CoxRequest:
+    """Fields of ``compare.cox``."""
+
+    covariates: tuple[CovariateChoice, ...]
+    interest: tuple[str, ...] = DEATHS
+    ties: Ties = "efron"
+    confidence: Confidence = 0.95
+
+
+def difference(memory: Memory, request: DifferenceRequest, report: Any) -> dict[str, Any]:
+    """Answer ``compare.difference``: survival of two groups at chosen times and how far apart it is.
+
+    Returns
+    -------
+    dict
+        ``rows``, each a ``milestone.Milestone``; ``cautions``.
+    """
+    exposed, reference = _pair(memory.cohort(), request.group, request.exposed, request.reference)
+    curves = [
+        product_limit(table, request.interest, confidence=request.confidence) for table in (exposed, reference)
+    ]
+    return {
+        "rows": [milestone_difference(*curves, years, confidence=request.confidence) for years in request.years],
+        "cautions": _few_events({request.exposed: exposed, request.reference: reference}, request.interest),
+    }
+
+
+def intervals(memory: Memory, request: IntervalsRequest, report: Any) -> dict[str, Any]:
+    """Answer ``compare.intervals``: two groups in each interval of follow-up, and pooled.
+
+    Returns
+    -------
+    dict
+        ``rows`` {from_days, to_days, exposed, reference (each {entering, lost, withdrawn, events,
+        effective, risk, odds}), risk_ratio, odds_ratio, risk_difference, number_needed}; ``pooled``
+        and ``homogeneity`` as in ``stratified``; ``left_out`` [{from_days, to_days, code}]; ``cautions``.
+    """
+    exposed, reference = _pair(memory.cohort(), request.group, request.exposed, request.reference)
+    compared = compare_intervals(
+        exposed,
+        reference,
+        request.interest,
+        step=request.step,
+        intervals=request.intervals,
+        confidence=request.confidence,
+    )
+    width = float(interval_edges(request.step, 1)[1])
+    return {
+        "rows": [
+            {
+                "from_days": row.from_days,
+                "to_days": row.to_days,
+                "exposed": dataclasses.asdict(row.exposed)
+                | {"risk": row.measures.exposed_risk, "odds": row.measures.exposed_odds},
+                "reference": dataclasses.asdict(row.reference)
+                | {"risk": row.measures.reference_risk, "odds": row.measures.reference_odds},
+                "risk_ratio": row.measures.risk_ratio,
+                "odds_ratio": row.measures.odds_ratio,
+                "risk_difference": row.measures.risk_difference,
+                "number_needed": row.measures.number_needed,
+            }
+            for row in compared.rows
+        ],
+        "pooled": compared.pooled.pooled,
+        "homogeneity": compared.pooled.homogeneity,
+        "left_out": [
+            {"from_days": left.stratum * width, "to_days": (left.stratum + 1) * width, "code": left.code}
+            for left in compared.left_out
+        ],
+        "cautions": [
+            *_few_events({request.exposed: exposed, request.reference: reference}, request.interest),
+            *compared.cautions,
+        ],
+    }
+
+
+def rank_tests(memory: Memory, request: RankTestRequest, report: Any) -> dict[str, Any]:
+    """Answer ``compare.rank_test``: a rank test over all groups of a covariate.
+
+    Returns
+    -------
+    dict
+        ``weight``, ``groups``, ``chi_squared``, ``df``, ``p`` as in ``rank_tests.RankTest``; ``left_out``; ``cautions``.
+    """
+    groups = groups_of(memory.cohort(), request.group)
+    tables = _named(groups)
+    result = rank_test([tables], request.interest, weight=request.weight)
+    return {
+        **{field.name: getattr(result, field.name) for field in dataclasses.fields(result)},
+        "left_out": groups.left_out,
+        "cautions": [*groups.cautions, *_few_events(tables, request.interest)],
+    }
+
+
+def regression(memory: Memory, request: CoxRequest, report: Any) -> CoxFit:
+    """Answer ``compare.cox``: a ``cox.CoxFit``."""
+    choices = [Choice(choice.id, choice.reference, choice.per) for choice in request.covariates]
+    return cox(
+        memory.cohort(), request.interest, choices, ties=request.ties, confidence=request.confidence
+    )
+
+
+def _pair(cohort: Cohort, group: str, exposed: str, reference: str) -> tuple[RiskTable, RiskTable]:
+    """Return the risk tables of two different groups; refuse any other pair by its field."""
+    if exposed == reference:
+        raise Refusal("same_group", field="reference", level=reference)
+    tables = _named(groups_of(cohort, group))
+    for field, level in (("exposed", exposed), ("reference", reference)):
+        if level not in tables:
+            raise Refusal("unknown_level", field=field, covariate=group, level=level)
+    return tables[exposed], tables[reference]
+
+
+def _named(groups: Groups) -> dict[str, RiskTable]:
+    return {str(level): table for level, table in groups.tables.items()}
+
+
+def _few_events(tables: dict[str, RiskTable], interest: tuple[str, ...]) -> list[Caution]:
+    found = []
+    for level, table in tables.items():
+        events = int(table.events(interest).sum())
+        if events < FEW_EVENTS_IN_GROUP:
+            found.append(Caution("few_events_in_group", {"level": level, "events": events}))
+    return found
+
+
+TASKS = {
+    "compare.difference": (DifferenceRequest, difference),
+    "compare.intervals": (IntervalsRequest, intervals),
+    "compare.rank_test": (RankTestRequest, rank_tests),
+    "compare.cox": (CoxRequest, regression),
+}

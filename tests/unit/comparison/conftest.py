@@ -1,0 +1,6 @@
+"""The comparison tests share small cohorts."""
+
+import sys
+from pathlib import Path
+
+sys.path.insert(0, str(Path(__file__).parent))
