@@ -40,6 +40,69 @@ def test_a_typed_life_table_is_refused_by_row():
     assert _refusal("counts.life_table", entering=10, rows=[]) == ("no_rows", "rows")
 
 
+def _stratum(label, exposed_events, exposed_total, unexposed_events, unexposed_total):
+    return {
+        "label": label,
+        "exposed_events": exposed_events,
+        "exposed_total": exposed_total,
+        "unexposed_events": unexposed_events,
+        "unexposed_total": unexposed_total,
+    }
+
+
+def test_strata_worked_by_hand():
+    # Within each stratum no difference (risks 0.4 and 0.1); lumped, (40+1)/110 against (4+10)/110.
+    told = _answer(
+        "counts.strata", strata=[_stratum("old", 40, 100, 4, 10), _stratum("young", 1, 10, 10, 100)]
+    )
+    old, young = told["rows"]
+    assert (old["label"], old["unexposed_events"], old["unexposed_risk"]["value"]) == ("old", 4, 0.4)
+    assert young["risk_ratio"]["value"] == pytest.approx(1)
+    assert young["exposed_odds"] == pytest.approx(1 / 9)
+    assert old["exact"]["p"] == pytest.approx(1)
+    assert told["crude"]["risk_ratio"]["value"] == pytest.approx(41 / 14)
+    assert told["pooled"]["risk_ratio"]["value"] == pytest.approx(1)
+    assert told["pooled"]["odds_ratio"]["value"] == pytest.approx(1)
+    assert told["pooled"]["risk_difference"]["value"] == pytest.approx(0)
+    assert told["homogeneity"]["breslow_day_tarone"]["chi_squared"] == pytest.approx(0)
+    assert told["left_out"] == []
+
+
+def test_one_stratum_pooled_is_the_crude_one():
+    told = _answer("counts.strata", strata=[_stratum("all", 12, 40, 5, 50)])
+    for name in ("risk_ratio", "odds_ratio", "risk_difference"):
+        assert told["pooled"][name]["value"] == pytest.approx(told["crude"][name]["value"])
+    assert told["homogeneity"] == {"breslow_day_tarone": None, "woolf": None}
+
+
+def test_a_stratum_that_says_nothing_is_left_out_by_name():
+    told = _answer("counts.strata", strata=[_stratum("a", 3, 10, 2, 12), _stratum("b", 0, 0, 2, 9)])
+    assert told["left_out"] == [{"stratum": 1, "label": "b", "code": "empty_group"}]
+    assert told["rows"][1]["exposed_risk"]["value"] is None
+
+
+def test_very_large_tables_need_no_exact_figures():
+    told = _answer("counts.strata", strata=[_stratum("all", 10**6, 10**8, 10**6, 10**8)])
+    assert told["rows"][0]["exact"] is None
+    assert told["rows"][0]["risk_ratio"]["value"] == 1
+
+
+@pytest.mark.parametrize(
+    ("strata", "refused"),
+    [
+        ([], ("no_strata", "strata")),
+        ([_stratum("a", 0, 0, 1, 5)], ("no_usable_strata", "strata")),
+        (
+            [_stratum("a", 1, 5, 1, 5), _stratum("b", 1, 5, 9, 5)],
+            ("more_events_than_patients", "strata.1.unexposed_events"),
+        ),
+        ([_stratum("a", -1, 5, 1, 5)], ("out_of_range", "strata.0.exposed_events")),
+    ],
+)
+def test_strata_that_cannot_be_are_refused_by_field(strata, refused):
+    assert _refusal("counts.strata", strata=strata) == refused
+
+
 LEAVING = [{"label": "died", "per_year": 10}, {"label": "lost <b>", "per_year": 30}]
 
 
