@@ -116,19 +116,20 @@ def _prefix_counts(ranks: np.ndarray, prefix: np.ndarray, wanted: np.ndarray) ->
     where its prefix went. No loop over patients, no sort: n log n in all (a wavelet matrix; Claude, Navarro
     & Ordóñez 2015, Information Systems 47:15-32).
     """
-    below = np.zeros(len(prefix), dtype=np.int64)
-    begin, end = np.zeros(len(prefix), dtype=np.int64), prefix.astype(np.int64)
+    # Counts of patients fit into 32 bits, and half the memory is twice the speed.
+    below, begin, end = (np.zeros(len(prefix), dtype=np.int32) for _ in range(3))
+    end += prefix
     if not len(ranks) or not len(prefix):
-        return below, np.zeros_like(below)
-    here = ranks.astype(np.int64)
+        return below.astype(np.int64), below.astype(np.int64)
+    here, wanted = ranks.astype(np.int32), wanted.astype(np.int32)
     for bit in reversed(range(max(1, int(max(ranks.max(), wanted.max())).bit_length()))):
-        one = ((here >> bit) & 1).astype(bool)
-        zeros_before = np.concatenate(([0], np.cumsum(~one, dtype=np.int64)))
-        zeros = zeros_before[-1]
+        one = (here & (1 << bit)) > 0
+        zeros_before = np.zeros(len(here) + 1, dtype=np.int32)
+        np.cumsum(~one, out=zeros_before[1:])
         zero_begin, zero_end = zeros_before[begin], zeros_before[end]
-        up = ((wanted >> bit) & 1).astype(bool)
+        up = (wanted & (1 << bit)) > 0
         below += np.where(up, zero_end - zero_begin, 0)
-        begin = np.where(up, zeros + begin - zero_begin, zero_begin)
-        end = np.where(up, zeros + end - zero_end, zero_end)
+        begin = np.where(up, zeros_before[-1] + begin - zero_begin, zero_begin)
+        end = np.where(up, zeros_before[-1] + end - zero_end, zero_end)
         here = np.concatenate((here[~one], here[one]))
-    return below, end - begin
+    return below.astype(np.int64), (end - begin).astype(np.int64)
