@@ -18,6 +18,10 @@ export function beginnings(language) {
     values: {},
     /** How the person reads the columns; the request of register.build. */
     reading: emptyReading(),
+    /** How far opening a file has come, and why it was refused. @type {{busy: boolean, done: number, total: number, refusal: any}|null} */
+    opening: null,
+    /** Why no cohort could be built, or null. */
+    building: null,
     /** Answer of register.build, or null. */
     cohort: null,
     question: { interest: ['died_of_disease', 'died_of_other_cause', 'died_cause_unknown'], group: null },
@@ -71,6 +75,12 @@ export function makeStore(state) {
         past.push(Object.fromEntries(CHOICES.map((name) => [name, store.state[name]])));
         if (past.length > STEPS_KEPT) past.shift();
       }
+      store.state = { ...store.state, ...parts };
+      tell();
+    },
+
+    /** Replace parts without a step to undo: answers that follow from choices already made. */
+    settle(parts) {
       store.state = { ...store.state, ...parts };
       tell();
     },

@@ -351,7 +351,133 @@ cox-method-breslow = Cox (1972), ties by Breslow (1974), Wald limits; proportion
 
 ## Caseload
 
-caseload-title = Caseload
+
+caseload-title = Who will be under care
+caseload-lead = From the register's own newcomers and its own leaving: who will be under care, and what that takes. Rates of the past are carried forward; nothing is known of what has never happened yet.
+calendar-year = Year
+newcomers = Newcomers
+whole-year = Wholly covered
+yes = yes
+no = no
+person-years = Person-years
+left-in-all = Left in all
+staying = Stayed through it
+baseline = As it is now
+what-if = What if
+under-care = Under care
+on-day = On
+year-to = Year to
+band-80 = 80% of runs
+band-95 = 95% of runs
+percent-sign = %
+difference = Difference
+axis-years-from-closing = Years from the closing date
+
+history-title = What the past says
+newcomers-sentence = About { $mean } patients a year have come ({ $lower } to { $upper }), judging from { $years ->
+    [one] one whole year
+   *[other] { $years } whole years
+  }.
+newcomers-sentence-unknown = There is no whole year of history to judge newcomers by. Type a number below.
+newcomers-figure = Newcomers by the year they were first seen here
+newcomers-figure-described = Bars of newcomers for each calendar year; years not wholly covered are hollow, and a dashed line marks the yearly mean.
+retention-sentence = { $staying } stayed through the first { $years ->
+    [one] year
+   *[other] { $years } years
+  }; of those who left then, most had “{ $way }” ({ $share }).
+retention-sentence-nobody = Nobody has left in the first { $years ->
+    [one] year
+   *[other] { $years } years
+  }.
+retention-caption = Leaving for each 100 patient-years of care, by years since start
+retention-note = From { $years } years since start on, too little has been seen: the last line is carried on.
+today-caption = The { $total } patients under care at the closing date, by years since start
+history-method = Newcomers: Poisson limits (Garwood 1936), widened where years differ more than chance would explain. Leaving: outcomes over person-years in each year since start, by cause.
+
+projection-title = The coming years
+projection-needs-newcomers = Type how many newcomers to expect each year.
+years-ahead = Years ahead
+newcomers-basis = Newcomers
+newcomers-basis-history = as in the past
+newcomers-basis-typed = typed
+newcomers-per-year = Newcomers a year
+projection-sentence = From { $today } now, about { $value } will be under care on { $ends } (95 of 100 runs: { $lower } to { $upper }).
+projection-figure = Patients under care, with bands for 80 and 95 of 100 runs
+projection-figure-described = A line from today's number over { $years ->
+    [one] { $years } year
+   *[other] { $years } years
+  }, with bands that widen, and a dashed line for the what-if; the table below holds the values.
+projection-caption = Patients under care at the end of each year
+projection-note = { $draws } runs, seed { $seed }: the same seed gives the same bands.
+projection-method = Today's patients are run forward by how long they have been here, newcomers by survival since arrival (Capocaccia & De Angelis 1997; Verdecchia and others 2002), month by month; rates and counts are redrawn in each run. Beyond { $years } years since start the last rates are held.
+
+what-if-title = What if
+what-if-use = Show one what-if beside the baseline
+what-if-off = Tick the box to see a what-if beside the baseline.
+lever-fewer_newcomers = Fewer newcomers by
+lever-fewer_lost = Fewer lost by
+lever-fewer_deaths = Fewer deaths by
+lever-fault = From 0 to 100.
+lever-from-year = From year
+lever-from-year-hint = 1 is the first year after the closing date.
+what-if-sentence = After { $years ->
+    [one] { $years } year
+   *[other] { $years } years
+  } there would be { $more } patients under care than otherwise (95 of 100 runs: { $lower } to { $upper }), { $deaths } deaths and { $lost } lost over the whole time.
+what-if-caption = What the what-if changes over { $years ->
+    [one] { $years } year
+   *[other] { $years } years
+  }
+what-if-note = A programme that reaches these percentages is assumed, not shown to exist. Its own cost is not counted.
+difference-under_care = Under care at the end
+difference-newcomers = Newcomers, in all
+difference-deaths = Deaths, in all
+difference-lost = Lost, in all
+difference-patient_years = Patient-years of care, in all
+difference-visits = Visits, in all
+difference-medicine_units = Medicine units, in all
+difference-cost = Cost, in all
+what-if-method = Each percentage lowers its rate from the chosen year on; both courses use the same random numbers, so that the difference is not blurred by chance.
+
+resources-title = What it takes
+resources-type = Type what one patient needs in a year of care.
+resource-visits-per = Visits per patient-year
+resource-medicine_units-per = Medicine units per patient-year
+resource-cost-per = Cost per patient-year
+resource-visits = Visits in each year
+resource-medicine_units = Medicine units in each year
+resource-cost = Cost in each year, in the currency typed, without discount
+resource-visits-sentence = Year { $years } will take about { $amount } visits.
+resource-medicine_units-sentence = Year { $years } will take about { $amount } units of medicine.
+resource-cost-sentence = Year { $years } will cost about { $amount }.
+resources-method = Patient-years of care in each year, times what was typed. Prices and practice are taken to stay as they are.
+
+caution-history_too_short = The register holds { $whole_years ->
+    [0] no whole year
+    [one] one whole year
+   *[other] { $whole_years } whole years
+  } of newcomers; { $needed } are needed to carry them forward. Type a number instead.
+caution-newcomers_overdispersed = Newcomers differ between years more than chance would explain (by a factor of { NUMBER($dispersion, maximumFractionDigits: 1) }); the bands are widened for it.
+caution-newcomers_trend = Newcomers have changed by about { NUMBER($percent_per_year, maximumFractionDigits: 0) }% a year. The projection does not carry the trend on: if it goes on, type a number that you expect.
+caution-years_without_newcomers = { $count ->
+    [one] In one year ({ NUMBER($year, useGrouping: "false") }) nobody was registered
+   *[other] In { $count } years (the first is { NUMBER($year, useGrouping: "false") }) nobody was registered
+  }. If registration had stopped, the mean is too low.
+caution-old_cases_not_newcomers = { $count } patients were old cases when the register opened and are not counted as newcomers.
+caution-no_newcomers_lately = Nobody has been registered since { $last }, { $days } days before the closing date. If registration lags behind, the last year is too low.
+caution-retention_thin = Only { NUMBER($person_years, maximumFractionDigits: 0) } person-years and { $exits } leavings were seen: the rates of leaving are rough.
+caution-no_exits_observed = Nobody left between { $from_years } and { $to_years } years since start. The rate there is taken as 0; it could be as high as { NUMBER($upper, maximumFractionDigits: 2) } a year.
+caution-under_care_long_unseen = { $count } of those under care ({ $share }) were last seen over { $days } days before the closing date. Some may be lost: check them, for they swell the caseload.
+caution-horizon_beyond_history = { $years } years ahead is longer than the { $history_years } years that the register has seen. Read the far end as a sketch.
+caution-hazard_held = At the end, { $share } of those under care will be beyond { $from_years } years since start, where the last rates seen are merely carried on.
+refusal-nobody_under_care = Nobody is under care at the closing date, so there is nobody to run forward.
+refusal-no_person_time = Nobody was observed for even a day, so no rates can be worked out.
+refusal-start_after_closing = Line { $line } starts after the closing date.
+refusal-history_too_short = The register holds { $whole_years ->
+    [0] no whole year
+    [one] one whole year
+   *[other] { $whole_years } whole years
+  } of newcomers; { $needed } are needed to carry them forward. Choose “typed” and type a number.
 
 ## From counts
 

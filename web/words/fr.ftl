@@ -351,7 +351,133 @@ cox-method-breslow = Cox (1972), ex æquo selon Breslow (1974), limites de Wald 
 
 ## Caseload
 
-caseload-title = File active
+
+caseload-title = Qui sera suivi
+caseload-lead = À partir des arrivées et des sorties du registre lui-même : qui sera suivi, et ce que cela demande. Les taux du passé sont prolongés ; rien n’est su de ce qui ne s’est encore jamais produit.
+calendar-year = Année
+newcomers = Nouveaux
+whole-year = Année complète
+yes = oui
+no = non
+person-years = Personnes-années
+left-in-all = Sortis en tout
+staying = Restés jusqu’au bout
+baseline = Comme aujourd’hui
+what-if = Hypothèse
+under-care = Suivis
+on-day = Au
+year-to = Année jusqu’au
+band-80 = 80 % des tirages
+band-95 = 95 % des tirages
+percent-sign = %
+difference = Différence
+axis-years-from-closing = Années depuis la date de clôture
+
+history-title = Ce que dit le passé
+newcomers-sentence = Environ { $mean } patients par an sont arrivés ({ $lower } à { $upper }), d’après { $years ->
+    [one] une année complète
+   *[other] { $years } années complètes
+  }.
+newcomers-sentence-unknown = Aucune année complète ne permet de juger des arrivées. Saisissez un nombre ci-dessous.
+newcomers-figure = Nouveaux patients selon l’année de première visite ici
+newcomers-figure-described = Barres des nouveaux patients par année civile ; les années incomplètes sont vides et un trait pointillé marque la moyenne annuelle.
+retention-sentence = { $staying } sont restés pendant { $years ->
+    [one] la première année
+   *[other] les { $years } premières années
+  } ; parmi ceux qui sont partis alors, la plupart : « { $way } » ({ $share }).
+retention-sentence-nobody = Personne n’est sorti pendant { $years ->
+    [one] la première année
+   *[other] les { $years } premières années
+  }.
+retention-caption = Sorties pour 100 patients-années de suivi, selon les années depuis le début
+retention-note = À partir de { $years } ans depuis le début, trop peu a été observé : la dernière ligne est prolongée.
+today-caption = Les { $total } patients suivis à la date de clôture, selon les années depuis le début
+history-method = Arrivées : limites de Poisson (Garwood 1936), élargies quand les années diffèrent plus que le hasard ne l’explique. Sorties : événements rapportés aux personnes-années de chaque année depuis le début, par cause.
+
+projection-title = Les années à venir
+projection-needs-newcomers = Saisissez combien de nouveaux patients attendre chaque année.
+years-ahead = Nombre d’années
+newcomers-basis = Nouveaux patients
+newcomers-basis-history = comme par le passé
+newcomers-basis-typed = saisis
+newcomers-per-year = Nouveaux par an
+projection-sentence = De { $today } aujourd’hui, environ { $value } seront suivis le { $ends } (95 tirages sur 100 : { $lower } à { $upper }).
+projection-figure = Patients suivis, avec bandes pour 80 et 95 tirages sur 100
+projection-figure-described = Une ligne à partir du nombre d’aujourd’hui sur { $years ->
+    [one] { $years } an
+   *[other] { $years } ans
+  }, avec des bandes qui s’élargissent et un trait pointillé pour l’hypothèse ; le tableau ci-dessous contient les valeurs.
+projection-caption = Patients suivis à la fin de chaque année
+projection-note = { $draws } tirages, germe { $seed } : le même germe donne les mêmes bandes.
+projection-method = Les patients d’aujourd’hui sont prolongés selon leur ancienneté, les nouveaux selon la survie depuis l’arrivée (Capocaccia & De Angelis 1997 ; Verdecchia et coll. 2002), mois par mois ; taux et effectifs sont retirés à chaque tirage. Au-delà de { $years } ans depuis le début, les derniers taux sont maintenus.
+
+what-if-title = Une hypothèse
+what-if-use = Montrer une hypothèse à côté de la situation actuelle
+what-if-off = Cochez la case pour voir une hypothèse à côté de la situation actuelle.
+lever-fewer_newcomers = Nouveaux en moins
+lever-fewer_lost = Perdus de vue en moins
+lever-fewer_deaths = Décès en moins
+lever-fault = De 0 à 100.
+lever-from-year = À partir de l’année
+lever-from-year-hint = 1 est la première année après la date de clôture.
+what-if-sentence = Après { $years ->
+    [one] { $years } an
+   *[other] { $years } ans
+  }, il y aurait { $more } patients suivis par rapport à la situation actuelle (95 tirages sur 100 : { $lower } à { $upper }), { $deaths } décès et { $lost } perdus de vue sur toute la période.
+what-if-caption = Ce que l’hypothèse change sur { $years ->
+    [one] { $years } an
+   *[other] { $years } ans
+  }
+what-if-note = On suppose un programme qui atteint ces pourcentages ; rien ne montre qu’il existe. Son propre coût n’est pas compté.
+difference-under_care = Suivis à la fin
+difference-newcomers = Nouveaux, en tout
+difference-deaths = Décès, en tout
+difference-lost = Perdus de vue, en tout
+difference-patient_years = Patients-années de suivi, en tout
+difference-visits = Consultations, en tout
+difference-medicine_units = Unités de médicament, en tout
+difference-cost = Coût, en tout
+what-if-method = Chaque pourcentage abaisse son taux à partir de l’année choisie ; les deux évolutions utilisent les mêmes nombres aléatoires, pour que le hasard ne brouille pas la différence.
+
+resources-title = Ce que cela demande
+resources-type = Saisissez ce qu’un patient demande en une année de suivi.
+resource-visits-per = Consultations par patient-année
+resource-medicine_units-per = Unités de médicament par patient-année
+resource-cost-per = Coût par patient-année
+resource-visits = Consultations par année
+resource-medicine_units = Unités de médicament par année
+resource-cost = Coût par année, dans la monnaie saisie, sans actualisation
+resource-visits-sentence = L’année { $years } demandera environ { $amount } consultations.
+resource-medicine_units-sentence = L’année { $years } demandera environ { $amount } unités de médicament.
+resource-cost-sentence = L’année { $years } coûtera environ { $amount }.
+resources-method = Patients-années de suivi de chaque année, multipliées par ce qui a été saisi. Prix et pratiques sont supposés inchangés.
+
+caution-history_too_short = Le registre contient { $whole_years ->
+    [0] aucune année complète
+    [one] une année complète
+   *[other] { $whole_years } années complètes
+  } d’arrivées ; il en faut { $needed } pour les prolonger. Saisissez plutôt un nombre.
+caution-newcomers_overdispersed = Les arrivées diffèrent d’une année à l’autre plus que le hasard ne l’explique (d’un facteur { NUMBER($dispersion, maximumFractionDigits: 1) }) ; les bandes sont élargies en conséquence.
+caution-newcomers_trend = Les arrivées ont changé d’environ { NUMBER($percent_per_year, maximumFractionDigits: 0) } % par an. La projection ne prolonge pas cette tendance : si elle doit continuer, saisissez le nombre attendu.
+caution-years_without_newcomers = { $count ->
+    [one] Une année ({ NUMBER($year, useGrouping: "false") }), personne n’a été inscrit
+   *[other] { $count } années (la première : { NUMBER($year, useGrouping: "false") }), personne n’a été inscrit
+  }. Si l’inscription s’était arrêtée, la moyenne est trop basse.
+caution-old_cases_not_newcomers = { $count } patients étaient d’anciens cas à l’ouverture du registre et ne sont pas comptés comme nouveaux.
+caution-no_newcomers_lately = Personne n’a été inscrit depuis le { $last }, { $days } jours avant la clôture. Si l’inscription a du retard, la dernière année est trop basse.
+caution-retention_thin = Seulement { NUMBER($person_years, maximumFractionDigits: 0) } personnes-années et { $exits } sorties observées : les taux de sortie sont approximatifs.
+caution-no_exits_observed = Personne n’est sorti entre { $from_years } et { $to_years } ans depuis le début. Le taux y est pris égal à 0 ; il pourrait atteindre { NUMBER($upper, maximumFractionDigits: 2) } par an.
+caution-under_care_long_unseen = { $count } des patients suivis ({ $share }) ont été vus pour la dernière fois plus de { $days } jours avant la clôture. Certains sont peut-être perdus de vue : vérifiez-les, car ils gonflent la file active.
+caution-horizon_beyond_history = { $years } ans d’avance dépassent les { $history_years } ans observés par le registre. Lisez la fin comme une esquisse.
+caution-hazard_held = À la fin, { $share } des patients suivis auront dépassé { $from_years } ans depuis le début, où les derniers taux observés sont simplement prolongés.
+refusal-nobody_under_care = Personne n’est suivi à la date de clôture : il n’y a personne à prolonger.
+refusal-no_person_time = Personne n’a été observé ne serait-ce qu’un jour : aucun taux ne peut être calculé.
+refusal-start_after_closing = La ligne { $line } commence après la date de clôture.
+refusal-history_too_short = Le registre contient { $whole_years ->
+    [0] aucune année complète
+    [one] une année complète
+   *[other] { $whole_years } années complètes
+  } d’arrivées ; il en faut { $needed } pour les prolonger. Choisissez « saisis » et saisissez un nombre.
 
 ## From counts
 

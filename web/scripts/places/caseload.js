@@ -1,7 +1,17 @@
+/** Caseload: how many will be under care in the coming years, and what that takes. */
 import { h } from '../parts/element.js';
 import { live } from '../parts/live.js';
+import { noRegister } from '../parts/question.js';
+import { historyBlock } from './caseload/history.js';
+import { projectionBlock } from './caseload/projection.js';
+import { resourcesBlock } from './caseload/resources.js';
+import { whatIfBlock } from './caseload/what_if.js';
 
 /** @param {import('../app.js').App} app */
 export function caseloadPlace(app) {
-  return live(app, () => null, () => [h('h1', {}, app.words.say('caseload-title'))]);
+  return live(app, (state) => Boolean(state.cohort), (state) => {
+    const heading = h('h1', {}, app.words.say('caseload-title'));
+    if (!state.cohort) return [heading, noRegister(app)];
+    return [heading, h('p', {}, app.words.say('caseload-lead')), historyBlock(app), projectionBlock(app), whatIfBlock(app), resourcesBlock(app)];
+  });
 }
