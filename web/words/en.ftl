@@ -349,6 +349,42 @@ cox-left-out = Left out because they do not vary or repeat what others already s
 cox-method-efron = Cox (1972), ties by Efron (1977), Wald limits; proportional hazards by the score test of Grambsch & Therneau (1994).
 cox-method-breslow = Cox (1972), ties by Breslow (1974), Wald limits; proportional hazards by the score test of Grambsch & Therneau (1994).
 
+caution-few_events_in_group = { $level }: only { $events ->
+    [0] no outcomes
+    [one] one outcome
+   *[other] { $events } outcomes
+  }. The comparison hangs on one or two patients.
+caution-common_in_interval = The outcome is common within intervals (up to { $share }): do not read the pooled odds ratio as a hazard ratio or a ratio of risks.
+caution-strata_differ = The strata differ from one another (p { NUMBER($p, maximumFractionDigits: 3) }): look at them one by one before quoting a pooled figure.
+caution-half_added = { $strata ->
+    [one] In one stratum
+   *[other] In { $strata } strata
+  } a cell is empty; one half was added there for Woolf's test.
+caution-few_events = Only { $events } outcomes for { $parameters } coefficients: fewer than 10 for each. Take less into account, or read the result as a hint.
+caution-not_proportional = The hazard ratios change over time (p { NUMBER($p, maximumFractionDigits: 3) }). One number for the whole of follow-up hides that; look at the curves.
+caution-covariate_missing = { $n ->
+    [one] One patient
+   *[other] { $n } patients
+  } with something missing were left out; if they differ from the others, the result leans.
+refusal-one_group = There is only one group. Choose a column with two groups or more.
+refusal-no_events_to_compare = Nobody met the outcome, so there is nothing to compare.
+refusal-nothing_to_compare = At no time were two groups under observation together, so they cannot be compared.
+refusal-same_group = Choose two different groups.
+refusal-unknown_level = “{ $level }” is not a group of { $covariate } that can be compared.
+refusal-no_strata = There is nothing to compare yet.
+refusal-no_usable_strata = In no stratum or interval are there patients of both groups.
+refusal-exact_needs_whole_numbers = Exact figures need whole numbers.
+refusal-no_covariates = Tick at least one covariate.
+refusal-covariate_twice = { $covariate } is there twice.
+refusal-per_not_positive = The step for { $covariate } must be more than 0.
+refusal-nobody_complete = No patient has all of the ticked covariates recorded. Tick fewer.
+refusal-nothing_varies = { $covariate } is the same for everybody. Tick another covariate.
+refusal-reference_is_empty = Nobody is in “{ $level }” of { $covariate }. Compare with another category.
+refusal-too_few_events = { $events } outcomes are too few for { $parameters } coefficients: at least 3 for each are needed, better 10. Tick fewer covariates.
+refusal-level_without_events = Nobody in “{ $level }” of { $covariate } met the outcome, so its hazard ratio has no end. Merge that category with another in the register, or leave the covariate out.
+refusal-separation = { $covariate } separates those with the outcome from the others completely, so its hazard ratio has no end. Merge categories, or leave it out.
+refusal-no_convergence = The estimates did not settle after { $steps } steps. Take fewer covariates into account, or look for one that nearly repeats another.
+
 ## Caseload
 
 
@@ -482,6 +518,89 @@ refusal-history_too_short = The register holds { $whole_years ->
 ## From counts
 
 counts-title = From counts
+
+counts-lead = For someone who has totals and no list. Type or paste numbers; nothing has to be opened, and the answers follow as you type.
+counts-example = Fill with invented numbers
+counts-clear = Clear
+grid-cell = { $column }, row { $row }
+grid-add = Add a row
+grid-remove = Remove
+grid-remove-row = Remove row { $row }
+grid-paste-hint = Several cells copied from a spreadsheet can be pasted into any cell.
+fault-negative = Not below 0.
+fault-not-whole = A whole number.
+fault-not-positive = More than 0.
+fault-more-than-total = More than the total.
+
+counts-life-table-title = A life table from totals
+counts-life-table-lead = Count how many entered, and for each interval how many were lost, left otherwise or were still under care when the register closed, and met the outcome.
+counts-life-table-empty = Type how many entered and at least one complete row.
+counts-entering = Entered at the beginning
+counts-intervals = The intervals, in order
+width-years = Length in years
+withdrawn-typed = Otherwise withdrawn
+counts-life-table-sentence = { $survival } came through { $years } years without the outcome (95% interval { $interval }).
+
+counts-strata-title = Two groups, by strata
+counts-strata-lead = For each stratum (an age group, a stage, a hospital): how many of the group in question had the outcome, of how many; and the same for the group compared with.
+counts-strata-empty = Type at least one complete row.
+counts-strata-grid = The strata
+stratum = Stratum
+typed-exposed = the group in question
+typed-unexposed = the group compared with
+typed-exposed_events = In question: outcomes
+typed-exposed_total = In question: patients
+typed-unexposed_events = Compared with: outcomes
+typed-unexposed_total = Compared with: patients
+counts-strata-example-1 = Mild (invented)
+counts-strata-example-2 = Severe (invented)
+strata-caption = The two groups in each stratum (95% limits)
+risk-exposed = Risk, in question
+odds-exposed = Odds, in question
+risk-unexposed = Risk, compared with
+odds-unexposed = Odds, compared with
+risk-of = { $events } of { $total }: { $risk }
+exact-note = Exact odds ratio { $odds }; exact p { $p }, mid-p { $mid }.
+crude-and-pooled = Lumped together the risk ratio is { $crude }; within strata, pooled, it is { $pooled }. If the two differ much, the strata differ in more than the outcome, and the lumped figure misleads.
+strata-left-out = Left out of ratios because a group is empty, or nobody or everybody had the outcome: { $strata }.
+strata-method = Risk ratio limits Katz (1978), odds ratio Woolf (1955), risk difference Newcombe (1998); pooled by Mantel & Haenszel (1959), variances of Robins, Breslow & Greenland (1986) and Greenland & Robins (1985); exact limits conditional on the margins.
+
+counts-balance-title = Coming and leaving
+counts-balance-lead = How many are under care now, how many come and how many leave each year.
+counts-balance-empty = Type how many are under care, how many come each year, and at least one way of leaving.
+balance-prevalent = Under care now
+balance-new_per_year = New each year
+balance-population = Population
+balance-population-hint = If known, for rates per 100,000.
+balance-years = Years ahead
+balance-leaving = Leaving each year
+balance-per-year = Patients a year
+balance-example-died = Died (invented)
+balance-example-lost = Lost (invented)
+balance-example-moved_away = Moved away (invented)
+balance-sentence = From { $now } now to { $then } in { $years } years if the same number leaves each year, or { $rate } if the same share does. { $turnover } leave for each 100 patient-years.
+balance-steady = If nothing changed, the number would settle at { $steady }; a patient stays { $duration } years on average.
+balance-population-sentence = Prevalence { $prevalence } and new cases { $incidence } a year, each per 100,000 people.
+balance-caption = Under care in the coming years
+after-years = After years
+balance-fixed = Same number leaves
+balance-constant = Same share leaves
+balance-method = P + t (new − leaving) for the first, a constant rate of leaving for the second; the steady state is new per year times mean duration.
+
+refusal-no_rows = Type at least one row.
+refusal-uneven_rows = The rows are not complete.
+refusal-nobody_entered = At least one patient must enter.
+refusal-width_not_positive = Row { $row }: the length of the interval must be more than 0.
+refusal-negative_count = A number of patients cannot be below 0.
+refusal-more_left_than_entered = Row { $row }: { $left } leave, but only { $entering } are there when it begins.
+refusal-more_events_than_patients = More outcomes ({ $events }) than patients ({ $total }).
+refusal-population_not_above_prevalent = The population ({ $population }) must be larger than the number under care ({ $prevalent }).
+caution-balance_short_horizon = The first column holds for { $limit } years at most: more patients also means more leaving. Read the second column.
+caution-balance_paths_apart = By year { $year } the two columns differ ({ $under_care } and { $at_constant_rate }): read the second.
+caution-balance_reaches_zero = With the same number leaving each year nobody would be left by year { $year }.
+caution-nobody_leaves = Nobody leaves, so the number only grows and there is no steady state.
+caution-not_in_steady_state = { $new_per_year } come and { $leaving_per_year } leave each year: the number is changing, so prevalence is not simply incidence times duration.
+caution-utilisation_at_or_above_one = { $places } places are too few: { $needed } would be taken on average.
 
 ## Report
 

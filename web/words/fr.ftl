@@ -349,6 +349,42 @@ cox-left-out = Laissées de côté car elles ne varient pas ou répètent ce que
 cox-method-efron = Cox (1972), ex æquo selon Efron (1977), limites de Wald ; risques proportionnels par le test du score de Grambsch & Therneau (1994).
 cox-method-breslow = Cox (1972), ex æquo selon Breslow (1974), limites de Wald ; risques proportionnels par le test du score de Grambsch & Therneau (1994).
 
+caution-few_events_in_group = { $level } : seulement { $events ->
+    [0] aucun événement
+    [one] un événement
+   *[other] { $events } événements
+  }. La comparaison tient à un ou deux patients.
+caution-common_in_interval = L’événement est fréquent dans les intervalles (jusqu’à { $share }) : ne lisez pas le rapport des cotes regroupé comme un rapport de risques, instantanés ou non.
+caution-strata_differ = Les strates diffèrent entre elles (p { NUMBER($p, maximumFractionDigits: 3) }) : regardez-les une à une avant de citer un chiffre regroupé.
+caution-half_added = { $strata ->
+    [one] Dans une strate
+   *[other] Dans { $strata } strates
+  }, une case est vide ; un demi y a été ajouté pour le test de Woolf.
+caution-few_events = Seulement { $events } événements pour { $parameters } coefficients : moins de 10 pour chacun. Tenez compte de moins de facteurs, ou lisez le résultat comme un indice.
+caution-not_proportional = Les rapports changent au cours du temps (p { NUMBER($p, maximumFractionDigits: 3) }). Un seul nombre pour tout le suivi le cache ; regardez les courbes.
+caution-covariate_missing = { $n ->
+    [one] Un patient
+   *[other] { $n } patients
+  } aux données incomplètes ont été laissés de côté ; s’ils diffèrent des autres, le résultat penche.
+refusal-one_group = Il n’y a qu’un seul groupe. Choisissez une colonne à deux groupes ou plus.
+refusal-no_events_to_compare = Personne n’a connu l’événement : il n’y a rien à comparer.
+refusal-nothing_to_compare = À aucun moment deux groupes n’étaient observés ensemble : ils ne peuvent pas être comparés.
+refusal-same_group = Choisissez deux groupes différents.
+refusal-unknown_level = « { $level } » n’est pas un groupe de { $covariate } qui puisse être comparé.
+refusal-no_strata = Il n’y a encore rien à comparer.
+refusal-no_usable_strata = Aucune strate, aucun intervalle ne contient des patients des deux groupes.
+refusal-exact_needs_whole_numbers = Les chiffres exacts demandent des nombres entiers.
+refusal-no_covariates = Cochez au moins une covariable.
+refusal-covariate_twice = { $covariate } figure deux fois.
+refusal-per_not_positive = Le pas de { $covariate } doit dépasser 0.
+refusal-nobody_complete = Aucun patient n’a toutes les covariables cochées. Cochez-en moins.
+refusal-nothing_varies = { $covariate } est identique pour tous. Cochez une autre covariable.
+refusal-reference_is_empty = Personne n’est dans « { $level } » de { $covariate }. Comparez à une autre catégorie.
+refusal-too_few_events = { $events } événements ne suffisent pas pour { $parameters } coefficients : il en faut au moins 3 pour chacun, mieux 10. Cochez moins de covariables.
+refusal-level_without_events = Personne dans « { $level } » de { $covariate } n’a connu l’événement : son rapport n’a pas de fin. Fusionnez cette catégorie avec une autre dans le registre, ou laissez la covariable de côté.
+refusal-separation = { $covariate } sépare complètement ceux qui ont connu l’événement des autres : son rapport n’a pas de fin. Fusionnez des catégories ou laissez-la de côté.
+refusal-no_convergence = Les estimations ne se sont pas stabilisées après { $steps } étapes. Prenez moins de covariables en compte, ou cherchez celle qui en répète presque une autre.
+
 ## Caseload
 
 
@@ -482,6 +518,89 @@ refusal-history_too_short = Le registre contient { $whole_years ->
 ## From counts
 
 counts-title = À partir de totaux
+
+counts-lead = Pour qui dispose de totaux mais pas de liste. Saisissez ou collez des nombres ; il n’y a rien à ouvrir et les réponses suivent la saisie.
+counts-example = Remplir avec des nombres inventés
+counts-clear = Effacer
+grid-cell = { $column }, ligne { $row }
+grid-add = Ajouter une ligne
+grid-remove = Retirer
+grid-remove-row = Retirer la ligne { $row }
+grid-paste-hint = Plusieurs cellules copiées d’un tableur peuvent être collées dans n’importe quelle cellule.
+fault-negative = Pas en dessous de 0.
+fault-not-whole = Un nombre entier.
+fault-not-positive = Plus de 0.
+fault-more-than-total = Plus que le total.
+
+counts-life-table-title = Une table de survie à partir de totaux
+counts-life-table-lead = Comptez les entrants puis, pour chaque intervalle, les perdus de vue, ceux sortis autrement ou encore suivis à la clôture du registre, et ceux qui ont connu l’événement.
+counts-life-table-empty = Saisissez le nombre d’entrants et au moins une ligne complète.
+counts-entering = Entrants au début
+counts-intervals = Les intervalles, dans l’ordre
+width-years = Longueur en années
+withdrawn-typed = Autres sorties
+counts-life-table-sentence = { $survival } ont traversé { $years } ans sans l’événement (intervalle à 95 % : { $interval }).
+
+counts-strata-title = Deux groupes, par strates
+counts-strata-lead = Pour chaque strate (tranche d’âge, stade, hôpital) : combien du groupe étudié ont connu l’événement, sur combien ; et de même pour le groupe de comparaison.
+counts-strata-empty = Saisissez au moins une ligne complète.
+counts-strata-grid = Les strates
+stratum = Strate
+typed-exposed = le groupe étudié
+typed-unexposed = le groupe de comparaison
+typed-exposed_events = Étudié : événements
+typed-exposed_total = Étudié : patients
+typed-unexposed_events = Comparaison : événements
+typed-unexposed_total = Comparaison : patients
+counts-strata-example-1 = Légère (inventé)
+counts-strata-example-2 = Sévère (inventé)
+strata-caption = Les deux groupes dans chaque strate (limites à 95 %)
+risk-exposed = Risque, étudié
+odds-exposed = Cote, étudié
+risk-unexposed = Risque, comparaison
+odds-unexposed = Cote, comparaison
+risk-of = { $events } sur { $total } : { $risk }
+exact-note = Rapport des cotes exact { $odds } ; p exact { $p }, mi-p { $mid }.
+crude-and-pooled = Tout confondu, le rapport des risques est { $crude } ; à l’intérieur des strates, regroupé, il est { $pooled }. Si les deux diffèrent beaucoup, les strates diffèrent par plus que l’événement et le chiffre global trompe.
+strata-left-out = Hors des rapports car un groupe est vide, ou personne ou tout le monde a connu l’événement : { $strata }.
+strata-method = Limites du rapport des risques Katz (1978), du rapport des cotes Woolf (1955), de la différence Newcombe (1998) ; regroupement par Mantel & Haenszel (1959), variances de Robins, Breslow & Greenland (1986) et Greenland & Robins (1985) ; limites exactes conditionnelles aux marges.
+
+counts-balance-title = Arrivées et sorties
+counts-balance-lead = Combien sont suivis aujourd’hui, combien arrivent et combien sortent chaque année.
+counts-balance-empty = Saisissez combien sont suivis, combien arrivent chaque année et au moins une façon de sortir.
+balance-prevalent = Suivis aujourd’hui
+balance-new_per_year = Nouveaux par an
+balance-population = Population
+balance-population-hint = Si elle est connue, pour les taux pour 100 000.
+balance-years = Nombre d’années
+balance-leaving = Sorties par an
+balance-per-year = Patients par an
+balance-example-died = Décédés (inventé)
+balance-example-lost = Perdus de vue (inventé)
+balance-example-moved_away = Partis ailleurs (inventé)
+balance-sentence = De { $now } aujourd’hui à { $then } dans { $years } ans si le même nombre sort chaque année, ou { $rate } si c’est la même part. { $turnover } sortent pour 100 patients-années.
+balance-steady = Si rien ne changeait, le nombre se stabiliserait à { $steady } ; un patient reste { $duration } ans en moyenne.
+balance-population-sentence = Prévalence { $prevalence } et nouveaux cas { $incidence } par an, chacun pour 100 000 habitants.
+balance-caption = Suivis dans les années à venir
+after-years = Après (années)
+balance-fixed = Même nombre de sorties
+balance-constant = Même part de sorties
+balance-method = P + t (nouveaux − sorties) pour la première, taux de sortie constant pour la seconde ; l’état stable est le nombre de nouveaux par an multiplié par la durée moyenne.
+
+refusal-no_rows = Saisissez au moins une ligne.
+refusal-uneven_rows = Les lignes ne sont pas complètes.
+refusal-nobody_entered = Au moins un patient doit entrer.
+refusal-width_not_positive = Ligne { $row } : la longueur de l’intervalle doit dépasser 0.
+refusal-negative_count = Un nombre de patients ne peut pas être inférieur à 0.
+refusal-more_left_than_entered = Ligne { $row } : { $left } sortent, mais seuls { $entering } sont présents au début.
+refusal-more_events_than_patients = Plus d’événements ({ $events }) que de patients ({ $total }).
+refusal-population_not_above_prevalent = La population ({ $population }) doit dépasser le nombre de patients suivis ({ $prevalent }).
+caution-balance_short_horizon = La première colonne vaut pour { $limit } ans au plus : davantage de patients, c’est aussi davantage de sorties. Lisez la seconde.
+caution-balance_paths_apart = À l’année { $year }, les deux colonnes diffèrent ({ $under_care } et { $at_constant_rate }) : lisez la seconde.
+caution-balance_reaches_zero = Avec le même nombre de sorties chaque année, il ne resterait personne à l’année { $year }.
+caution-nobody_leaves = Personne ne sort : le nombre ne fait que croître et il n’y a pas d’état stable.
+caution-not_in_steady_state = { $new_per_year } arrivent et { $leaving_per_year } sortent chaque année : le nombre change, la prévalence n’est donc pas simplement l’incidence multipliée par la durée.
+caution-utilisation_at_or_above_one = { $places } places ne suffisent pas : { $needed } seraient occupées en moyenne.
 
 ## Report
 

@@ -76,7 +76,7 @@ def compare_intervals(
 
     Cautions
     --------
-    ``common_in_interval`` (``chance``): risks per interval are not small, so that the pooled odds
+    ``common_in_interval`` (``share``): risks per interval are not small, so that the pooled odds
     ratio must not be read as a hazard ratio. Those of ``stratified``.
 
     References
@@ -114,7 +114,7 @@ def compare_intervals(
         for risk in (row.measures.exposed_risk, row.measures.reference_risk)
         if risk.value > COMMON
     ]
-    common = (Caution("common_in_interval", {"chance": max(chances)}),) if chances else ()
+    common = (Caution("common_in_interval", {"share": max(chances)}),) if chances else ()
     return IntervalComparison(rows, pooled, pooled.left_out, (*common, *pooled.cautions))
 
 

@@ -34,7 +34,8 @@ export function plateStyle(width) {
 
 /**
  * Labels at the right end of lines, moved apart so that none covers another.
- * @param {Array<{label: string, y: number}>} ends y in pixels from the top
+ * @template {{label: string, y: number}} End
+ * @param {End[]} ends y in pixels from the top
  * @param {number} height of the plot in pixels; labels stay within it where there is room
  * @param {number} gap least distance in pixels
  */

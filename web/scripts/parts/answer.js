@@ -4,6 +4,20 @@ import { refusalNote } from './said.js';
 
 const PATIENCE_MS = 250;
 
+const MOST_KEPT = 12;
+/** Latest questions with their answers on the way: blocks that ask the same share one. @type {Map<string, Promise<any>>} */
+const asked = new Map();
+
+function askOnce(app, question, key, id) {
+  if (!asked.has(key)) {
+    const answer = app.engine.ask(question.task, question.request, { key: id });
+    asked.set(key, answer);
+    answer.catch(() => asked.delete(key));
+    if (asked.size > MOST_KEPT) asked.delete(asked.keys().next().value);
+  }
+  return asked.get(key);
+}
+
 /**
  * The block asks again whenever its request changes, and redraws when the language does.
  * @param {import('../app.js').App} app
@@ -20,7 +34,7 @@ export function answerBlock(app, { id, title, ask, draw, empty, choices }) {
   const heading = h('h2', { id: `${id}-heading` });
   const body = h('div', { class: 'answer', 'aria-live': 'polite', 'aria-busy': 'false' });
   const box = h('section', { id, 'aria-labelledby': `${id}-heading` }, heading, choices, body);
-  let asked = null;
+  let latestKey = null;
   let language = null;
   let latest = null;
   let wasConnected = false;
@@ -51,12 +65,12 @@ export function answerBlock(app, { id, title, ask, draw, empty, choices }) {
     const { state } = app.store;
     const question = state.engine.ready ? ask(state) : null;
     const key = JSON.stringify([question, question && state.cohort?.serial]);
-    if (key === asked) {
+    if (key === latestKey) {
       if (language !== state.language) redraw();
       language = state.language;
       return;
     }
-    asked = key;
+    latestKey = key;
     language = state.language;
     if (!question) {
       latest = null;
@@ -67,16 +81,16 @@ export function answerBlock(app, { id, title, ask, draw, empty, choices }) {
       body.setAttribute('aria-busy', 'true');
     }, PATIENCE_MS);
     try {
-      const answer = await app.engine.ask(question.task, question.request, { key: id });
-      if (key === asked) latest = { answer, state };
+      const answer = await askOnce(app, question, key, id);
+      if (key === latestKey) latest = { answer, state };
     } catch (refusal) {
       if (refusal.code === 'superseded') return;
       if (!refusal.code) throw refusal;
-      if (key === asked) latest = { refusal };
+      if (key === latestKey) latest = { refusal };
     } finally {
       clearTimeout(waiting);
     }
-    if (key === asked) redraw();
+    if (key === latestKey) redraw();
   }
 
   const stop = app.store.subscribe(update);

@@ -3,7 +3,7 @@
 /**
  * @param {import('../../app.js').App} app
  * @param {string} heading
- * @param {(row: any) => {value: number, p80: number[], p95: number[]}} pick
+ * @param {(row: any) => {value: number, p80: [number, number], p95: [number, number]}} pick
  * @param {(number: number) => string} [write]
  */
 export function bandColumns(app, heading, pick, write = app.words.count) {
