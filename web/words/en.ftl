@@ -113,6 +113,140 @@ refusal-exit_before_entry = Line { $line }: follow-up ends before it begins.
 
 register-title = Register
 
+register-lead = Open the list of patients: one row for each patient, from a spreadsheet or a text file. It is read on this computer and nowhere else.
+open-file = Choose a file, or drop one here
+open-file-hint = .csv, .tsv, .txt or .xlsx, up to { $size } MB
+open-demo = Open the invented demo register
+demo-meaning = About 1,160 invented patients of an invented rheumatic heart disease clinic, with the faults that real registers have.
+open-not-yet = A register can be opened as soon as the engine is ready and the page is sealed; see the line at the top.
+paste-summary = Or paste cells from a spreadsheet
+paste-label = Cells with their headings
+paste-open = Open what was pasted
+pasted-name = pasted cells
+opening-file = Reading…
+opening-share = Reading: { $share }
+replace-question = A register is open. Opening another one drops it, with every choice made about it.
+replace-yes = Open the other one
+replace-no = Keep this one
+
+register-example-title = What the list needs
+register-example-lead = At the least: when follow-up began, when the patient was last seen or left, and how it ended. A patient number finds duplicates and is dropped afterwards. Other columns can be used to group patients; those not used are dropped.
+register-example-caption = An invented example
+register-example-number = Number
+register-example-start = Start of follow-up
+register-example-end = Last contact or end
+register-example-outcome = How it ended
+register-example-sex = Sex
+register-example-group = Stage
+register-example-number-1 = 101
+register-example-start-1 = 14/03/2019
+register-example-end-1 = 02/06/2025
+register-example-outcome-1 = Under care
+register-example-sex-1 = F
+register-example-group-1 = Mild
+register-example-number-2 = 102
+register-example-start-2 = 20/05/2019
+register-example-end-2 = 11/01/2022
+register-example-outcome-2 = Died
+register-example-sex-2 = M
+register-example-group-2 = Severe
+register-example-number-3 = 103
+register-example-start-3 = 03/09/2020
+register-example-end-3 = 17/02/2023
+register-example-outcome-3 = Lost
+register-example-sex-3 = F
+register-example-group-3 = Moderate
+
+source-title = The file
+source-delimited = { $rows } rows, { $columns } columns, between them a { $delimiter }; letters as { $encoding }.
+source-workbook = a workbook: { $rows } rows, { $columns } columns.
+source-sheet = Sheet
+source-header = Line with the headings
+source-header-hint = Change it if the headings stand elsewhere.
+delimiter-comma = comma
+delimiter-semicolon = semicolon
+delimiter-tab = tab
+delimiter-bar = bar
+preview-caption = The first rows as they were read
+line = Line
+rows = Rows
+
+columns-title = Which column is what
+columns-lead = The choices below are proposals. Correct what is wrong; everything after follows.
+columns-caption = Columns and their use
+columns-dropped = Columns marked “not used” are dropped before anything is worked out, and so is the patient number.
+column-heading = Column
+column-looks = What stands in it
+column-role = Use
+column-unnamed = Column { $position }, without heading
+role-of = Use of { $column }
+role-none = not used
+role-patient_number = patient number
+role-start = start of follow-up (diagnosis)
+role-observed_from = first seen here, if later
+role-end = last contact or end
+role-outcome = how it ended
+role-sex = sex
+role-birth_date = date of birth
+role-age = age at start
+role-group = to group by
+order-settled = Dates: { $order }.
+order-ask = How are the dates written?
+order-day_month_year = day, month, year
+order-month_day_year = month, day, year
+order-year_month_day = year, month, day
+order-serial = spreadsheet day numbers
+
+meanings-title = How it ended: what each value means
+meanings-lead = Rows whose value has no meaning are set aside and counted.
+meanings-caption = Values of the outcome column
+meaning-none = no meaning: set aside
+meaning-of = Meaning of { $value }
+blank-value = (nothing written)
+value = Value
+means = Means
+sexes-title = Sex: what each value means
+sexes-lead = Values without a meaning count as not recorded.
+sexes-caption = Values of the sex column
+sex-none = not recorded
+
+closing-title = The closing date
+closing-label = Day on which the register was frozen
+closing-hint = Nobody is followed beyond it. It is asked for because it cannot be seen from the file, and the computer's clock is never used.
+
+understood-title = What was understood
+still-missing = Still to be chosen:
+missing-start = the column with the start of follow-up
+missing-end = the column with the last contact or end
+missing-outcome = the column that says how it ended
+missing-closing = the closing date
+missing-order = how the dates are written
+missing-meanings = what the values of the outcome column mean
+understood-sentence = { $n } patients from { $rows } rows, who started between { $first } and { $last } and were followed to { $closing } at the latest: { $years } person-years.
+outcomes-caption = How follow-up ended
+how-it-ended = How it ended
+reason = Reason
+every-line = Every line
+set-aside-nothing = No row was set aside.
+set-aside-title = { $n ->
+    [one] One row was set aside
+   *[other] { $n } rows were set aside
+  }
+set-aside-caption = Set aside, by reason
+set-aside-lines-caption = Rows set aside, with their line in the file
+changed-nothing = No row was changed.
+changed-title = { $n ->
+    [one] One row was read with a change
+   *[other] { $n } rows were read with a change
+  }
+changed-caption = Changes, by reason
+changed-lines-caption = Rows changed, with their line in the file
+dropped-columns = Dropped before analysis: { $columns }.
+next = Now:
+register-other-title = Another register
+forget = Forget everything
+forget-meaning = Drops the register and every choice made about it from memory.
+
 ## Outcomes
 
 outcomes-title = What became of the patients

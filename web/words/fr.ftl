@@ -113,6 +113,140 @@ refusal-exit_before_entry = Ligne { $line } : le suivi se termine avant d’avoi
 
 register-title = Registre
 
+register-lead = Ouvrez la liste des patients : une ligne par patient, depuis un tableur ou un fichier texte. Elle est lue sur cet ordinateur et nulle part ailleurs.
+open-file = Choisissez un fichier ou déposez-le ici
+open-file-hint = .csv, .tsv, .txt ou .xlsx, jusqu’à { $size } Mo
+open-demo = Ouvrir le registre inventé de démonstration
+demo-meaning = Environ 1 160 patients inventés d’une consultation inventée de cardiopathie rhumatismale, avec les défauts des vrais registres.
+open-not-yet = Un registre peut être ouvert dès que le moteur est prêt et la page scellée ; voyez la ligne en haut.
+paste-summary = Ou collez des cellules d’un tableur
+paste-label = Cellules avec leurs en-têtes
+paste-open = Ouvrir ce qui a été collé
+pasted-name = cellules collées
+opening-file = Lecture…
+opening-share = Lecture : { $share }
+replace-question = Un registre est ouvert. En ouvrir un autre l’abandonne, avec tous les choix faits à son sujet.
+replace-yes = Ouvrir l’autre
+replace-no = Garder celui-ci
+
+register-example-title = Ce qu’il faut dans la liste
+register-example-lead = Au minimum : le début du suivi, le dernier contact ou le départ, et comment cela s’est terminé. Un numéro de patient sert à trouver les doublons, puis il est abandonné. D’autres colonnes peuvent former des groupes ; celles qui ne servent pas sont abandonnées.
+register-example-caption = Un exemple inventé
+register-example-number = Numéro
+register-example-start = Début du suivi
+register-example-end = Dernier contact ou fin
+register-example-outcome = Issue
+register-example-sex = Sexe
+register-example-group = Stade
+register-example-number-1 = 101
+register-example-start-1 = 14/03/2019
+register-example-end-1 = 02/06/2025
+register-example-outcome-1 = Suivi
+register-example-sex-1 = F
+register-example-group-1 = Léger
+register-example-number-2 = 102
+register-example-start-2 = 20/05/2019
+register-example-end-2 = 11/01/2022
+register-example-outcome-2 = Décédé
+register-example-sex-2 = M
+register-example-group-2 = Sévère
+register-example-number-3 = 103
+register-example-start-3 = 03/09/2020
+register-example-end-3 = 17/02/2023
+register-example-outcome-3 = Perdu de vue
+register-example-sex-3 = F
+register-example-group-3 = Modéré
+
+source-title = Le fichier
+source-delimited = { $rows } lignes, { $columns } colonnes, séparées par : { $delimiter } ; caractères lus en { $encoding }.
+source-workbook = un classeur : { $rows } lignes, { $columns } colonnes.
+source-sheet = Feuille
+source-header = Ligne des en-têtes
+source-header-hint = À changer si les en-têtes sont ailleurs.
+delimiter-comma = virgule
+delimiter-semicolon = point-virgule
+delimiter-tab = tabulation
+delimiter-bar = barre verticale
+preview-caption = Les premières lignes telles qu’elles ont été lues
+line = Ligne
+rows = Lignes
+
+columns-title = À quoi sert chaque colonne
+columns-lead = Les choix ci-dessous sont des propositions. Corrigez ce qui est faux ; tout le reste en découle.
+columns-caption = Les colonnes et leur usage
+columns-dropped = Les colonnes « non utilisées » sont abandonnées avant tout calcul, de même que le numéro de patient.
+column-heading = Colonne
+column-looks = Ce qu’elle contient
+column-role = Usage
+column-unnamed = Colonne { $position }, sans en-tête
+role-of = Usage de { $column }
+role-none = non utilisée
+role-patient_number = numéro de patient
+role-start = début du suivi (diagnostic)
+role-observed_from = première visite ici, si plus tardive
+role-end = dernier contact ou fin
+role-outcome = issue
+role-sex = sexe
+role-birth_date = date de naissance
+role-age = âge au début
+role-group = pour former des groupes
+order-settled = Dates : { $order }.
+order-ask = Comment les dates sont-elles écrites ?
+order-day_month_year = jour, mois, année
+order-month_day_year = mois, jour, année
+order-year_month_day = année, mois, jour
+order-serial = numéros de jour du tableur
+
+meanings-title = L’issue : ce que signifie chaque valeur
+meanings-lead = Les lignes dont la valeur n’a pas de sens sont écartées et comptées.
+meanings-caption = Valeurs de la colonne de l’issue
+meaning-none = aucun sens : écartée
+meaning-of = Sens de { $value }
+blank-value = (rien d’écrit)
+value = Valeur
+means = Signifie
+sexes-title = Le sexe : ce que signifie chaque valeur
+sexes-lead = Les valeurs sans signification comptent comme non renseignées.
+sexes-caption = Valeurs de la colonne du sexe
+sex-none = non renseigné
+
+closing-title = La date de clôture
+closing-label = Jour où le registre a été arrêté
+closing-hint = Personne n’est suivi au-delà. Elle est demandée car le fichier ne la montre pas, et l’horloge de l’ordinateur n’est jamais utilisée.
+
+understood-title = Ce qui a été compris
+still-missing = Reste à choisir :
+missing-start = la colonne du début du suivi
+missing-end = la colonne du dernier contact ou de la fin
+missing-outcome = la colonne de l’issue
+missing-closing = la date de clôture
+missing-order = la façon d’écrire les dates
+missing-meanings = ce que signifient les valeurs de l’issue
+understood-sentence = { $n } patients tirés de { $rows } lignes, dont le suivi a commencé entre le { $first } et le { $last } et va au plus tard jusqu’au { $closing } : { $years } personnes-années.
+outcomes-caption = Comment le suivi s’est terminé
+how-it-ended = Issue
+reason = Raison
+every-line = Toutes les lignes
+set-aside-nothing = Aucune ligne n’a été écartée.
+set-aside-title = { $n ->
+    [one] Une ligne a été écartée
+   *[other] { $n } lignes ont été écartées
+  }
+set-aside-caption = Lignes écartées, par raison
+set-aside-lines-caption = Lignes écartées, avec leur numéro dans le fichier
+changed-nothing = Aucune ligne n’a été modifiée.
+changed-title = { $n ->
+    [one] Une ligne a été lue avec une modification
+   *[other] { $n } lignes ont été lues avec une modification
+  }
+changed-caption = Modifications, par raison
+changed-lines-caption = Lignes modifiées, avec leur numéro dans le fichier
+dropped-columns = Abandonnées avant l’analyse : { $columns }.
+next = Ensuite :
+register-other-title = Un autre registre
+forget = Tout oublier
+forget-meaning = Retire de la mémoire le registre et tous les choix faits à son sujet.
+
 ## Outcomes
 
 outcomes-title = Ce que sont devenus les patients

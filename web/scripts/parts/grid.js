@@ -75,9 +75,10 @@ function read(text, column) {
   return plain === '' || Number.isNaN(number) ? null : number;
 }
 
-/** Faults of number fields: missing, negative, or not whole where only whole numbers count. */
+/** Faults of number fields: negative, or not whole where only whole numbers count. */
 export function numberFaults(app, row, names, { whole = true } = {}) {
   const { say } = app.words;
+  /** @type {Record<string, string>} */
   const found = {};
   for (const name of names) {
     const value = row[name];
