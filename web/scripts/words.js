@@ -68,7 +68,8 @@ function fluentValues(parameters) {
 function formats(language, say) {
   const written = (options) => {
     const format = new Intl.NumberFormat(language, options);
-    return (number) => (number === null || number === undefined ? '–' : format.format(number));
+    // A true minus sign, as wide as a figure.
+    return (number) => (number === null || number === undefined ? '–' : format.format(number).replace('-', '\u2212'));
   };
   const fixed = (digits) => written({ minimumFractionDigits: digits, maximumFractionDigits: digits });
   const percentFormats = [0, 1, 2].map((digits) =>

@@ -115,7 +115,7 @@ register-title = Register
 
 register-lead = Open the list of patients: one row for each patient, from a spreadsheet or a text file. It is read on this computer and nowhere else.
 open-file = Choose a file, or drop one here
-open-file-hint = .csv, .tsv, .txt or .xlsx, up to { $size } MB
+open-file-hint = .csv, .tsv, .txt or .xlsx
 open-demo = Open the invented demo register
 demo-meaning = About 1,160 invented patients of an invented rheumatic heart disease clinic, with the faults that real registers have.
 open-not-yet = A register can be opened as soon as the engine is ready and the page is sealed; see the line at the top.
@@ -419,8 +419,7 @@ rank-method-fleming_harrington = Fleming & Harrington (1991), weight S(t−): ea
 
 intervals-title = Interval by interval
 intervals-lead = Of those who began each interval in “{ $exposed }” and in “{ $reference }”, how many met the outcome in it. Those lost or withdrawn in an interval count for half of it.
-intervals-caption = The two groups in each interval of follow-up (95% limits)
-effective-of = Effective number, { $group }
+intervals-caption = Outcomes of effective numbers in each interval of follow-up (95% limits)
 risk-ratio = Risk ratio
 odds-ratio = Odds ratio
 risk-difference = Risk difference, percentage points
@@ -554,7 +553,7 @@ newcomers-figure-described = Bars of newcomers for each calendar year; years not
 retention-sentence = { $staying } stayed through the first { $years ->
     [one] year
    *[other] { $years } years
-  }; of those who left then, most had “{ $way }” ({ $share }).
+  }; the commonest way of leaving then was “{ $way }” ({ $share } of those who left).
 retention-sentence-nobody = Nobody has left in the first { $years ->
     [one] year
    *[other] { $years } years

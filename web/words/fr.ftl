@@ -115,7 +115,7 @@ register-title = Registre
 
 register-lead = Ouvrez la liste des patients : une ligne par patient, depuis un tableur ou un fichier texte. Elle est lue sur cet ordinateur et nulle part ailleurs.
 open-file = Choisissez un fichier ou déposez-le ici
-open-file-hint = .csv, .tsv, .txt ou .xlsx, jusqu’à { $size } Mo
+open-file-hint = .csv, .tsv, .txt ou .xlsx
 open-demo = Ouvrir le registre inventé de démonstration
 demo-meaning = Environ 1 160 patients inventés d’une consultation inventée de cardiopathie rhumatismale, avec les défauts des vrais registres.
 open-not-yet = Un registre peut être ouvert dès que le moteur est prêt et la page scellée ; voyez la ligne en haut.
@@ -419,8 +419,7 @@ rank-method-fleming_harrington = Fleming & Harrington (1991), poids S(t−) : le
 
 intervals-title = Intervalle par intervalle
 intervals-lead = Parmi ceux qui ont commencé chaque intervalle dans « { $exposed } » et dans « { $reference } », combien y ont connu l’événement. Les perdus de vue et autres sorties d’un intervalle comptent pour moitié.
-intervals-caption = Les deux groupes dans chaque intervalle de suivi (limites à 95 %)
-effective-of = Effectif corrigé, { $group }
+intervals-caption = Événements sur effectifs corrigés dans chaque intervalle de suivi (limites à 95 %)
 risk-ratio = Rapport des risques
 odds-ratio = Rapport des cotes
 risk-difference = Différence des risques, points de pourcentage
@@ -554,7 +553,7 @@ newcomers-figure-described = Barres des nouveaux patients par année civile ; le
 retention-sentence = { $staying } sont restés pendant { $years ->
     [one] la première année
    *[other] les { $years } premières années
-  } ; parmi ceux qui sont partis alors, la plupart : « { $way } » ({ $share }).
+  } ; la sortie la plus fréquente était alors « { $way } » ({ $share } des sorties).
 retention-sentence-nobody = Personne n’est sorti pendant { $years ->
     [one] la première année
    *[other] les { $years } premières années

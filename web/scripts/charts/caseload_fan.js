@@ -32,7 +32,7 @@ export function caseloadFan({ courses }, { width, words }) {
     x: { domain: [0, years], label: null },
     y: { domain: [0, highest], label: null },
     marks: [
-      Plot.gridY({ stroke: FAINT_RULE, strokeOpacity: 1 }),
+      Plot.gridY({ ticks: 6, stroke: FAINT_RULE, strokeOpacity: 1 }),
       Plot.axisY({ tickSize: 0, ticks: 6, tickFormat: (n) => words.count(n) }),
       Plot.axisX({ ticks: points[0].map(({ year }) => year).filter((year) => year % Math.ceil(years / 10) === 0), tickFormat: (year) => words.count(year), tickSize: 4 }),
       Plot.text([words.say('axis-years-from-closing')], { frameAnchor: 'bottom', dy: 36, fill: SOFT_INK }),

@@ -20,7 +20,7 @@ export function newcomersBars({ years, mean }, { width, words }) {
     x: { type: 'band', label: null, tickFormat: (year) => String(year), ticks: years.map(({ year }) => year).filter((_, i) => i % every === 0), padding: 0.25 },
     y: { label: null, domain: [0, Math.max(1, ...years.map(({ count }) => count)) * 1.05] },
     marks: [
-      Plot.gridY({ stroke: FAINT_RULE, strokeOpacity: 1 }),
+      Plot.gridY({ ticks: 5, stroke: FAINT_RULE, strokeOpacity: 1 }),
       Plot.axisY({ tickSize: 0, ticks: 5, tickFormat: (n) => words.count(n) }),
       Plot.barY(years.filter(({ whole }) => whole), { x: 'year', y: 'count', fill: ACCENT }),
       Plot.barY(years.filter(({ whole }) => !whole), { x: 'year', y: 'count', fill: 'none', stroke: ACCENT, strokeDasharray: '3 2' }),

@@ -58,18 +58,16 @@ function interval(app, row, step) {
 
 function intervalsTable(app, answer, names, step) {
   const { say, count, decimal, percent, points, ratio, estimate } = app.words;
-  const side = (which, field, write) => ({ show: (row) => write(row[which][field]), full: (row) => row[which][field] });
-  const risk = (which) => ({ show: (row) => percent(row[which].risk.value), full: (row) => row[which].risk.value });
+  const side = (which) => ({
+    show: (row) => say('risk-of', { events: count(row[which].events), total: decimal(row[which].effective, 1), risk: percent(row[which].risk.value) }),
+    full: (row) => row[which].risk.value,
+  });
   return table(app, {
     name: 'intervals', caption: say('intervals-caption'), rows: answer.rows,
     columns: [
       { heading: say(step === 'year' ? 'interval-years' : 'interval-months'), show: (row) => interval(app, row, step), text: true },
-      { heading: say('effective-of', { group: names.exposed }), ...side('exposed', 'effective', (n) => decimal(n, 1)) },
-      { heading: say('events'), ...side('exposed', 'events', count) },
-      { heading: say('chance'), ...risk('exposed') },
-      { heading: say('effective-of', { group: names.reference }), ...side('reference', 'effective', (n) => decimal(n, 1)) },
-      { heading: say('events'), ...side('reference', 'events', count) },
-      { heading: say('chance'), ...risk('reference') },
+      { heading: names.exposed, ...side('exposed') },
+      { heading: names.reference, ...side('reference') },
       { heading: say('risk-ratio'), show: (row) => estimate(row.risk_ratio, ratio), full: (row) => row.risk_ratio?.value },
       { heading: say('odds-ratio'), show: (row) => estimate(row.odds_ratio, ratio), full: (row) => row.odds_ratio?.value },
       { heading: say('risk-difference'), show: (row) => estimate(row.risk_difference, points), full: (row) => row.risk_difference?.value },
