@@ -9,8 +9,9 @@ import french from '../words/fr.ftl';
 
 /** Languages by their tag, each with its own name for itself. */
 export const LANGUAGES = {
-  en: { name: 'English', source: english, direction: 'ltr' },
-  fr: { name: 'Français', source: french, direction: 'ltr' },
+  // Day before month, as the registers themselves mostly have it.
+  en: { name: 'English', source: english, direction: 'ltr', formats: 'en-GB' },
+  fr: { name: 'Français', source: french, direction: 'ltr', formats: 'fr' },
 };
 
 /** The language to begin with: the browser's first that we have, else English. */
@@ -23,9 +24,9 @@ export function preferredLanguage(wanted = navigator.languages) {
  * @param {string} language a key of LANGUAGES
  */
 export function wordsIn(language) {
-  const { source, direction } = LANGUAGES[language];
+  const { source, direction, formats: locale } = LANGUAGES[language];
   // No isolation marks: names from a register stand in elements of their own with dir="auto".
-  const bundle = new FluentBundle(language, { useIsolating: false });
+  const bundle = new FluentBundle(locale, { useIsolating: false });
   const faults = bundle.addResource(new FluentResource(source));
   if (faults.length) throw faults[0];
 
@@ -48,7 +49,7 @@ export function wordsIn(language) {
   }
 
   const has = (key) => bundle.hasMessage(key);
-  return { language, direction, say, has, ...formats(language, say) };
+  return { language, direction, say, has, ...formats(locale, say) };
 }
 
 /** Fluent takes strings and numbers; lists are joined, null is a dash. */

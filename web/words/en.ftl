@@ -592,7 +592,7 @@ lever-from-year-hint = 1 is the first year after the closing date.
 what-if-sentence = After { $years ->
     [one] { $years } year
    *[other] { $years } years
-  } there would be { $more } patients under care than otherwise (95 of 100 runs: { $lower } to { $upper }), { $deaths } deaths and { $lost } lost over the whole time.
+  }, compared with no change: { $more } under care (95 of 100 runs: { $lower } to { $upper }); over the whole time { $deaths } deaths and { $lost } lost.
 what-if-caption = What the what-if changes over { $years ->
     [one] { $years } year
    *[other] { $years } years

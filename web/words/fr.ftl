@@ -592,7 +592,7 @@ lever-from-year-hint = 1 est la première année après la date de clôture.
 what-if-sentence = Après { $years ->
     [one] { $years } an
    *[other] { $years } ans
-  }, il y aurait { $more } patients suivis par rapport à la situation actuelle (95 tirages sur 100 : { $lower } à { $upper }), { $deaths } décès et { $lost } perdus de vue sur toute la période.
+  }, par rapport à la situation actuelle : { $more } suivis (95 tirages sur 100 : { $lower } à { $upper }) ; sur toute la période { $deaths } décès et { $lost } perdus de vue.
 what-if-caption = Ce que l’hypothèse change sur { $years ->
     [one] { $years } an
    *[other] { $years } ans

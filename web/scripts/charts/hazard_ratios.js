@@ -30,7 +30,7 @@ export function hazardRatios(terms, { width, words }) {
       Plot.dot(rows, { y: 'row', x: 'value', r: 4.5, fill: '#0b5563', symbol: 'square' }),
       Plot.text(rows, {
         y: 'row', text: 'label', frameAnchor: 'left', textAnchor: 'start', dy: -TEXT_SIZE - 4, fill: INK, fontWeight: 600,
-        stroke: 'white', strokeWidth: 4,
+        stroke: 'white', strokeWidth: 6,
       }),
       Plot.axisX({ ticks: ratioTicks(least, greatest), tickFormat: (value) => words.ratio(value), tickSize: 4 }),
       Plot.text([words.say('axis-hazard-ratio')], { frameAnchor: 'bottom', dy: 38, fill: SOFT_INK }),

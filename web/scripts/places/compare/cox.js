@@ -57,7 +57,7 @@ function mainSentence(app, term, answer) {
   const direction = lower > 1 ? 'higher' : upper < 1 ? 'lower' : 'unclear';
   return h('p', { class: 'sentence' }, say(`cox-sentence-${direction}`, {
     term: term.label, ratio: ratio(value), interval: say('from-to', { lower: ratio(lower), upper: ratio(upper) }),
-    p: pValue(term.p), others: answer.terms.length - 1, n: answer.n, events: answer.events,
+    p: pValue(term.p), others: new Set(answer.terms.map(({ id }) => id)).size - 1, n: answer.n, events: answer.events,
   }));
 }
 
