@@ -28,7 +28,10 @@ def _found(names: tuple[str, ...]) -> str | None:
 def _installed(package: str, names: tuple[str, ...]) -> str:
     apt = shutil.which("apt-get")
     if not apt or os.geteuid() != 0:
-        sys.exit(f"The browser tests need {names[0]}, and none was found. Install it (on Debian: apt-get install {package}).")
+        sys.exit(
+            f"The browser tests need {names[0]}, and none was found. "
+            f"Install it (on Debian: apt-get install {package})."
+        )
     print(f"Installing {package} …", flush=True)
     environment = {**os.environ, "DEBIAN_FRONTEND": "noninteractive"}
     for arguments in (["update", "-qq"], ["install", "-y", "-qq", "--no-install-recommends", package]):

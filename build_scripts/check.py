@@ -12,7 +12,9 @@ ROOMS = ["unit", "reference", "build", "wasm", "browser"]
 def main():
     """Carry out the command."""
     asked = argparse.ArgumentParser(description="Set up, build and check Vitalroll.")
-    asked.add_argument("--only", choices=ROOMS, action="append", help="only these tests (may be given several times)")
+    asked.add_argument(
+        "--only", choices=ROOMS, action="append", help="only these tests (may be given several times)"
+    )
     options = asked.parse_args()
     environment.enter("check")
 
@@ -27,16 +29,19 @@ def main():
     node, _ = node_and_npm()
     steps = [
         ("Style of the Python", [sys.executable, "-m", "ruff", "check", "."]),
-        ("Types of the page", [node, str(WEB / "node_modules" / "typescript" / "bin" / "tsc"), "-p", str(WEB)]),
-        ("Tests", [sys.executable, "-m", "pytest", *["tests/%s" % room for room in rooms]]),
+        (
+            "Types of the page",
+            [node, str(WEB / "node_modules" / "typescript" / "bin" / "tsc"), "-p", str(WEB)],
+        ),
+        ("Tests", [sys.executable, "-m", "pytest", *[f"tests/{room}" for room in rooms]]),
     ]
     failed = []
     for name, command in steps:
-        print("== %s" % name, flush=True)
+        print(f"== {name}", flush=True)
         if subprocess.run(command, cwd=str(environment.HOUSE)).returncode:
             failed.append(name)
     if failed:
-        sys.exit("Failed: %s." % ", ".join(failed))
+        sys.exit(f"Failed: {', '.join(failed)}.")
 
 
 if __name__ == "__main__":

@@ -18,7 +18,9 @@ import numpy as np
 SEED = 20250630
 FIRST_DAY = date(2016, 1, 4)
 CLOSING = date(2025, 6, 30)
-PREAMBLE = "Invented data: Maruvi District Hospital (invented), rheumatic heart disease clinic, follow-up register"
+PREAMBLE = (
+    "Invented data: Maruvi District Hospital (invented), rheumatic heart disease clinic, follow-up register"
+)
 HEADINGS = [
     "Reg no", "Initials", "Sex", "Date of birth", "Diagnosed", "First seen here", "Severity at entry",
     "Zone", "Found by", "Prophylaxis", "Last contact or end", "Status",

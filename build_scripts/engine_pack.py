@@ -119,7 +119,7 @@ def _trace(node: str, work: Path, wheels: list[Path]) -> dict[str, list[str]]:
     return run_in_pyodide(
         node,
         work,
-        SCRIPTS / "trace.py",
+        SCRIPTS / "touched_files.py",
         archives=[{"path": str(path), "into": SITE} for path in [*wheels, core]],
         mounts={"/house/build_scripts": str(SCRIPTS)},
     )
@@ -140,7 +140,7 @@ def _prove(node: str, work: Path, members: list[Member]) -> None:
     run_in_pyodide(
         node,
         work,
-        SCRIPTS / "trace.py",
+        SCRIPTS / "touched_files.py",
         runtime=packed,
         archives=[{"path": str(engine), "into": SITE}],
         mounts={"/house/build_scripts": str(SCRIPTS)},

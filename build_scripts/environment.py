@@ -47,8 +47,8 @@ def find_python():
             return candidate
     sys.exit(
         "Python 3.12 or newer was not found: neither the Python that runs this, nor python3.12 and later\n"
-        "on PATH, nor among pyenv's versions. Install one (on Debian 13: apt-get install python3 python3-venv;\n"
-        "elsewhere from python.org or with pyenv), then run the same command again."
+        "on PATH, nor among pyenv's versions. Install one (on Debian 13: apt-get install python3\n"
+        "python3-venv; elsewhere from python.org or with pyenv), then run the same command again."
     )
 
 
@@ -70,7 +70,9 @@ def _version(python):
     """Return (major, minor) of an interpreter that can make environments, or None."""
     asked = "import sys, venv, ensurepip; print(*sys.version_info[:2])"
     try:
-        answer = subprocess.run([python, "-c", asked], stdout=subprocess.PIPE, stderr=subprocess.DEVNULL, check=True)
+        answer = subprocess.run(
+            [python, "-c", asked], stdout=subprocess.PIPE, stderr=subprocess.DEVNULL, check=True
+        )
         return tuple(int(part) for part in answer.stdout.split())
     except (OSError, subprocess.CalledProcessError, ValueError):
         return None
@@ -108,4 +110,7 @@ def pip(*arguments):
         cwd=str(HOUSE),
     )
     if done.returncode:
-        sys.exit("Installing failed (see above). Check the connection to your package index and run the same command again.")
+        sys.exit(
+            "Installing failed (see above). Check the connection to your package index "
+            "and run the same command again."
+        )

@@ -9,7 +9,6 @@ from __future__ import annotations
 import json
 
 import vitalroll.desk
-from demo_register import demo_register
 
 
 def everything() -> None:

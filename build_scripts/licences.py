@@ -12,8 +12,9 @@ MODULES = HOUSE / "web" / "node_modules"
 LICENCE_NAMES = ("LICENSE", "LICENCE", "COPYING", "NOTICE")
 RULE = "=" * 100
 WITHOUT_TEXT = {
-    "pyodide": "Mozilla Public License 2.0. Source: the npm package pyodide and its repository. It contains CPython\n"
-    "(Python Software Foundation License 2.0) and Emscripten's libraries (MIT and University of Illinois/NCSA).",
+    "pyodide": "Mozilla Public License 2.0. Source: the npm package pyodide and its repository. It contains\n"
+    "CPython (Python Software Foundation License 2.0) and Emscripten's libraries (MIT and University of\n"
+    "Illinois/NCSA).",
 }
 """What to say of a package that carries no licence file of its own."""
 

@@ -50,7 +50,9 @@ def build_wheel(dist: Path) -> None:
     source = _empty(WORK / "wheel")
     for name in ("pyproject.toml", "README.md"):
         shutil.copy(HOUSE / name, source / name)
-    shutil.copytree(HOUSE / "core", source / "core", ignore=shutil.ignore_patterns("__pycache__", "*.egg-info"))
+    shutil.copytree(
+        HOUSE / "core", source / "core", ignore=shutil.ignore_patterns("__pycache__", "*.egg-info")
+    )
     subprocess.run(
         [sys.executable, "-m", "build", "--wheel", "--no-isolation", "--outdir", str(dist), str(source)],
         check=True,

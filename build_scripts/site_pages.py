@@ -52,7 +52,7 @@ def bundle(work: Path) -> Bundle:
 
 
 def write_site(folder: Path, page: Bundle, members: list[Member], licences: str) -> None:
-    """Write the site for any static host: index.html, and everything else under names that change with content."""
+    """Write the site for any static host: index.html, and the rest under names that change with content."""
     assets = folder / "assets"
     assets.mkdir(parents=True)
     for member in members:
@@ -73,7 +73,8 @@ def write_site(folder: Path, page: Bundle, members: list[Member], licences: str)
 def write_one_file(path: Path, page: Bundle, members: list[Member], licences: str) -> None:
     """Write the one-file copy: the same page with the pack inside, its scripts allowed by their hash."""
     inside = "\n".join(
-        f'<script type="application/octet-stream" id="pack-{member.name}">{base64.b64encode(member.packed).decode()}</script>'
+        f'<script type="application/octet-stream" id="pack-{member.name}">'
+        f"{base64.b64encode(member.packed).decode()}</script>"
         for member in members
     )
     script = page.script.replace("</script", "<\\/script")
@@ -84,7 +85,9 @@ def write_one_file(path: Path, page: Bundle, members: list[Member], licences: st
         pack=f'<script type="application/json" id="pack">{json.dumps(manifest(members))}</script>\n{inside}',
     )
     address = "data:text/plain;charset=utf-8;base64," + base64.b64encode(licences.encode()).decode()
-    text = text.replace('href="licences.txt" target="_blank" rel="noopener"', f'href="{address}" download="licences.txt"')
+    text = text.replace(
+        'href="licences.txt" target="_blank" rel="noopener"', f'href="{address}" download="licences.txt"'
+    )
     path.write_text(text, encoding="utf-8")
 
 

@@ -5,14 +5,23 @@ from __future__ import annotations
 import http.server
 import threading
 from pathlib import Path
+from typing import ClassVar
 
-TYPES = {".html": "text/html; charset=utf-8", ".js": "text/javascript", ".css": "text/css", ".gz": "application/gzip"}
+TYPES = {
+    ".html": "text/html; charset=utf-8",
+    ".js": "text/javascript",
+    ".css": "text/css",
+    ".gz": "application/gzip",
+}
 
 
 class SiteHandler(http.server.SimpleHTTPRequestHandler):
     """Serves files as they are; the pack's members stay packed, so that any host does the same."""
 
-    extensions_map = {**http.server.SimpleHTTPRequestHandler.extensions_map, **TYPES}
+    extensions_map: ClassVar[dict[str, str]] = {
+        **http.server.SimpleHTTPRequestHandler.extensions_map,
+        **TYPES,
+    }
 
     def log_message(self, *arguments: object) -> None:
         """Keep the terminal quiet."""

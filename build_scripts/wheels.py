@@ -51,7 +51,11 @@ def engine_wheels(runtime: Path, names: list[str]) -> list[Path]:
     release = _release_host(runtime, lock.info.version)
     wanted = {lock.packages[name].file_name: lock.packages[name].sha256 for name in names}
     wheels = [
-        _kept(file, sha256, [lambda file=file: _from_release(release, file), lambda file=file: _from_carrier(file)])
+        _kept(
+            file,
+            sha256,
+            [lambda file=file: _from_release(release, file), lambda file=file: _from_carrier(file)],
+        )
         for file, sha256 in wanted.items()
     ]
     for name, (version, sha256) in PURE.items():
@@ -72,8 +76,9 @@ def _kept(file: str, sha256: str, sources: list[Callable[[], bytes | None]]) -> 
             return kept
     sys.exit(
         f"{file} could not be had with the SHA-256 that Pyodide's lock file asks for ({sha256}).\n"
-        f"Tried: the cache {cache_folder()}, Pyodide's release host, and the package {CARRIER[0]} {CARRIER[1]}.\n"
-        "Check the connection, or put the file into the cache folder by hand; then run the same command again."
+        f"Tried: the cache {cache_folder()}, Pyodide's release host, and the package {CARRIER[0]}\n"
+        f"{CARRIER[1]}. Check the connection, or put the file into the cache folder by hand; then run the\n"
+        "same command again."
     )
 
 
@@ -123,7 +128,17 @@ def _from_registry(name: str, version: str, sha256: str) -> Path:
 def _download(folder: Path, what: list[str]) -> Path | None:
     """Download one wheel with pip and return it, or None."""
     folder.mkdir(parents=True, exist_ok=True)
-    command = [sys.executable, "-m", "pip", "download", "--quiet", "--no-deps", "--only-binary=:all:", "-d", str(folder)]
+    command = [
+        sys.executable,
+        "-m",
+        "pip",
+        "download",
+        "--quiet",
+        "--no-deps",
+        "--only-binary=:all:",
+        "-d",
+        str(folder),
+    ]
     done = subprocess.run([*command, *what], capture_output=True, text=True)
     if done.returncode:
         print(done.stderr, file=sys.stderr)

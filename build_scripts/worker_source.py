@@ -30,5 +30,9 @@ def worker_source(runtime: Path) -> str:
         sys.exit("Pyodide's main module no longer ends as worker_source expects; look at its exports.")
     module = module.replace(EXPORT, "self.createPyodideModule = _createPyodideModule;")
     module = module.replace("import.meta.url", '"https://pack.invalid/"')
-    loader = (runtime / "pyodide.js").read_text(encoding="utf-8").replace("//# sourceMappingURL=pyodide.js.map", "")
+    loader = (
+        (runtime / "pyodide.js")
+        .read_text(encoding="utf-8")
+        .replace("//# sourceMappingURL=pyodide.js.map", "")
+    )
     return "\n".join([module, loader, OWN_WORKER.read_text(encoding="utf-8")])

@@ -11,13 +11,14 @@ import numpy as np
 
 sys.path.insert(0, str(Path(__file__).parents[2] / "core"))
 
-import pandas as pd  # noqa: E402 - the engine's folder is put on the path first
-from lifelines import CoxPHFitter  # noqa: E402
-from vitalroll.comparison.cox import cox  # noqa: E402
-from vitalroll.comparison.design import Choice  # noqa: E402
-from vitalroll.comparison.rank_tests import rank_test  # noqa: E402
-from vitalroll.outcomes.risk_table import count_risk  # noqa: E402
-from vitalroll.register.cohort import Cohort, Numeric  # noqa: E402
+import pandas as pd
+from lifelines import CoxPHFitter
+
+from vitalroll.comparison.cox import cox
+from vitalroll.comparison.design import Choice
+from vitalroll.comparison.rank_tests import rank_test
+from vitalroll.outcomes.risk_table import count_risk
+from vitalroll.register.cohort import Cohort, Numeric
 
 DIED = ("died_of_disease",)
 ROUNDS = 5
@@ -49,7 +50,9 @@ def cox_against_lifelines() -> None:
     frame = pd.DataFrame(x, columns=names).assign(exit=exit, event=event)
     ours = fastest(lambda: cox(cohort, DIED, [Choice(name) for name in names]))
     theirs = fastest(lambda: CoxPHFitter().fit(frame, "exit", "event"))
-    print(f"Cox, Efron, {n:,} x {p}: {ours:.3f} s, {ours / theirs:.2f} of lifelines ({theirs:.3f} s); limit 0.40")
+    print(
+        f"Cox, Efron, {n:,} x {p}: {ours:.3f} s, {ours / theirs:.2f} of lifelines ({theirs:.3f} s); limit 0.40"
+    )
 
 
 def log_rank_against_one_sort() -> None:

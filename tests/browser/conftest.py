@@ -7,9 +7,10 @@ from collections.abc import Callable, Iterator
 from dataclasses import dataclass, field
 
 import pytest
+from playwright.sync_api import Browser, Page, sync_playwright
+
 from browsers import chromium
 from make_dist import DIST
-from playwright.sync_api import Browser, Page, sync_playwright
 from site_server import SiteServer
 
 START_MS = 90_000
@@ -55,7 +56,9 @@ def opened(browser: Browser) -> Iterator[Callable[..., Watched]]:
     """Open pages; at the end of the test none of them may have complained."""
     pages: list[Watched] = []
 
-    def open_page(address: str, *, width: int = 1280, language: str = "en", ready: bool = True, **options: object) -> Watched:
+    def open_page(
+        address: str, *, width: int = 1280, language: str = "en", ready: bool = True, **options: object
+    ) -> Watched:
         context = browser.new_context(
             viewport={"width": width, "height": 900}, locale=language, accept_downloads=True, **options
         )

@@ -7,6 +7,7 @@ from collections.abc import Callable, Iterator
 from pathlib import Path
 
 import pytest
+
 from make_dist import DIST
 from site_server import SiteServer
 
@@ -61,7 +62,9 @@ def sealed_page(request: pytest.FixtureRequest, site: SiteServer, opened: Callab
     watched.complaints.clear()
 
 
-def test_no_request_of_any_kind_reaches_a_server(sealed_page, site: SiteServer, elsewhere: SiteServer) -> None:
+def test_no_request_of_any_kind_reaches_a_server(
+    sealed_page, site: SiteServer, elsewhere: SiteServer
+) -> None:
     page = sealed_page.page
     site.requests.clear()
     for server in (site, elsewhere):
@@ -104,7 +107,7 @@ def test_no_register_can_be_opened_before_the_seal(site: SiteServer, opened: Cal
     """With the pack held back there is no seal, and the controls that open a register are off."""
     watched = opened("about:blank", ready=False)
     page = watched.page
-    page.route("**/assets/wasm-*", lambda route: None)
+    page.route("**/assets/wasm-*", lambda _: None)
     page.goto(site.address)
     page.get_by_text("Not sealed yet").wait_for()
     assert page.locator("#register-file").is_disabled()
@@ -113,7 +116,9 @@ def test_no_register_can_be_opened_before_the_seal(site: SiteServer, opened: Cal
 
 def test_nothing_is_kept_in_the_browser(site: SiteServer, opened: Callable) -> None:
     page = opened(site.address).page
-    kept = page.evaluate("async () => [localStorage.length, sessionStorage.length, (await indexedDB.databases()).length, document.cookie]")
+    kept = page.evaluate(
+        "async () => [localStorage.length, sessionStorage.length, (await indexedDB.databases()).length, document.cookie]"
+    )
     assert kept == [0, 0, 0, ""]
 
 

@@ -1,4 +1,4 @@
-"""From the demo register to a saved report, in the site and in the one-file copy; the numbers are the engine's."""
+"""From the demo register to a saved report, in the site and in the one-file copy, with the engine's numbers."""
 
 from __future__ import annotations
 
@@ -7,9 +7,10 @@ from collections.abc import Callable
 from pathlib import Path
 
 import pytest
+from playwright.sync_api import Download, Page
+
 from demo_register import demo_register
 from make_dist import DIST
-from playwright.sync_api import Download, Page
 from site_server import SiteServer
 from vitalroll.desk import Desk
 
@@ -31,7 +32,9 @@ def numbers(text: str) -> list[float]:
 def table_rows(page: Page, caption: str) -> list[list[str]]:
     table = page.locator("table:visible", has=page.locator("caption", has_text=caption)).first
     table.wait_for(timeout=ANSWER_MS)
-    return [[cell.inner_text() for cell in row.locator("th, td").all()] for row in table.locator("tbody tr").all()]
+    return [
+        [cell.inner_text() for cell in row.locator("th, td").all()] for row in table.locator("tbody tr").all()
+    ]
 
 
 @pytest.fixture(params=["site", "one-file copy"])
@@ -117,7 +120,9 @@ def _compare(page: Page, native: Callable) -> None:
     go(page, "Compare")
     test = native("compare.rank_test", {"interest": DEATHS, "group": native.group})
     page.locator("#rank-test .sentence").wait_for(timeout=ANSWER_MS)
-    assert numbers(page.locator("#rank-test .sentence").inner_text())[0] == pytest.approx(test["chi_squared"], abs=0.006)
+    assert numbers(page.locator("#rank-test .sentence").inner_text())[0] == pytest.approx(
+        test["chi_squared"], abs=0.006
+    )
     page.locator("#compare-exposed").select_option(label="Severe")
     page.locator("#compare-reference").select_option(label="Mild")
     page.locator("#cox-covariates-0").wait_for()
@@ -129,7 +134,10 @@ def _compare(page: Page, native: Callable) -> None:
     for row, term in zip(rows, expected["terms"], strict=True):
         assert numbers(row[2])[0] == pytest.approx(term["coefficient"], abs=0.00051)
         assert numbers(row[4])[0] == pytest.approx(term["hazard_ratio"]["value"], rel=0.006)
-    pooled = native("compare.intervals", {"interest": DEATHS, "group": native.group, "exposed": "Severe", "reference": "Mild"})
+    pooled = native(
+        "compare.intervals",
+        {"interest": DEATHS, "group": native.group, "exposed": "Severe", "reference": "Mild"},
+    )
     ratio = table_rows(page, "Pooled over the strata")[0][1]
     assert numbers(ratio)[0] == pytest.approx(pooled["pooled"]["risk_ratio"]["value"], rel=0.006)
 
@@ -198,7 +206,12 @@ def test_the_report_prints_on_paper(page: Page, tmp_path: Path) -> None:
     page.locator("#report-document h1").wait_for()
     content = page.pdf(path=tmp_path / "report.pdf", prefer_css_page_size=True)
     assert content.startswith(b"%PDF")
-    assert page.evaluate("() => { matchMedia('print'); return document.querySelectorAll('#report-document table').length }") >= 4
+    assert (
+        page.evaluate(
+            "() => { matchMedia('print'); return document.querySelectorAll('#report-document table').length }"
+        )
+        >= 4
+    )
 
 
 def test_language_changes_everything_and_keeps_choices(page: Page) -> None:

@@ -14,6 +14,7 @@ import zipfile
 from pathlib import Path
 
 import pytest
+
 from engine_pack import ENGINE_PACKAGES, RUNTIME, engine_pack
 from environment import HOUSE
 from licences import collect
@@ -34,12 +35,21 @@ def manifest() -> dict:
 
 def test_everything_for_the_first_curve_is_small_enough() -> None:
     """Twenty megabytes on the wire for the whole page, whatever the host compresses or not."""
-    everything = sum(path.stat().st_size for path in SITE.rglob("*") if path.is_file() and path.name != "licences.txt")
+    everything = sum(
+        path.stat().st_size for path in SITE.rglob("*") if path.is_file() and path.name != "licences.txt"
+    )
     assert everything <= MOST_ON_THE_WIRE
 
 
 def test_every_member_is_what_the_manifest_says(manifest: dict) -> None:
-    assert {member["name"] for member in manifest["members"]} == {"worker", "wasm", "lock", "stdlib", "engine", "demo"}
+    assert {member["name"] for member in manifest["members"]} == {
+        "worker",
+        "wasm",
+        "lock",
+        "stdlib",
+        "engine",
+        "demo",
+    }
     for member in manifest["members"]:
         packed = (SITE / member["file"]).read_bytes()
         digest = hashlib.sha256(packed).digest()
@@ -76,7 +86,9 @@ def test_the_one_file_copy_refers_to_no_other_file() -> None:
     assert "connect-src 'none'" in page[:3000]
 
 
-@pytest.mark.parametrize("name", ["pyodide", "numpy", "scipy", "openpyxl", "@observablehq/plot", "@fluent/bundle", "d3"])
+@pytest.mark.parametrize(
+    "name", ["pyodide", "numpy", "scipy", "openpyxl", "@observablehq/plot", "@fluent/bundle", "d3"]
+)
 def test_the_licences_of_what_is_inside_are_there(name: str) -> None:
     parts = (SITE / "licences.txt").read_text(encoding="utf-8").split("=" * 100)
     mine = [part for part in parts if part.strip().startswith(f"{name} ")]
@@ -96,14 +108,21 @@ def test_the_wheel_installs_and_is_pure_python(tmp_path: Path) -> None:
     """It is installed into an environment of its own that sees only this one's numpy and scipy."""
     wheel = next(DIST.glob("vitalroll-*.whl"))
     assert wheel.name.endswith("-py3-none-any.whl")
-    assert not [name for name in zipfile.ZipFile(wheel).namelist() if name.startswith(("tests", "build_scripts"))]
+    assert not [
+        name for name in zipfile.ZipFile(wheel).namelist() if name.startswith(("tests", "build_scripts"))
+    ]
     venv.create(tmp_path / "env", with_pip=True)
     python = tmp_path / "env" / "bin" / "python"
     subprocess.run([python, "-m", "pip", "install", "-q", "--no-deps", "--no-index", wheel], check=True)
     libraries = next(path for path in sys.path if path.endswith("site-packages"))
     asked = "import vitalroll.desk as d; print(d.__file__, d.answer('about', {})['answer']['version'])"
     said = subprocess.run(
-        [python, "-c", asked], env={"PYTHONPATH": libraries}, cwd=tmp_path, capture_output=True, text=True, check=True
+        [python, "-c", asked],
+        env={"PYTHONPATH": libraries},
+        cwd=tmp_path,
+        capture_output=True,
+        text=True,
+        check=True,
     ).stdout
     assert str(tmp_path) in said
 
@@ -121,7 +140,9 @@ def test_two_builds_give_the_same_bytes(tmp_path: Path) -> None:
     build_wheel(again)
     made = sorted(path for path in again.rglob("*") if path.is_file())
     assert [str(path.relative_to(again)) for path in made] == sorted(
-        str(path.relative_to(DIST)) for path in DIST.rglob("*") if path.is_file() and path.name != ".sources.sha256"
+        str(path.relative_to(DIST))
+        for path in DIST.rglob("*")
+        if path.is_file() and path.name != ".sources.sha256"
     )
     for path in made:
         assert path.read_bytes() == (DIST / path.relative_to(again)).read_bytes(), path.name

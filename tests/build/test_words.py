@@ -7,7 +7,8 @@ import re
 from pathlib import Path
 
 import pytest
-from fluent.syntax import FluentParser, ast as ftl
+from fluent.syntax import FluentParser
+from fluent.syntax import ast as ftl
 from fluent.syntax.visitor import Visitor
 
 HOUSE = Path(__file__).parents[2]

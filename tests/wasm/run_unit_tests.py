@@ -24,6 +24,15 @@ class Tally:
 
 
 tally = Tally()
-arguments = ["tests/unit", "-q", "-p", "no:cacheprovider", "-p", "no:faulthandler", "--capture=no", "--no-header"]
+arguments = [
+    "tests/unit",
+    "-q",
+    "-p",
+    "no:cacheprovider",
+    "-p",
+    "no:faulthandler",
+    "--capture=no",
+    "--no-header",
+]
 code = pytest.main(arguments, plugins=[tally])
 result = {"exit": int(code), **{name: tally.outcomes[name] for name in ("passed", "failed", "skipped")}}

@@ -75,11 +75,13 @@ def _as_first(
 def _as_second(
     entry: np.ndarray, exit: np.ndarray, event: np.ndarray, rank: np.ndarray
 ) -> tuple[np.ndarray, np.ndarray, np.ndarray]:
-    """For each patient, count the outcomes of others that came first: with higher risk, with equal risk, all."""
+    """For each patient, count outcomes of others that came first: with higher risk, with equal risk, all."""
     who = np.flatnonzero(event)
     who = who[np.argsort(exit[who], kind="stable")]
     days, ranks = exit[who], rank[who]
-    before = np.where(event, np.searchsorted(days, exit, side="left"), np.searchsorted(days, exit, side="right"))
+    before = np.where(
+        event, np.searchsorted(days, exit, side="left"), np.searchsorted(days, exit, side="right")
+    )
     higher, equal = _prefix_higher(ranks, before, rank)
     pairs = before.astype(np.int64)
     late = np.flatnonzero(entry > 0)
@@ -94,7 +96,9 @@ def _as_second(
     return higher, equal, pairs
 
 
-def _prefix_higher(ranks: np.ndarray, prefix: np.ndarray, wanted: np.ndarray) -> tuple[np.ndarray, np.ndarray]:
+def _prefix_higher(
+    ranks: np.ndarray, prefix: np.ndarray, wanted: np.ndarray
+) -> tuple[np.ndarray, np.ndarray]:
     """Return how many of the first ``prefix`` ranks are above, and equal to, each wanted rank."""
     below, equal = _prefix_counts(ranks, prefix, wanted)
     return prefix - below - equal, equal
@@ -108,7 +112,9 @@ def _suffix_counts(ranks: np.ndarray, start: np.ndarray, wanted: np.ndarray) -> 
     return all_below[wanted] - below, counts[wanted] - equal
 
 
-def _prefix_counts(ranks: np.ndarray, prefix: np.ndarray, wanted: np.ndarray) -> tuple[np.ndarray, np.ndarray]:
+def _prefix_counts(
+    ranks: np.ndarray, prefix: np.ndarray, wanted: np.ndarray
+) -> tuple[np.ndarray, np.ndarray]:
     """Return, for each query, how many of the first ``prefix`` ranks are below, and equal to, ``wanted``.
 
     Bit by bit of the rank, from the highest: the ranks still in play are put apart, zeros before

@@ -104,8 +104,8 @@ def cox(
     Raises
     ------
     Refusal
-        Those of ``design``; ``no_events_to_compare``; ``too_few_events`` (``events``, ``parameters``) under 3 for
-        each parameter; ``level_without_events`` (``covariate``, ``level``) and ``separation`` when
+        Those of ``design``; ``no_events_to_compare``; ``too_few_events`` (``events``, ``parameters``) under
+        3 for each parameter; ``level_without_events`` (``covariate``, ``level``) and ``separation`` when
         the data hold no finite hazard ratio; ``no_convergence``.
 
     Cautions
@@ -152,7 +152,12 @@ def cox(
         incomplete=incomplete,
         ties=ties,
         terms=tuple(
-            _term(column, fit.coefficients[i] / scale[i], float(np.sqrt(covariance[i, i])) / scale[i], confidence)
+            _term(
+                column,
+                fit.coefficients[i] / scale[i],
+                float(np.sqrt(covariance[i, i])) / scale[i],
+                confidence,
+            )
             for i, column in enumerate(plan.columns)
         ),
         tests=_tests(fit, parameters),
@@ -166,7 +171,9 @@ def cox(
     )
 
 
-def _check_events(columns: tuple[Column, ...], values: np.ndarray, event: np.ndarray, parameters: int) -> None:
+def _check_events(
+    columns: tuple[Column, ...], values: np.ndarray, event: np.ndarray, parameters: int
+) -> None:
     events = int(event.sum())
     if events == 0:
         raise Refusal("no_events_to_compare")
@@ -256,7 +263,10 @@ def _term(column: Column, coefficient: float, error: float, confidence: float) -
     z = coefficient / error
     margin = two_sided_z(confidence) * error
     ratio = Estimate(
-        float(np.exp(coefficient)), float(np.exp(coefficient - margin)), float(np.exp(coefficient + margin)), error
+        float(np.exp(coefficient)),
+        float(np.exp(coefficient - margin)),
+        float(np.exp(coefficient + margin)),
+        error,
     )
     return Term(
         id=column.id,

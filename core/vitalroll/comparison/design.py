@@ -46,7 +46,7 @@ class Column:
 
 @dataclass(frozen=True)
 class LeftOutCovariate:
-    """A covariate, or a level of it, that was left out: ``constant``, ``repeats_others`` or ``empty_level``."""
+    """A covariate or a level of it, left out because ``constant``, ``repeats_others`` or ``empty_level``."""
 
     id: str
     level: str | None
@@ -129,7 +129,12 @@ def _columns(
             "unknown_level", field=f"covariates.{position}.reference", covariate=choice.id, level=reference
         )
     if counts[covariate.levels.index(reference)] == 0:
-        raise Refusal("reference_is_empty", field=f"covariates.{position}.reference", covariate=choice.id, level=reference)
+        raise Refusal(
+            "reference_is_empty",
+            field=f"covariates.{position}.reference",
+            covariate=choice.id,
+            level=reference,
+        )
     return [
         (Column(choice.id, level, reference, None, int(counts[code])), (codes == code).astype(float))
         for code, level in enumerate(covariate.levels)

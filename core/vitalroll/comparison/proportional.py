@@ -59,8 +59,6 @@ def proportional_tests(
     return tuple(tests), Chi2Test(whole, df, float(chdtrc(df, whole)))
 
 
-
-
 def _transformed_time(data: FollowUp) -> np.ndarray:
     """Return 1 - S(t-) for each outcome."""
     m = len(data.days)

@@ -105,7 +105,9 @@ def rank_test(
     return RankTest(
         weight=weight,
         groups=tuple(
-            GroupCounts(level, sum(tables[level].n for tables in strata), int(observed[i]), float(expected[i]))
+            GroupCounts(
+                level, sum(tables[level].n for tables in strata), int(observed[i]), float(expected[i])
+            )
             for i, level in enumerate(levels)
         ),
         chi_squared=chi_squared,
@@ -114,8 +116,10 @@ def rank_test(
     )
 
 
-def _together(tables: list[RiskTable], interest: Collection[str]) -> tuple[np.ndarray, np.ndarray, np.ndarray]:
-    """Return the days with an outcome in any group, and at risk and outcomes on them: arrays (days, groups)."""
+def _together(
+    tables: list[RiskTable], interest: Collection[str]
+) -> tuple[np.ndarray, np.ndarray, np.ndarray]:
+    """Return the days with an outcome in any group; at risk and outcomes on them as (days, groups)."""
     per_table = [table.events(interest) for table in tables]
     days = [table.time[events > 0] for table, events in zip(tables, per_table, strict=True)]
     times = np.unique(np.concatenate(days)) if days else np.empty(0, dtype=np.int64)

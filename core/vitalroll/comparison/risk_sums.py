@@ -133,11 +133,15 @@ def score(data: FollowUp, x: np.ndarray, sums: RiskSums, weight: np.ndarray | No
     return residual.sum(axis=0) if weight is None else weight @ residual
 
 
-def information(data: FollowUp, x: np.ndarray, sums: RiskSums, weight: np.ndarray | None = None) -> np.ndarray:
+def information(
+    data: FollowUp, x: np.ndarray, sums: RiskSums, weight: np.ndarray | None = None
+) -> np.ndarray:
     """Return the sum over outcomes of weight times the covariance of x in the risk set."""
     w = np.ones(data.events) if weight is None else weight
     step = w / sums.total
-    cumulative = np.concatenate(([0.0], np.cumsum(np.bincount(data.at, weights=step, minlength=len(data.days)))))
+    cumulative = np.concatenate(
+        ([0.0], np.cumsum(np.bincount(data.at, weights=step, minlength=len(data.days))))
+    )
     hazard = cumulative[data.leaves] - cumulative[data.enters]
     if data.part.any():
         # On its own day an outcome is only partly in the later risk sets of that day.

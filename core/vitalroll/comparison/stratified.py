@@ -42,7 +42,7 @@ class Pooled:
 
 @dataclass(frozen=True)
 class Homogeneity:
-    """Whether the odds ratios of the strata may be one and the same; None with fewer than two usable strata."""
+    """Whether the strata may share one odds ratio; None with fewer than two usable strata."""
 
     breslow_day_tarone: Chi2Test | None
     woolf: Chi2Test | None
@@ -50,7 +50,7 @@ class Homogeneity:
 
 @dataclass(frozen=True)
 class LeftOut:
-    """A stratum that could not contribute: ``empty_group`` at all, ``no_events`` or ``all_events`` to ratios."""
+    """A stratum that cannot contribute: ``empty_group`` at all, ``no_events``, ``all_events`` to ratios."""
 
     stratum: int
     code: str
@@ -159,7 +159,9 @@ def _pooled(both: _Strata, informative: _Strata, z: float) -> Pooled:
     s = informative
     with np.errstate(divide="ignore", invalid="ignore"):
         excess = float(np.sum(s.a - s.n1 * s.m / s.total))
-        variance = float(np.sum(s.n1 * s.n0 * s.m * (s.total - s.m) / (s.total**2 * np.maximum(s.total - 1, 0))))
+        variance = float(
+            np.sum(s.n1 * s.n0 * s.m * (s.total - s.m) / (s.total**2 * np.maximum(s.total - 1, 0)))
+        )
     chi_squared = excess**2 / variance if 0 < variance < np.inf else float("nan")
     return Pooled(
         odds_ratio=_odds_ratio(s, z),

@@ -194,7 +194,7 @@ def _log_choose(total: int, chosen: np.ndarray) -> np.ndarray:
     return gammaln(total + 1) - gammaln(chosen + 1) - gammaln(total - chosen + 1)
 
 
-def _solve(rising, lowest: bool = False, highest: bool = False) -> float:  # noqa: ANN001
+def _solve(rising, lowest: bool = False, highest: bool = False) -> float:
     """Return exp(b) where the rising function of b is zero, to the last bit of b."""
     if lowest and highest:
         return float("nan")

@@ -90,10 +90,13 @@ def difference(memory: Memory, request: DifferenceRequest, report: Any) -> dict[
     """
     exposed, reference = _pair(memory.cohort(), request.group, request.exposed, request.reference)
     curves = [
-        product_limit(table, request.interest, confidence=request.confidence) for table in (exposed, reference)
+        product_limit(table, request.interest, confidence=request.confidence)
+        for table in (exposed, reference)
     ]
     return {
-        "rows": [milestone_difference(*curves, years, confidence=request.confidence) for years in request.years],
+        "rows": [
+            milestone_difference(*curves, years, confidence=request.confidence) for years in request.years
+        ],
         "cautions": _few_events({request.exposed: exposed, request.reference: reference}, request.interest),
     }
 
@@ -153,7 +156,8 @@ def rank_tests(memory: Memory, request: RankTestRequest, report: Any) -> dict[st
     Returns
     -------
     dict
-        ``weight``, ``groups``, ``chi_squared``, ``df``, ``p`` as in ``rank_tests.RankTest``; ``left_out``; ``cautions``.
+        ``weight``, ``groups``, ``chi_squared``, ``df``, ``p`` as in ``rank_tests.RankTest``;
+        ``left_out``; ``cautions``.
     """
     groups = groups_of(memory.cohort(), request.group)
     tables = _named(groups)
@@ -168,9 +172,7 @@ def rank_tests(memory: Memory, request: RankTestRequest, report: Any) -> dict[st
 def regression(memory: Memory, request: CoxRequest, report: Any) -> CoxFit:
     """Answer ``compare.cox``: a ``cox.CoxFit``."""
     choices = [Choice(choice.id, choice.reference, choice.per) for choice in request.covariates]
-    return cox(
-        memory.cohort(), request.interest, choices, ties=request.ties, confidence=request.confidence
-    )
+    return cox(memory.cohort(), request.interest, choices, ties=request.ties, confidence=request.confidence)
 
 
 def _pair(cohort: Cohort, group: str, exposed: str, reference: str) -> tuple[RiskTable, RiskTable]:

@@ -20,6 +20,7 @@ from sksurv.util import Surv
 from statsmodels.duration.hazard_regression import PHReg
 from statsmodels.stats.contingency_tables import StratifiedTable, Table2x2
 from statsmodels.stats.proportion import confint_proportions_2indep, proportion_confint
+
 from vitalroll.comparison.cox import cox
 from vitalroll.comparison.design import Choice
 from vitalroll.comparison.rank_tests import rank_test
@@ -61,7 +62,9 @@ def test_cox_on_recidivism_against_statsmodels(ties):
     data = load_rossi()
     subject = cohort(data.week, data.arrest, {name: data[name] for name in ROSSI})
     fit = cox(subject, DIED, [Choice(name) for name in ROSSI], ties=ties)
-    model = PHReg(data.week.to_numpy(float), data[ROSSI].to_numpy(float), status=data.arrest.to_numpy(), ties=ties)
+    model = PHReg(
+        data.week.to_numpy(float), data[ROSSI].to_numpy(float), status=data.arrest.to_numpy(), ties=ties
+    )
     other = model.fit(method="newton", tol=1e-14, disp=0)
     np.testing.assert_allclose([term.coefficient for term in fit.terms], other.params, atol=1e-8)
     np.testing.assert_allclose([term.standard_error for term in fit.terms], other.bse, atol=1e-8)
@@ -76,7 +79,15 @@ def test_cox_on_recidivism_published():
     data = load_rossi()
     subject = cohort(data.week, data.arrest, {name: data[name] for name in ROSSI})
     fit = cox(subject, DIED, [Choice(name) for name in ROSSI])
-    published = {"fin": -0.379, "age": -0.057, "race": 0.314, "wexp": -0.150, "mar": -0.434, "paro": -0.085, "prio": 0.091}
+    published = {
+        "fin": -0.379,
+        "age": -0.057,
+        "race": 0.314,
+        "wexp": -0.150,
+        "mar": -0.434,
+        "paro": -0.085,
+        "prio": 0.091,
+    }
     assert {term.id: round(term.coefficient, 3) for term in fit.terms} == published
     assert round(fit.tests["likelihood_ratio"].chi_squared, 1) == 33.3
     assert round(fit.concordance.value, 2) == 0.64
@@ -90,7 +101,9 @@ def test_cox_on_lung_cancer_against_lifelines():
     fit = cox(subject, DIED, [Choice(name) for name in names])
     other = CoxPHFitter().fit(data, "time", "status", fit_options={"precision": 1e-14, "r_precision": 1e-14})
     np.testing.assert_allclose([term.coefficient for term in fit.terms], other.params_[names], atol=1e-8)
-    np.testing.assert_allclose([term.standard_error for term in fit.terms], other.standard_errors_[names], atol=1e-8)
+    np.testing.assert_allclose(
+        [term.standard_error for term in fit.terms], other.standard_errors_[names], atol=1e-8
+    )
     assert fit.log_likelihood[1] == pytest.approx(other.log_likelihood_, abs=1e-8)
 
 
@@ -172,11 +185,17 @@ def as_statsmodels(table):
 def test_two_by_two_against_statsmodels(table):
     said, other = measures(TwoByTwo(*table)), Table2x2(as_statsmodels(table), shift_zeros=False)
     assert said.odds_ratio.value == pytest.approx(other.oddsratio, rel=1e-10)
-    np.testing.assert_allclose((said.odds_ratio.lower, said.odds_ratio.upper), other.oddsratio_confint(), rtol=1e-8)
-    np.testing.assert_allclose((said.risk_ratio.lower, said.risk_ratio.upper), other.riskratio_confint(), rtol=1e-8)
+    np.testing.assert_allclose(
+        (said.odds_ratio.lower, said.odds_ratio.upper), other.oddsratio_confint(), rtol=1e-8
+    )
+    np.testing.assert_allclose(
+        (said.risk_ratio.lower, said.risk_ratio.upper), other.riskratio_confint(), rtol=1e-8
+    )
     a, n1, c, n0 = table
     np.testing.assert_allclose(
-        (said.exposed_risk.lower, said.exposed_risk.upper), proportion_confint(a, n1, method="wilson"), atol=1e-10
+        (said.exposed_risk.lower, said.exposed_risk.upper),
+        proportion_confint(a, n1, method="wilson"),
+        atol=1e-10,
     )
     np.testing.assert_allclose(
         (said.risk_difference.lower, said.risk_difference.upper),
@@ -194,7 +213,9 @@ def test_exact_against_scipy(table):
     other = contingency.odds_ratio(whole, kind="conditional")
     assert said.odds_ratio.value == pytest.approx(other.statistic, rel=1e-5)
     limits = other.confidence_interval(0.95)
-    np.testing.assert_allclose((said.odds_ratio.lower, said.odds_ratio.upper), (limits.low, limits.high), rtol=1e-5)
+    np.testing.assert_allclose(
+        (said.odds_ratio.lower, said.odds_ratio.upper), (limits.low, limits.high), rtol=1e-5
+    )
 
 
 def test_mantel_haenszel_against_statsmodels():
@@ -204,15 +225,25 @@ def test_mantel_haenszel_against_statsmodels():
     assert said.pooled.odds_ratio.value == pytest.approx(other.oddsratio_pooled, rel=1e-10)
     assert said.pooled.odds_ratio.standard_error == pytest.approx(other.logodds_pooled_se, rel=1e-8)
     assert said.pooled.risk_ratio.value == pytest.approx(other.riskratio_pooled, rel=1e-10)
-    assert said.pooled.chi_squared == pytest.approx(other.test_null_odds(correction=False).statistic, rel=1e-8)
-    assert said.homogeneity.breslow_day_tarone.chi_squared == pytest.approx(other.test_equal_odds(adjust=True).statistic, rel=1e-6)
+    assert said.pooled.chi_squared == pytest.approx(
+        other.test_null_odds(correction=False).statistic, rel=1e-8
+    )
+    assert said.homogeneity.breslow_day_tarone.chi_squared == pytest.approx(
+        other.test_equal_odds(adjust=True).statistic, rel=1e-6
+    )
 
 
 def test_mantel_haenszel_published():
     """Oral contraceptives and myocardial infarction by age (Shapiro and others 1979, as in Rosner's and
     Schlesselman's textbooks): crude odds ratio 1.68, pooled over five age groups 3.97 (from memory;
     the pooled value is confirmed by statsmodels from the same counts)."""
-    cases_and_controls = [(4, 2, 62, 224), (9, 12, 33, 390), (4, 33, 26, 330), (6, 65, 9, 362), (6, 93, 5, 301)]
+    cases_and_controls = [
+        (4, 2, 62, 224),
+        (9, 12, 33, 390),
+        (4, 33, 26, 330),
+        (6, 65, 9, 362),
+        (6, 93, 5, 301),
+    ]
     strata = [TwoByTwo(a, a + b, c, c + d) for a, c, b, d in cases_and_controls]
     said = stratified(strata)
     crude = measures(TwoByTwo(*(sum(getattr(s, name) for s in strata) for name in s_fields())))

@@ -3,6 +3,7 @@
 from __future__ import annotations
 
 import numpy as np
+
 from vitalroll.register.cohort import MEANINGS, Categorical, Cohort, Numeric
 
 DIED = ("died_of_disease",)

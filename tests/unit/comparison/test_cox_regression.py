@@ -8,6 +8,7 @@ from itertools import pairwise
 import numpy as np
 import pytest
 from comparison_cohorts import DIED, cohort, random_cohort
+
 from vitalroll.comparison.cox import cox
 from vitalroll.comparison.design import Choice
 from vitalroll.comparison.rank_tests import rank_test
@@ -92,7 +93,9 @@ def test_scaling_and_shifting_a_number_changes_only_its_unit():
         subject,
         covariates={
             **subject.covariates,
-            "x0": dataclasses.replace(subject.covariates["x0"], values=1e6 + 10 * subject.covariates["x0"].values),
+            "x0": dataclasses.replace(
+                subject.covariates["x0"], values=1e6 + 10 * subject.covariates["x0"].values
+            ),
         },
     )
     plain = cox(subject, DIED, [Choice("x0"), Choice("x1")])
@@ -178,9 +181,14 @@ def test_proportional_hazards_test_is_a_score_test(late):
 def test_constant_and_repeating_covariates_are_named_and_left_out():
     subject = random_cohort(19, 60)
     x = subject.covariates["x0"].values
-    extra = cohort(subject.exit, subject.outcome == 1, {"x0": x, "flat": np.full(60, 3.0), "twice": 2 * x + 1})
+    extra = cohort(
+        subject.exit, subject.outcome == 1, {"x0": x, "flat": np.full(60, 3.0), "twice": 2 * x + 1}
+    )
     fit = cox(extra, DIED, [Choice("flat"), Choice("x0"), Choice("twice")])
-    assert [(each.id, each.code) for each in fit.left_out] == [("flat", "constant"), ("twice", "repeats_others")]
+    assert [(each.id, each.code) for each in fit.left_out] == [
+        ("flat", "constant"),
+        ("twice", "repeats_others"),
+    ]
     assert [term.id for term in fit.terms] == ["x0"]
 
 
@@ -246,7 +254,9 @@ def test_many_levels_are_refused():
 def test_hazard_ratio_limits_follow_the_confidence():
     subject = random_cohort(37, 100)
     widths = [
-        (lambda ratio: np.log(ratio.upper / ratio.lower))(cox(subject, DIED, [Choice("x0")], confidence=c).terms[0].hazard_ratio)
+        (lambda ratio: np.log(ratio.upper / ratio.lower))(
+            cox(subject, DIED, [Choice("x0")], confidence=c).terms[0].hazard_ratio
+        )
         for c in (0.8, 0.95, 0.99)
     ]
     assert all(narrow < wide for narrow, wide in pairwise(widths))

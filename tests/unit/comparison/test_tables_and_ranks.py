@@ -10,6 +10,7 @@ import pytest
 from comparison_cohorts import DIED, cohort, random_cohort
 from hypothesis import given
 from hypothesis import strategies as st
+
 from vitalroll.comparison.intervals import compare_intervals
 from vitalroll.comparison.milestone import milestone_difference
 from vitalroll.comparison.rank_tests import rank_test
@@ -30,7 +31,9 @@ def test_a_table_by_hand():
     assert said.risk_difference.value == pytest.approx(0.1)
     assert said.number_needed == pytest.approx(10)
     assert log(said.risk_ratio.upper / 3) == pytest.approx(Z * sqrt(1 / 15 - 1 / 100 + 1 / 5 - 1 / 100))
-    assert log(said.odds_ratio.upper / said.odds_ratio.value) == pytest.approx(Z * sqrt(1 / 15 + 1 / 85 + 1 / 5 + 1 / 95))
+    assert log(said.odds_ratio.upper / said.odds_ratio.value) == pytest.approx(
+        Z * sqrt(1 / 15 + 1 / 85 + 1 / 5 + 1 / 95)
+    )
 
 
 def test_newcombe_published_example():
@@ -91,7 +94,9 @@ def test_fractional_totals_get_no_exact_test():
     assert caught.value.code == "exact_needs_whole_numbers"
 
 
-@pytest.mark.parametrize(("numbers", "code"), [((-1, 10, 1, 10), "negative_count"), ((11, 10, 1, 10), "more_events_than_patients")])
+@pytest.mark.parametrize(
+    ("numbers", "code"), [((-1, 10, 1, 10), "negative_count"), ((11, 10, 1, 10), "more_events_than_patients")]
+)
 def test_impossible_tables_are_refused(numbers, code):
     with pytest.raises(Refusal) as caught:
         TwoByTwo(*numbers)
@@ -142,15 +147,23 @@ def test_breslow_day_fitted_counts_keep_margins_and_odds_ratio():
 def test_strata_that_cannot_contribute_are_named():
     strata = [TwoByTwo(1, 10, 3, 10), TwoByTwo(2, 10, 0, 0), TwoByTwo(0, 10, 0, 10), TwoByTwo(5, 5, 5, 5)]
     said = stratified(strata)
-    assert [(each.stratum, each.code) for each in said.left_out] == [(1, "empty_group"), (2, "no_events"), (3, "all_events")]
+    assert [(each.stratum, each.code) for each in said.left_out] == [
+        (1, "empty_group"),
+        (2, "no_events"),
+        (3, "all_events"),
+    ]
     # Those without outcomes still count in the difference.
     assert said.pooled.risk_difference.value == pytest.approx(-2 / 10 * 5 / (5 + 5 + 2.5))
 
 
 def test_differing_strata_are_cautioned_and_halves_are_said():
-    codes = [caution.code for caution in stratified([TwoByTwo(40, 50, 10, 50), TwoByTwo(10, 50, 40, 50)]).cautions]
+    codes = [
+        caution.code for caution in stratified([TwoByTwo(40, 50, 10, 50), TwoByTwo(10, 50, 40, 50)]).cautions
+    ]
     assert codes == ["strata_differ"]
-    codes = [caution.code for caution in stratified([TwoByTwo(0, 50, 10, 50), TwoByTwo(10, 50, 20, 50)]).cautions]
+    codes = [
+        caution.code for caution in stratified([TwoByTwo(0, 50, 10, 50), TwoByTwo(10, 50, 20, 50)]).cautions
+    ]
     assert "half_added" in codes
 
 
@@ -184,7 +197,9 @@ def slow_log_rank(subject, weight):
         d = (event & (subject.exit == day)).sum()
         w = {"log_rank": 1, "gehan": n, "tarone_ware": sqrt(n), "fleming_harrington": s}[weight]
         share = np.array([(at_risk & (group == g)).sum() for g in range(k)]) / n
-        u += w * (np.array([(event & (subject.exit == day) & (group == g)).sum() for g in range(k)]) - d * share)
+        u += w * (
+            np.array([(event & (subject.exit == day) & (group == g)).sum() for g in range(k)]) - d * share
+        )
         if n > 1:
             v += w**2 * d * (n - d) / (n - 1) * (np.diag(share) - np.outer(share, share))
         s *= 1 - d / n
@@ -198,7 +213,9 @@ def test_rank_tests_agree_with_the_slow_count(late, weight):
     subject = subject.having(~((subject.entry > 0) & (subject.entry == subject.exit)))
     said = rank_test([risk_tables_by(subject, "group")], DIED, weight=weight)
     assert said.chi_squared == pytest.approx(slow_log_rank(subject, weight), rel=1e-10)
-    assert sum(group.observed for group in said.groups) == pytest.approx(sum(group.expected for group in said.groups))
+    assert sum(group.observed for group in said.groups) == pytest.approx(
+        sum(group.expected for group in said.groups)
+    )
 
 
 def test_the_order_of_groups_does_not_matter():
@@ -207,7 +224,8 @@ def test_the_order_of_groups_does_not_matter():
     three = cohort(subject.exit, subject.outcome == 1, {"group": thirds})
     tables = risk_tables_by(three, "group")
     answers = {
-        round(rank_test([{name: tables[name] for name in order}], DIED).chi_squared, 10) for order in permutations("abc")
+        round(rank_test([{name: tables[name] for name in order}], DIED).chi_squared, 10)
+        for order in permutations("abc")
     }
     assert len(answers) == 1
 
