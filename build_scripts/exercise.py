@@ -6,20 +6,119 @@ again with nothing but the pack. It needs only the engine, numpy and the demo re
 
 from __future__ import annotations
 
+import csv
+import io
 import json
+import zipfile
+from typing import Any
+from xml.sax.saxutils import escape
 
-import vitalroll.desk
+from demo_register import demo_register
+from vitalroll.desk import Desk
+
+CLOSING = "2025-06-30"
+BY_HEADING = "Severity at entry"
 
 
 def everything() -> None:
-    """Carry out every task; raise RuntimeError at the first refusal."""
-    desk = vitalroll.desk.Desk()
-    ask(desk, "about", {})
+    """Carry out every task; raise RuntimeError at the first refusal or when one was left out."""
+    desk = Desk()
+    asked: set[str] = set()
+
+    def ask(task: str, **request: Any) -> dict[str, Any]:
+        asked.add(task)
+        said = desk.answer(task, request)
+        if "refusal" in said:
+            raise RuntimeError(f"{task} was refused: {json.dumps(said['refusal'])}")
+        return said["answer"]
+
+    ask("about")
+    text = demo_register()
+    ask("register.open", name="demo.xlsx", content=small_workbook(text))
+    source = ask("register.open", name="demo-register.csv", content=text.encode())
+    cohort = ask("register.build", **proposed_reading(ask, source, CLOSING))
+    group = next(each["id"] for each in cohort["covariates"] if each["heading"] == BY_HEADING)
+    _outcomes(ask, group)
+    _comparisons(ask, group)
+    change = {"fewer_lost": 50, "from_year": 1}
+    ask("caseload.history")
+    ask("caseload.project", years=3, what_if=change, resources={"visits": 12}, draws=100)
+    _counts(ask)
+    ask("register.forget")
+    left_out = set(desk.tasks()) - asked
+    if left_out:
+        raise RuntimeError(f"not exercised, so not packed: {sorted(left_out)}")
 
 
-def ask(desk: vitalroll.desk.Desk, task: str, request: dict) -> dict:
-    """Return the answer to one task."""
-    said = desk.answer(task, request)
-    if "refusal" in said:
-        raise RuntimeError(f"{task} was refused: {json.dumps(said['refusal'])}")
-    return said["answer"]
+def proposed_reading(ask: Any, source: dict[str, Any], closing_date: str) -> dict[str, Any]:
+    """Return the request of register.build that accepts every proposal, as the page does."""
+    reading: dict[str, Any] = {
+        "roles": {column["id"]: column["role"] for column in source["columns"] if column["role"] != "none"},
+        "meanings": {},
+        "sexes": {},
+        "closing_date": closing_date,
+    }
+    for column in source["columns"]:
+        if column["role"] in ("outcome", "sex"):
+            for value in ask("register.values", column=column["id"])["values"]:
+                kind, field = ("meaning", "meanings") if column["role"] == "outcome" else ("sex", "sexes")
+                if value[kind]:
+                    reading[field][value["value"]] = value[kind]
+    return reading
+
+
+def _outcomes(ask: Any, group: str) -> None:
+    ask("outcomes.survival", group=group)
+    ask("outcomes.life_table", group=group)
+    ask("outcomes.leaving", group=group)
+
+
+def _comparisons(ask: Any, group: str) -> None:
+    pair = {"group": group, "exposed": "Severe", "reference": "Mild"}
+    ask("compare.difference", **pair)
+    ask("compare.intervals", **pair)
+    ask("compare.rank_test", group=group)
+    ask("compare.cox", covariates=[{"id": group, "reference": "Mild"}, {"id": "age", "per": 10}])
+
+
+def _counts(ask: Any) -> None:
+    rows = [{"width_years": 1, "lost": 4, "withdrawn": 10, "events": 7}]
+    ask("counts.life_table", entering=100, rows=rows)
+    stratum = {
+        "label": "", "exposed_events": 5, "exposed_total": 50, "unexposed_events": 9, "unexposed_total": 60,
+    }  # fmt: skip
+    ask("counts.strata", strata=[stratum, stratum])
+    ask("counts.balance", prevalent=100, new_per_year=20, leaving=[{"label": "", "per_year": 15}])
+
+
+def small_workbook(text: str) -> bytes:
+    """Return CSV text as the smallest workbook there can be: one sheet of inline text."""
+    rows = csv.reader(io.StringIO(text))
+    lines = "".join(
+        f'<row r="{number}">'
+        + "".join(f'<c t="inlineStr"><is><t>{escape(cell)}</t></is></c>' for cell in row)
+        + "</row>"
+        for number, row in enumerate(rows, 1)
+    )
+    main = "http://schemas.openxmlformats.org/spreadsheetml/2006/main"
+    package = "http://schemas.openxmlformats.org/package/2006"
+    office = "http://schemas.openxmlformats.org/officeDocument/2006/relationships"
+    kind = "application/vnd.openxmlformats-officedocument.spreadsheetml"
+    parts = {
+        "[Content_Types].xml": f'<Types xmlns="{package}/content-types">'
+        '<Default Extension="rels" ContentType="application/vnd.openxmlformats-package.relationships+xml"/>'
+        f'<Override PartName="/xl/workbook.xml" ContentType="{kind}.sheet.main+xml"/>'
+        f'<Override PartName="/xl/worksheets/sheet1.xml" ContentType="{kind}.worksheet+xml"/></Types>',
+        "_rels/.rels": f'<Relationships xmlns="{package}/relationships">'
+        f'<Relationship Id="r1" Type="{office}/officeDocument" Target="xl/workbook.xml"/></Relationships>',
+        "xl/workbook.xml": f'<workbook xmlns="{main}" xmlns:r="{office}"><sheets>'
+        '<sheet name="Register" sheetId="1" r:id="r1"/></sheets></workbook>',
+        "xl/_rels/workbook.xml.rels": f'<Relationships xmlns="{package}/relationships">'
+        f'<Relationship Id="r1" Type="{office}/worksheet" Target="worksheets/sheet1.xml"/></Relationships>',
+        "xl/worksheets/sheet1.xml": f'<worksheet xmlns="{main}"><sheetData>{lines}</sheetData></worksheet>',
+    }
+    packed = io.BytesIO()
+    with zipfile.ZipFile(packed, "w", zipfile.ZIP_DEFLATED) as archive:
+        for name, content in parts.items():
+            archive.writestr(name, '<?xml version="1.0" encoding="UTF-8"?>' + content)
+    return packed.getvalue()

@@ -10,12 +10,13 @@ import pytest
 from playwright.sync_api import Download, Page
 
 from demo_register import demo_register
+from exercise import BY_HEADING as GROUP
+from exercise import CLOSING, proposed_reading
 from make_dist import DIST
 from site_server import SiteServer
 from vitalroll.desk import Desk
 
 ANSWER_MS = 30_000
-GROUP = "Severity at entry"
 DEATHS = ["died_of_disease", "died_of_other_cause", "died_cause_unknown"]
 
 
@@ -57,15 +58,7 @@ def native() -> Callable[[str, dict], dict]:
         return said["answer"]
 
     source = ask("register.open", {"name": "demo-register.csv", "content": demo_register().encode()})
-    roles = {column["id"]: column["role"] for column in source["columns"] if column["role"] != "none"}
-    reading = {"roles": roles, "meanings": {}, "sexes": {}, "date_orders": {}, "closing_date": "2025-06-30"}
-    for column in source["columns"]:
-        if column["role"] in ("outcome", "sex"):
-            for value in ask("register.values", {"column": column["id"]})["values"]:
-                if column["role"] == "outcome" and value["meaning"]:
-                    reading["meanings"][value["value"]] = value["meaning"]
-                if column["role"] == "sex" and value["sex"]:
-                    reading["sexes"][value["value"]] = value["sex"]
+    reading = proposed_reading(lambda task, **request: ask(task, request), source, CLOSING)
     cohort = ask("register.build", reading)
     ask.cohort = cohort
     ask.group = next(each["id"] for each in cohort["covariates"] if each["heading"] == GROUP)

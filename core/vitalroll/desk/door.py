@@ -29,6 +29,11 @@ class Desk:
     def __init__(self) -> None:
         self._memory = Memory()
 
+    @staticmethod
+    def tasks() -> tuple[str, ...]:
+        """Return the names of all tasks."""
+        return tuple(TASKS)
+
     def answer(self, task: str, request: dict[str, Any], report: Report = _silent) -> dict[str, Any]:
         """Carry out a task.
 
