@@ -6,7 +6,14 @@ arrays, strings and numbers. One module for each room; this table only gathers t
 
 from __future__ import annotations
 
-from vitalroll.desk import about, caseload_tasks, comparison_tasks, counts_tasks, outcome_tasks
+from vitalroll.desk import (
+    about,
+    caseload_tasks,
+    comparison_tasks,
+    counts_tasks,
+    outcome_tasks,
+    register_tasks,
+)
 
 TASKS = {
     **about.TASKS,
@@ -14,4 +21,5 @@ TASKS = {
     **comparison_tasks.TASKS,
     **counts_tasks.TASKS,
     **outcome_tasks.TASKS,
+    **register_tasks.TASKS,
 }

@@ -25,9 +25,17 @@ _SMALL = 1_000_000
 _CHUNK = 1 << 20
 _COMPOUND = b"\xd0\xcf\x11\xe0\xa1\xb1\x1a\xe1"
 _DAMAGED = (
-    zipfile.BadZipFile, zlib.error, ValueError, OSError, EOFError, NotImplementedError, KeyError, RuntimeError,
-    struct.error, OverflowError,
-)  # fmt: skip
+    zipfile.BadZipFile,
+    zlib.error,
+    struct.error,
+    ValueError,
+    OSError,
+    EOFError,
+    NotImplementedError,
+    KeyError,
+    RuntimeError,
+    OverflowError,
+)
 """All that a damaged archive makes the standard library raise."""
 
 _PARSED = (".xml", ".rels", ".vml")

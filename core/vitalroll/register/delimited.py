@@ -22,7 +22,7 @@ _SAMPLE = 65_536
 _SAMPLE_ROWS = 200
 # No cell of a register runs over this many lines: a quotation mark was opened and never closed.
 _MOST_LINES_IN_A_ROW = 100
-_NAMED = re.compile(r"\A\s*sep=(.)\s*(?:\r\n|\r|\n)", re.IGNORECASE)
+_NAMED = re.compile(r"\A\s*sep=([,;\t|])\s*?(?:\r\n|\r|\n)", re.IGNORECASE)
 
 
 @dataclass(frozen=True)

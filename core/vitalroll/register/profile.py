@@ -86,12 +86,15 @@ def profile_columns(source: Source) -> Register:
     person is still asked.
     """
     rows = source.patients()
-    parsed = {column.position: _date_texts(column, text_counts(column, rows)) for column in source.table.columns}
+    parsed = {
+        column.position: _date_texts(column, text_counts(column, rows)) for column in source.table.columns
+    }
     years = [last_written_year(texts) for texts in parsed.values() if texts is not None]
     last_year = max((year for year in years if year is not None), default=YEAR_IF_NONE_WRITTEN)
     usual = _usual_order(source, parsed, rows)
     profiles = tuple(
-        _profile(column, rows, parsed[column.position], usual, last_year, source) for column in source.table.columns
+        _profile(column, rows, parsed[column.position], usual, last_year, source)
+        for column in source.table.columns
     )
     return Register(source, profiles, last_year)
 
@@ -114,7 +117,12 @@ def numbers_anyhow(profile: Profile, source: Source) -> NumberColumn:
 
 
 def _profile(
-    column: Column, rows: np.ndarray, texts: DateTexts | None, usual: str | None, last_year: int, source: Source
+    column: Column,
+    rows: np.ndarray,
+    texts: DateTexts | None,
+    usual: str | None,
+    last_year: int,
+    source: Source,
 ) -> Profile:
     weights = text_counts(column, rows)
     values = values_of(column, rows)

@@ -103,7 +103,10 @@ def _sex(profile: Profile) -> tuple[float, list[Evidence]]:
     recognised = _rows_with(profile, known)
     share = recognised / profile.filled
     if share >= 0.9 and len(profile.values) <= 12:
-        evidence = [*evidence, Evidence("values_recognised", {"recognised": recognised, "filled": profile.filled})]
+        evidence = [
+            *evidence,
+            Evidence("values_recognised", {"recognised": recognised, "filled": profile.filled}),
+        ]
         clear += 1.0
     return (clear if clear >= 0.9 else 0.0), evidence
 
@@ -116,7 +119,10 @@ def _outcome(profile: Profile) -> tuple[float, list[Evidence]]:
     recognised = _rows_with(profile, known)
     if recognised >= _RECOGNISED * profile.filled and len(known) > 1:
         clear += 2.0 * recognised / profile.filled
-        evidence = [*evidence, Evidence("values_recognised", {"recognised": recognised, "filled": profile.filled})]
+        evidence = [
+            *evidence,
+            Evidence("values_recognised", {"recognised": recognised, "filled": profile.filled}),
+        ]
     return (clear if clear >= 0.7 else 0.0), evidence
 
 

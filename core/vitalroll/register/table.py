@@ -291,9 +291,7 @@ def _only_numbers_after_first(cells: list[str]) -> bool:
     return all(looks_like_number(cell) for cell in filled[1:])
 
 
-def _heading_cautions(
-    headings: list[str], at: int, above: int, columns: tuple[Column, ...]
-) -> list[Caution]:
+def _heading_cautions(headings: list[str], at: int, above: int, columns: tuple[Column, ...]) -> list[Caution]:
     cautions = []
     if not at:
         cautions.append(Caution("no_headings"))

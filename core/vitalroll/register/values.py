@@ -71,11 +71,7 @@ def values_of(column: Column, rows: np.ndarray) -> Values:
     return Values(tuple(position), tuple(shown(text) for _, text in best), counts, codes)
 
 
-def natural_order(texts: tuple[str, ...]) -> list[int]:
-    """Return the positions of texts in the order a person would list them: numbers by size."""
-    return sorted(range(len(texts)), key=lambda i: _natural(texts[i]))
-
-
-def _natural(text: str) -> list[tuple[int, int, str]]:
+def natural(text: str) -> list[tuple[int, int, str]]:
+    """Return what to sort texts by so that they come as a person would list them: numbers by size."""
     pieces = re.findall(r"\d+|\D+", same(text))
     return [(0, int(piece), "") if piece.isdecimal() else (1, 0, piece) for piece in pieces]
