@@ -247,6 +247,158 @@ register-other-title = Another register
 forget = Forget everything
 forget-meaning = Drops the register and every choice made about it from memory.
 
+evidence-heading_says = Its heading says “{ $words }”.
+evidence-reads_as_dates = { $read } of { $filled } look like dates.
+evidence-order_settled = { $n ->
+    [one] One date shows
+   *[other] { $n } dates show
+  } the order: { $order }.
+evidence-order_not_settled = Nothing shows whether the day or the month comes first.
+evidence-reads_as_numbers = Numbers in all { $filled } rows that are filled.
+evidence-values_recognised = { $recognised } of { $filled } say something recognised.
+evidence-all_different = { $distinct } different values.
+evidence-few_values = { $distinct } different values.
+evidence-many_values = { $distinct } different values: too many to group by.
+evidence-heading_identifies = Its heading (“{ $words }”) says that it identifies people.
+evidence-heading_of_notes = Its heading (“{ $words }”) says that it holds notes.
+evidence-earliest_dates = Its dates come first.
+evidence-latest_dates = Its dates come last.
+evidence-free_text = Free text.
+evidence-nothing_in_it = Nothing stands in it.
+
+set-aside-repeated_heading = The headings stand here again.
+set-aside-repeated_heading-short = Headings repeated
+set-aside-subtotal_row = A total, not a patient.
+set-aside-subtotal_row-short = Totals
+set-aside-no_start_date = The start of follow-up is blank.
+set-aside-no_start_date-short = No start date
+set-aside-unreadable_start_date = “{ $written }” is not a date for the start.
+set-aside-unreadable_start_date-short = Start is not a date
+set-aside-partial_start_date = The start, “{ $written }”, lacks the day or the month.
+set-aside-partial_start_date-short = Start without day or month
+set-aside-impossible_start_date = There is no such day as “{ $written }”.
+set-aside-impossible_start_date-short = Start is no such day
+set-aside-start_after_closing = It starts on { $start }, after the closing date.
+set-aside-start_after_closing-short = Starts after the closing date
+set-aside-no_outcome = How it ended is blank.
+set-aside-no_outcome-short = Ending is blank
+set-aside-outcome_without_meaning = “{ $value }” was given no meaning.
+set-aside-outcome_without_meaning-short = Ending without a meaning
+set-aside-unreadable_end_date = “{ $written }” is not a date for the end.
+set-aside-unreadable_end_date-short = End is not a date
+set-aside-partial_end_date = The end, “{ $written }”, lacks the day or the month.
+set-aside-partial_end_date-short = End without day or month
+set-aside-impossible_end_date = There is no such day as “{ $written }”.
+set-aside-impossible_end_date-short = End is no such day
+set-aside-no_end_date = Follow-up ended, but not when.
+set-aside-no_end_date-short = Ended without a date
+set-aside-end_before_start = It ends on { $end }, before it starts on { $start }.
+set-aside-end_before_start-short = Ends before it starts
+set-aside-birth_after_start = Born on { $birth }, after the start on { $start }.
+set-aside-birth_after_start-short = Born after the start
+set-aside-unreadable_observed_from = “{ $written }” is not a date for the first visit here.
+set-aside-unreadable_observed_from-short = First visit here is not a date
+set-aside-partial_observed_from = The first visit here, “{ $written }”, lacks the day or the month.
+set-aside-partial_observed_from-short = First visit here without day or month
+set-aside-impossible_observed_from = There is no such day as “{ $written }”.
+set-aside-impossible_observed_from-short = First visit here is no such day
+set-aside-before_observed_from = It ends on { $end }, before the first visit here on { $observed_from }.
+set-aside-before_observed_from-short = Ends before the first visit here
+set-aside-no_time_at_risk = First seen here and last seen on the same day, { $observed_from }: no time was observed.
+set-aside-no_time_at_risk-short = No time observed
+set-aside-duplicate_number = The patient number stands on line { $first_line } already.
+set-aside-duplicate_number-short = Patient number repeated
+
+changed-under_care_to_closing = Under care without a last contact: followed to the closing date.
+changed-under_care_to_closing-short = Under care, followed to the closing date
+changed-observed_before_start = First seen here on { $observed_from }, before the start: observed from the start.
+changed-observed_before_start-short = First seen before the start
+changed-followed_past_closing = Ends on { $end }, after the closing date: still under care on that date.
+changed-followed_past_closing-short = Ended after the closing date: under care on it
+
+caution-age_out_of_range = { $n } ages below 0 or above { $oldest } count as not recorded.
+caution-all_censored = None of the { $n } patients died. Survival cannot fall; look at another outcome, or check what the values mean.
+caution-all_set_aside = Every row was set aside ({ $rows }). Look at the reasons: most likely a column or the way dates are written was chosen wrongly.
+caution-birth_dates_unreadable = { $n } dates of birth in “{ $heading }” could not be read; age counts as not recorded there.
+caution-buddhist_years = { $n } years in “{ $heading }” are counted from the Buddhist era; 543 was taken off.
+caution-closing_long_after_last = The last date in the file is { $last }, { $days } days before the closing date. Is the closing date right?
+caution-dates_against_order = { $n } dates in “{ $heading }” do not fit the order of the others and were set aside.
+caution-day_zero = { $n ->
+    [one] One patient was last seen
+   *[other] { $n } patients were last seen
+  } on the very day follow-up started (lines { $lines }…).
+caution-doubled_headings = These headings stand more than once: { $headings }.
+caution-encoding_assumed = The letters were taken to be written as { $encoding }. If names look wrong, save the file as UTF-8.
+caution-formulas_without_value = { $n } cells hold a formula without a stored value and were read as blank. Open and save the workbook in its spreadsheet program first.
+caution-hidden_columns = { $n } columns are hidden in the workbook; they were read.
+caution-hidden_rows = { $n } rows are hidden or filtered in the workbook; they were read.
+caution-hidden_sheets = The workbook has hidden sheets: { $sheets }.
+caution-long_rows = { $n ->
+    [one] One row has
+   *[other] { $n } rows have
+  } more cells than there are headings (lines { $lines }…): columns may have shifted there.
+caution-many_after_closing = { $n } patients start after the closing date. Is it right?
+caution-many_levels = “{ $heading }” has { $levels } different values: too many to compare groups by.
+caution-merged_cells = { $n } merged cells: only the first cell of each holds the value.
+caution-no_headings = There are no headings; columns are numbered.
+caution-nul_bytes = { $n } empty (NUL) characters were left out.
+caution-number_style_unsettled = In “{ $heading }” a comma or point may part thousands or decimals; “{ $decimal }” was taken for decimals.
+caution-one_patient_only = Only one patient is left. Results are for groups.
+caution-order_against_evidence = The chosen order for “{ $heading }” ({ $order }) goes against the dates that stand in it.
+caution-preamble = { $n ->
+    [one] One line above the headings was left out.
+   *[other] { $n } lines above the headings were left out.
+  }
+caution-quotes_unbalanced = A quotation mark that opens on line { $line } is never closed; quotation marks were read as ordinary letters.
+caution-repeated_headings = The headings are repeated within the list ({ $n }); those rows are no patients.
+caution-sex_without_meaning = { $n } rows have a sex that was given no meaning ({ $values }).
+caution-short_rows = { $n ->
+    [one] One row has
+   *[other] { $n } rows have
+  } fewer cells than there are headings (lines { $lines }…); the rest was read as blank.
+caution-subtotal_rows = Rows with totals were found ({ $n }); they are no patients.
+caution-text_in_numbers = In “{ $heading }”, { $n } cells are not numbers ({ $examples }) and count as not recorded.
+caution-two_digit_years = { $n } years in “{ $heading }” have two digits; they were taken as no later than { NUMBER($last_year, useGrouping: "false") }.
+caution-unnamed_columns = Columns without a heading: { $columns }.
+caution-unreadable_characters = { $n } characters could not be read.
+caution-unseen_for_long = { $n ->
+    [one] One patient counts
+   *[other] { $n } patients count
+  } as under care but were last seen over { $days } days before the closing date (lines { $lines }…). They may be lost.
+caution-values_not_listed = Only the { $listed } commonest of { $distinct } values are listed; the others have no meaning.
+caution-list_shortened = { $listed } of { $n } rows are listed; all are counted.
+caution-levels_not_listed = { $covariate } has { $levels } values; { $listed } are listed.
+
+refusal-compressed_file = This is a compressed file. Unpack it and open the list inside.
+refusal-date_order_unsettled = Choose how the dates in “{ $heading }” are written: nothing in them shows whether the day or the month comes first.
+refusal-empty_file = The file is empty.
+refusal-file_too_large = The file is larger than this page can open (the limit is 200 MB). Save only the list of patients in a file of its own.
+refusal-no_end_column = Choose the column with the last contact or end.
+refusal-no_outcome_column = Choose the column that says how it ended.
+refusal-no_start_column = Choose the column with the start of follow-up.
+refusal-no_readable_dates = Nothing in “{ $heading }” can be read as a date (for example { $examples }). Choose another column for the start.
+refusal-no_such_line = Line { $given } holds no headings.
+refusal-no_such_sheet = The workbook has no sheet “{ $given }”.
+refusal-not_a_table = This is not a list that can be read. Save it from its program as .xlsx or .csv.
+refusal-not_text = This is not a text file or a workbook. Save the list from its program as .xlsx or .csv.
+refusal-not_a_date = “{ $given }” is not a date.
+refusal-role_given_twice = More than one column is used as “{ $role }”. Choose one.
+refusal-too_many_cells_in_file = The list has more than { $most } cells, which is more than this page can hold.
+refusal-too_many_columns = The list has { $columns } columns; at most { $most } can be read.
+refusal-too_many_rows = The list has more than { $most } rows, which is more than this page can hold.
+refusal-unknown_column = The file has no such column.
+refusal-workbook_binary = This is a binary workbook (.xlsb). Save it as .xlsx.
+refusal-workbook_bomb = This workbook unpacks to { $ratio } times its size, which no list of patients does. It was not opened.
+refusal-workbook_damaged = The workbook is damaged and cannot be read. Open it in its spreadsheet program and save it again.
+refusal-workbook_encrypted = The workbook is protected with a password. Save a copy without one, and delete that copy afterwards.
+refusal-workbook_entities = The workbook contains definitions that no spreadsheet program writes. It was not opened.
+refusal-workbook_macros = The workbook contains macros. Save it as .xlsx, without macros.
+refusal-workbook_old_form = This is a workbook of the old kind (.xls). Save it as .xlsx.
+refusal-workbook_open_document = This is an OpenDocument workbook (.ods), which is not read yet. Save it as .xlsx or .csv.
+refusal-workbook_too_large = The workbook unpacks to more than this page can hold. Save only the list of patients in a workbook of its own.
+refusal-workbook_too_many_parts = The workbook has { $parts } parts, more than any list of patients needs. It was not opened.
+refusal-workbook_without_sheets = The workbook has no sheets with cells.
+
 ## Outcomes
 
 outcomes-title = What became of the patients

@@ -247,6 +247,158 @@ register-other-title = Un autre registre
 forget = Tout oublier
 forget-meaning = Retire de la mémoire le registre et tous les choix faits à son sujet.
 
+evidence-heading_says = Son en-tête dit « { $words } ».
+evidence-reads_as_dates = { $read } sur { $filled } ressemblent à des dates.
+evidence-order_settled = { $n ->
+    [one] Une date montre
+   *[other] { $n } dates montrent
+  } l’ordre : { $order }.
+evidence-order_not_settled = Rien ne montre si le jour ou le mois vient en premier.
+evidence-reads_as_numbers = Des nombres dans les { $filled } lignes remplies.
+evidence-values_recognised = { $recognised } sur { $filled } disent quelque chose de reconnu.
+evidence-all_different = { $distinct } valeurs différentes.
+evidence-few_values = { $distinct } valeurs différentes.
+evidence-many_values = { $distinct } valeurs différentes : trop pour former des groupes.
+evidence-heading_identifies = Son en-tête (« { $words } ») dit qu’elle identifie des personnes.
+evidence-heading_of_notes = Son en-tête (« { $words } ») dit qu’elle contient des notes.
+evidence-earliest_dates = Ses dates viennent en premier.
+evidence-latest_dates = Ses dates viennent en dernier.
+evidence-free_text = Texte libre.
+evidence-nothing_in_it = Elle est vide.
+
+set-aside-repeated_heading = Les en-têtes sont répétés ici.
+set-aside-repeated_heading-short = En-têtes répétés
+set-aside-subtotal_row = Un total, pas un patient.
+set-aside-subtotal_row-short = Totaux
+set-aside-no_start_date = Le début du suivi est vide.
+set-aside-no_start_date-short = Sans date de début
+set-aside-unreadable_start_date = « { $written } » n’est pas une date de début.
+set-aside-unreadable_start_date-short = Le début n’est pas une date
+set-aside-partial_start_date = Il manque au début, « { $written } », le jour ou le mois.
+set-aside-partial_start_date-short = Début sans jour ou sans mois
+set-aside-impossible_start_date = Le jour « { $written } » n’existe pas.
+set-aside-impossible_start_date-short = Le jour du début n’existe pas
+set-aside-start_after_closing = Commence le { $start }, après la date de clôture.
+set-aside-start_after_closing-short = Commence après la clôture
+set-aside-no_outcome = L’issue est vide.
+set-aside-no_outcome-short = Issue vide
+set-aside-outcome_without_meaning = « { $value } » n’a reçu aucun sens.
+set-aside-outcome_without_meaning-short = Issue sans signification
+set-aside-unreadable_end_date = « { $written } » n’est pas une date de fin.
+set-aside-unreadable_end_date-short = La fin n’est pas une date
+set-aside-partial_end_date = Il manque à la fin, « { $written } », le jour ou le mois.
+set-aside-partial_end_date-short = Fin sans jour ou sans mois
+set-aside-impossible_end_date = Le jour « { $written } » n’existe pas.
+set-aside-impossible_end_date-short = Le jour de la fin n’existe pas
+set-aside-no_end_date = Le suivi s’est terminé, mais on ne sait pas quand.
+set-aside-no_end_date-short = Terminé sans date
+set-aside-end_before_start = Se termine le { $end }, avant d’avoir commencé le { $start }.
+set-aside-end_before_start-short = Se termine avant de commencer
+set-aside-birth_after_start = Né le { $birth }, après le début le { $start }.
+set-aside-birth_after_start-short = Né après le début
+set-aside-unreadable_observed_from = « { $written } » n’est pas une date de première visite ici.
+set-aside-unreadable_observed_from-short = La première visite ici n’est pas une date
+set-aside-partial_observed_from = Il manque à la première visite ici, « { $written } », le jour ou le mois.
+set-aside-partial_observed_from-short = Première visite ici sans jour ou sans mois
+set-aside-impossible_observed_from = Le jour « { $written } » n’existe pas.
+set-aside-impossible_observed_from-short = Le jour de la première visite ici n’existe pas
+set-aside-before_observed_from = Se termine le { $end }, avant la première visite ici le { $observed_from }.
+set-aside-before_observed_from-short = Se termine avant la première visite ici
+set-aside-no_time_at_risk = Vu ici pour la première et la dernière fois le même jour, { $observed_from } : aucun temps observé.
+set-aside-no_time_at_risk-short = Aucun temps observé
+set-aside-duplicate_number = Le numéro de patient figure déjà à la ligne { $first_line }.
+set-aside-duplicate_number-short = Numéro de patient répété
+
+changed-under_care_to_closing = Encore suivi sans dernier contact : suivi jusqu’à la date de clôture.
+changed-under_care_to_closing-short = Encore suivi, jusqu’à la clôture
+changed-observed_before_start = Première visite ici le { $observed_from }, avant le début : observé depuis le début.
+changed-observed_before_start-short = Première visite avant le début
+changed-followed_past_closing = Se termine le { $end }, après la clôture : encore suivi à cette date.
+changed-followed_past_closing-short = Terminé après la clôture : encore suivi à cette date
+
+caution-age_out_of_range = { $n } âges inférieurs à 0 ou supérieurs à { $oldest } comptent comme non renseignés.
+caution-all_censored = Aucun des { $n } patients n’est décédé. La survie ne peut pas baisser ; étudiez une autre issue ou vérifiez le sens des valeurs.
+caution-all_set_aside = Toutes les lignes ({ $rows }) ont été écartées. Voyez les raisons : sans doute une colonne ou la façon d’écrire les dates a-t-elle été mal choisie.
+caution-birth_dates_unreadable = { $n } dates de naissance de « { $heading } » n’ont pas pu être lues ; l’âge y compte comme non renseigné.
+caution-buddhist_years = { $n } années de « { $heading } » sont comptées selon l’ère bouddhique ; 543 a été retranché.
+caution-closing_long_after_last = La dernière date du fichier est le { $last }, { $days } jours avant la clôture. La date de clôture est-elle juste ?
+caution-dates_against_order = { $n } dates de « { $heading } » ne suivent pas l’ordre des autres et ont été écartées.
+caution-day_zero = { $n ->
+    [one] Un patient a été vu pour la dernière fois
+   *[other] { $n } patients ont été vus pour la dernière fois
+  } le jour même du début (lignes { $lines }…).
+caution-doubled_headings = Ces en-têtes figurent plusieurs fois : { $headings }.
+caution-encoding_assumed = Les caractères ont été lus en { $encoding }. Si des noms paraissent faux, enregistrez le fichier en UTF-8.
+caution-formulas_without_value = { $n } cellules contiennent une formule sans valeur enregistrée et ont été lues comme vides. Ouvrez et enregistrez d’abord le classeur dans son tableur.
+caution-hidden_columns = { $n } colonnes sont masquées dans le classeur ; elles ont été lues.
+caution-hidden_rows = { $n } lignes sont masquées ou filtrées dans le classeur ; elles ont été lues.
+caution-hidden_sheets = Le classeur a des feuilles masquées : { $sheets }.
+caution-long_rows = { $n ->
+    [one] Une ligne a
+   *[other] { $n } lignes ont
+  } plus de cellules que d’en-têtes (lignes { $lines }…) : des colonnes y sont peut-être décalées.
+caution-many_after_closing = { $n } patients commencent après la date de clôture. Est-elle juste ?
+caution-many_levels = « { $heading } » a { $levels } valeurs différentes : trop pour comparer des groupes.
+caution-merged_cells = { $n } cellules fusionnées : seule la première de chacune contient la valeur.
+caution-no_headings = Il n’y a pas d’en-têtes ; les colonnes sont numérotées.
+caution-nul_bytes = { $n } caractères vides (NUL) ont été retirés.
+caution-number_style_unsettled = Dans « { $heading } », une virgule ou un point peut séparer milliers ou décimales ; « { $decimal } » a été pris pour les décimales.
+caution-one_patient_only = Il ne reste qu’un patient. Les résultats concernent des groupes.
+caution-order_against_evidence = L’ordre choisi pour « { $heading } » ({ $order }) contredit les dates qui s’y trouvent.
+caution-preamble = { $n ->
+    [one] Une ligne au-dessus des en-têtes a été laissée de côté.
+   *[other] { $n } lignes au-dessus des en-têtes ont été laissées de côté.
+  }
+caution-quotes_unbalanced = Un guillemet ouvert à la ligne { $line } n’est jamais fermé ; les guillemets ont été lus comme des caractères ordinaires.
+caution-repeated_headings = Les en-têtes sont répétés dans la liste ({ $n }) ; ces lignes ne sont pas des patients.
+caution-sex_without_meaning = { $n } lignes ont un sexe qui n’a reçu aucun sens ({ $values }).
+caution-short_rows = { $n ->
+    [one] Une ligne a
+   *[other] { $n } lignes ont
+  } moins de cellules que d’en-têtes (lignes { $lines }…) ; le reste a été lu comme vide.
+caution-subtotal_rows = Des lignes de totaux ont été trouvées ({ $n }) ; ce ne sont pas des patients.
+caution-text_in_numbers = Dans « { $heading } », { $n } cellules ne sont pas des nombres ({ $examples }) et comptent comme non renseignées.
+caution-two_digit_years = { $n } années de « { $heading } » ont deux chiffres ; elles ont été prises au plus tard en { NUMBER($last_year, useGrouping: "false") }.
+caution-unnamed_columns = Colonnes sans en-tête : { $columns }.
+caution-unreadable_characters = { $n } caractères n’ont pas pu être lus.
+caution-unseen_for_long = { $n ->
+    [one] Un patient compte
+   *[other] { $n } patients comptent
+  } comme suivis mais ont été vus pour la dernière fois plus de { $days } jours avant la clôture (lignes { $lines }…). Ils sont peut-être perdus de vue.
+caution-values_not_listed = Seules les { $listed } valeurs les plus fréquentes sur { $distinct } sont listées ; les autres n’ont pas de sens.
+caution-list_shortened = { $listed } lignes sur { $n } sont listées ; toutes sont comptées.
+caution-levels_not_listed = { $covariate } a { $levels } valeurs ; { $listed } sont listées.
+
+refusal-compressed_file = C’est un fichier compressé. Décompressez-le et ouvrez la liste qu’il contient.
+refusal-date_order_unsettled = Choisissez comment les dates de « { $heading } » sont écrites : rien ne montre si le jour ou le mois vient en premier.
+refusal-empty_file = Le fichier est vide.
+refusal-file_too_large = Le fichier est plus grand que ce que cette page peut ouvrir (la limite est 200 Mo). Enregistrez seulement la liste des patients dans un fichier à part.
+refusal-no_end_column = Choisissez la colonne du dernier contact ou de la fin.
+refusal-no_outcome_column = Choisissez la colonne de l’issue.
+refusal-no_start_column = Choisissez la colonne du début du suivi.
+refusal-no_readable_dates = Rien dans « { $heading } » ne se lit comme une date (par exemple { $examples }). Choisissez une autre colonne pour le début.
+refusal-no_such_line = La ligne { $given } ne contient pas d’en-têtes.
+refusal-no_such_sheet = Le classeur n’a pas de feuille « { $given } ».
+refusal-not_a_table = Ce n’est pas une liste lisible. Enregistrez-la depuis son logiciel en .xlsx ou .csv.
+refusal-not_text = Ce n’est ni un fichier texte ni un classeur. Enregistrez la liste depuis son logiciel en .xlsx ou .csv.
+refusal-not_a_date = « { $given } » n’est pas une date.
+refusal-role_given_twice = Plusieurs colonnes servent de « { $role } ». Choisissez-en une.
+refusal-too_many_cells_in_file = La liste a plus de { $most } cellules, plus que cette page ne peut contenir.
+refusal-too_many_columns = La liste a { $columns } colonnes ; on peut en lire au plus { $most }.
+refusal-too_many_rows = La liste a plus de { $most } lignes, plus que cette page ne peut contenir.
+refusal-unknown_column = Le fichier n’a pas cette colonne.
+refusal-workbook_binary = C’est un classeur binaire (.xlsb). Enregistrez-le en .xlsx.
+refusal-workbook_bomb = Ce classeur se décompresse en { $ratio } fois sa taille, ce que ne fait aucune liste de patients. Il n’a pas été ouvert.
+refusal-workbook_damaged = Le classeur est abîmé et ne peut pas être lu. Ouvrez-le dans son tableur et enregistrez-le à nouveau.
+refusal-workbook_encrypted = Le classeur est protégé par un mot de passe. Enregistrez-en une copie sans mot de passe, et supprimez-la ensuite.
+refusal-workbook_entities = Le classeur contient des définitions qu’aucun tableur n’écrit. Il n’a pas été ouvert.
+refusal-workbook_macros = Le classeur contient des macros. Enregistrez-le en .xlsx, sans macros.
+refusal-workbook_old_form = C’est un classeur d’ancien type (.xls). Enregistrez-le en .xlsx.
+refusal-workbook_open_document = C’est un classeur OpenDocument (.ods), pas encore lu ici. Enregistrez-le en .xlsx ou .csv.
+refusal-workbook_too_large = Décompressé, le classeur dépasse ce que cette page peut contenir. Enregistrez seulement la liste des patients dans un classeur à part.
+refusal-workbook_too_many_parts = Le classeur a { $parts } parties, plus qu’il n’en faut pour une liste de patients. Il n’a pas été ouvert.
+refusal-workbook_without_sheets = Le classeur n’a aucune feuille avec des cellules.
+
 ## Outcomes
 
 outcomes-title = Ce que sont devenus les patients

@@ -29,13 +29,19 @@ export function refusalNote(app, refusal) {
 }
 
 /**
- * Meanings and covariates among the parameters, by the names people know.
+ * Meanings, roles, columns and shares among the parameters, by the names people know.
  * @param {import('../app.js').App} app
  * @param {Record<string, any>} [parameters]
  */
-function named(app, parameters = {}) {
+export function named(app, parameters = {}) {
   const values = { ...parameters };
-  if (typeof values.meaning === 'string') values.meaning = app.words.say(`meaning-${values.meaning}`);
+  for (const name of ['meaning', 'role', 'order']) {
+    const key = `${name}-${values[name]}`;
+    if (typeof values[name] === 'string' && app.words.has(key)) values[name] = app.words.say(key);
+  }
+  for (const name of ['start', 'end', 'birth', 'observed_from', 'last']) {
+    if (/^\d{4}-\d{2}-\d{2}$/.test(values[name])) values[name] = app.words.day(values[name]);
+  }
   if (typeof values.share === 'number') values.share = app.words.percent(values.share, 0);
   // A caution about everybody carries level null.
   if ('level' in values) values.level = levelName(app, app.store.state.question.group, values.level);

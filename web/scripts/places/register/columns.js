@@ -1,11 +1,12 @@
 /** Which column is what, with the evidence, and how its dates are written. */
 import { h, written } from '../../parts/element.js';
 import { live } from '../../parts/live.js';
+import { named } from '../../parts/said.js';
 import { DATE_ROLES } from './reader.js';
 
 const ROLES = ['none', 'patient_number', 'start', 'observed_from', 'end', 'outcome', 'sex', 'birth_date', 'age', 'group'];
 /** Roles that only one column can have. */
-const SINGLE = ROLES.filter((role) => role !== 'none' && role !== 'group');
+const SINGLE = ROLES.filter((role) => !['none', 'group', 'end'].includes(role));
 
 /** @param {import('../../app.js').App} app */
 export function columnsBlock(app) {
@@ -38,7 +39,7 @@ function row(app, column, reading) {
 /** Evidence as sentences, then some of what stands in the column. */
 function looks(app, column) {
   const { say } = app.words;
-  const evidence = column.evidence.map(({ code, parameters }) => say(`evidence-${code}`, parameters)).join(' ');
+  const evidence = column.evidence.map(({ code, parameters }) => say(`evidence-${code}`, named(app, parameters))).join(' ');
   return [
     evidence ? h('div', {}, evidence) : null,
     h('div', { class: 'samples' }, column.samples.slice(0, 3).flatMap((sample, i) => [i ? ' · ' : '', written(sample)])),

@@ -1,7 +1,7 @@
 /** What was understood: who is in the cohort, who was set aside and why, and what to do next. */
 import { h } from '../../parts/element.js';
 import { live } from '../../parts/live.js';
-import { cautionList, covariateName, refusalNote } from '../../parts/said.js';
+import { cautionList, covariateName, named, refusalNote } from '../../parts/said.js';
 import { table } from '../../parts/table.js';
 import { whatIsMissing } from './reader.js';
 
@@ -73,7 +73,7 @@ function lines(app, kind, entries, counts) {
         name: `${kind}-lines`, caption: say(`${kind}-lines-caption`), rows: entries,
         columns: [
           { heading: say('line'), show: (row) => count(row.line), full: (row) => row.line },
-          { heading: say('reason'), show: (row) => say(`${kind}-${row.code}`, row.parameters), text: true },
+          { heading: say('reason'), show: (row) => say(`${kind}-${row.code}`, named(app, row.parameters)), text: true },
         ],
       })),
   ];
