@@ -195,7 +195,8 @@ order-ask = How are the dates written?
 order-day_month_year = day, month, year
 order-month_day_year = month, day, year
 order-year_month_day = year, month, day
-order-serial = spreadsheet day numbers
+order-serial_1900 = spreadsheet day numbers
+order-serial_1904 = spreadsheet day numbers, counted from 1904
 
 meanings-title = How it ended: what each value means
 meanings-lead = Rows whose value has no meaning are set aside and counted.
@@ -886,6 +887,8 @@ caution-balance_reaches_zero = With the same number leaving each year nobody wou
 caution-nobody_leaves = Nobody leaves, so the number only grows and there is no steady state.
 caution-not_in_steady_state = { $new_per_year } come and { $leaving_per_year } leave each year: the number is changing, so prevalence is not simply incidence times duration.
 caution-utilisation_at_or_above_one = { $places } places are too few: { $needed } would be taken on average.
+
+refusal-utilisation_at_or_above_one = { $places } places are too few: { $needed } would be taken on average.
 
 ## Report
 

@@ -195,7 +195,8 @@ order-ask = Comment les dates sont-elles écrites ?
 order-day_month_year = jour, mois, année
 order-month_day_year = mois, jour, année
 order-year_month_day = année, mois, jour
-order-serial = numéros de jour du tableur
+order-serial_1900 = numéros de jour du tableur
+order-serial_1904 = numéros de jour du tableur, comptés depuis 1904
 
 meanings-title = L’issue : ce que signifie chaque valeur
 meanings-lead = Les lignes dont la valeur n’a pas de sens sont écartées et comptées.
@@ -886,6 +887,8 @@ caution-balance_reaches_zero = Avec le même nombre de sorties chaque année, il
 caution-nobody_leaves = Personne ne sort : le nombre ne fait que croître et il n’y a pas d’état stable.
 caution-not_in_steady_state = { $new_per_year } arrivent et { $leaving_per_year } sortent chaque année : le nombre change, la prévalence n’est donc pas simplement l’incidence multipliée par la durée.
 caution-utilisation_at_or_above_one = { $places } places ne suffisent pas : { $needed } seraient occupées en moyenne.
+
+refusal-utilisation_at_or_above_one = { $places } places ne suffisent pas : { $needed } seraient occupées en moyenne.
 
 ## Report
 
