@@ -23,7 +23,6 @@ from vitalroll.register.profile import Profile, Register, profile_columns
 from vitalroll.register.roles import Proposal, propose_roles
 from vitalroll.register.source import open_source
 from vitalroll.register.spelling import excerpt
-from vitalroll.register.values import text_counts
 
 Report = Callable[[str, int, int], None]
 
@@ -229,8 +228,7 @@ def _dates(register: Register, profile: Profile) -> dict[str, Any] | None:
         last_year=register.last_year,
         epoch=register.source.epoch or "serial_1900",
     )
-    weights = text_counts(profile.column, register.source.patients())
-    usable = (read.fault == Fault.NONE) & (weights > 0)
+    usable = (read.fault == Fault.NONE) & (profile.counts > 0)
     first, second, _ = found.texts.parts.T
     telling = usable & (found.texts.form == Form.PARTS) & (first != second)
     picked = [*np.flatnonzero(telling)[:3].tolist(), *np.flatnonzero(usable & ~telling)[:3].tolist()][:3]

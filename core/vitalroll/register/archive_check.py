@@ -45,8 +45,11 @@ _ROW_NUMBER = re.compile(rb"\br=[\"'](\d{1,9})[\"']")
 _HIDDEN = re.compile(rb"\bhidden=[\"'](?:1|true)[\"']")
 _HIDDEN_COLUMNS = re.compile(rb"<" + _PREFIX + rb"col\b[^>]{0,500}\bhidden=[\"'](?:1|true)[\"']")
 _MERGED = re.compile(rb"<" + _PREFIX + rb"mergeCell\b")
+# A formula whose stored value is the empty text has t="str": that is a value.
 _NO_VALUE = re.compile(
-    rb"(?:</" + _PREFIX + rb"f>|<" + _PREFIX + rb"f\b[^>]{0,500}/>)\s{0,20}</" + _PREFIX + rb"c>"
+    rb"<PREc\b(?![^>]{0,500}\bt=[\"']str[\"'])[^>]{0,500}>\s{0,20}"
+    rb"<PREf\b(?:[^>]{0,500}/>|[^>]{0,500}>[^<]{0,10000}</PREf>)\s{0,20}"
+    rb"(?:<PREv\s?/>|<PREv>\s{0,20}</PREv>)?\s{0,20}</PREc>".replace(b"PRE", _PREFIX)
 )
 
 

@@ -17,7 +17,6 @@ from vitalroll.register.meanings import SEXES
 from vitalroll.register.profile import DateProfile, Profile, Register, dates_anyhow, numbers_anyhow
 from vitalroll.register.roles import MANY_ROLES, ROLES
 from vitalroll.register.spelling import excerpt, same
-from vitalroll.register.values import text_counts
 
 FEW_LINES = 20
 """So many lines are named in a caution."""
@@ -185,7 +184,7 @@ class Plan:
             self._cautions.append(Caution("order_against_evidence", about | {"order": order}))
         last_year = self._last_year(role)
         read = read_dates(dates.texts, order, last_year=last_year, epoch=source.epoch or "serial_1900")
-        self._note_dates(dates, read.fault, text_counts(column, source.patients()), about, role)
+        self._note_dates(dates, read.fault, profile.counts, about, role)
         return read
 
     def _last_year(self, role: str) -> int:

@@ -49,11 +49,16 @@ class DateProfile:
 
 @dataclass(frozen=True)
 class Profile:
-    """What a column holds. ``kind`` is identifier, date, number, category, text or empty."""
+    """What a column holds.
+
+    ``kind`` is identifier, date, number, category, text or empty; ``counts`` says how many patients
+    have each distinct text.
+    """
 
     column: Column
     kind: str
     filled: int
+    counts: np.ndarray
     values: Values
     dates: DateProfile | None
     numbers: NumberColumn | None
@@ -103,17 +108,15 @@ def dates_anyhow(profile: Profile, source: Source) -> DateProfile:
     """Return a column as dates, also when it did not look like any."""
     if profile.dates is not None:
         return profile.dates
-    weights = text_counts(profile.column, source.patients())
     texts = parse_dates(profile.column.texts)
-    return _date_profile(texts, weights, None, YEAR_IF_NONE_WRITTEN, source.epoch)
+    return _date_profile(texts, profile.counts, None, YEAR_IF_NONE_WRITTEN, source.epoch)
 
 
 def numbers_anyhow(profile: Profile, source: Source) -> NumberColumn:
     """Return a column as numbers, also when it did not look like any."""
     if profile.numbers is not None:
         return profile.numbers
-    weights = text_counts(profile.column, source.patients())
-    return parse_numbers(profile.column.texts, weights, comma=source.delimiter == ";")
+    return parse_numbers(profile.column.texts, profile.counts, comma=source.delimiter == ";")
 
 
 def _profile(
@@ -128,16 +131,18 @@ def _profile(
     values = values_of(column, rows)
     filled = int(values.counts.sum())
     if not filled:
-        return Profile(column, "empty", 0, values, None, None)
+        return Profile(column, "empty", 0, weights, values, None, None)
     if texts is not None:
         dates = _date_profile(texts, weights, usual, last_year, source.epoch)
-        return Profile(column, "date", filled, values, dates, None)
+        return Profile(column, "date", filled, weights, values, dates, None)
     sample = _sample(column.texts, weights)
     if np.mean(parse_numbers(sample).read) >= 0.5:
         numbers = parse_numbers(column.texts, weights, comma=source.delimiter == ";")
         if weights[numbers.read].sum() >= _MOSTLY * filled:
-            return Profile(column, _kind_of_numbers(numbers, values, filled), filled, values, None, numbers)
-    return Profile(column, _kind_of_texts(values, filled), filled, values, None, None)
+            present = numbers.value[numbers.read & (weights > 0)]
+            kind = _kind_of_numbers(present, values, filled)
+            return Profile(column, kind, filled, weights, values, None, numbers)
+    return Profile(column, _kind_of_texts(values, filled), filled, weights, values, None, None)
 
 
 def _sample(texts: Sequence[str], weights: np.ndarray) -> list[str]:
@@ -194,8 +199,7 @@ def _date_profile(
     )
 
 
-def _kind_of_numbers(numbers: NumberColumn, values: Values, filled: int) -> str:
-    read = numbers.value[numbers.read]
+def _kind_of_numbers(read: np.ndarray, values: Values, filled: int) -> str:
     whole = bool(np.all(read == np.floor(read)))
     if whole and len(values) <= _FEW_CODES:
         return "category"

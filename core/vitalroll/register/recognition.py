@@ -49,8 +49,16 @@ def has_any(plain: str, phrases: Sequence[str]) -> bool:
 
 def is_total(text: str) -> bool:
     """Return whether a cell begins with a word for a total."""
+    # Asked of every patient number: most are ruled out by their first letter.
+    if text.strip()[:1].lower() not in _first_letters():
+        return False
     match = _pattern(tuple(words()["totals"])).match(f" {bare(text)} ")
     return match is not None
+
+
+@cache
+def _first_letters() -> frozenset[str]:
+    return frozenset(phrase[0] for phrase in words()["totals"])
 
 
 @cache

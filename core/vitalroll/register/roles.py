@@ -8,12 +8,12 @@ from typing import Any, Literal, get_args
 
 import numpy as np
 
+from vitalroll.register.covariates import OLDEST
 from vitalroll.register.dates import Fault, read_dates
 from vitalroll.register.meanings import propose_meaning, propose_sexes
 from vitalroll.register.profile import Profile, Register
 from vitalroll.register.recognition import longest_match, words
 from vitalroll.register.spelling import bare
-from vitalroll.register.values import text_counts
 
 Role = Literal[
     "patient_number", "start", "observed_from", "end", "outcome", "sex", "age", "birth_date", "group", "none"
@@ -132,8 +132,9 @@ def _age(profile: Profile) -> tuple[float, list[Evidence]]:
     clear, evidence = _said(profile, "age")
     if longest_match(bare(profile.column.heading), words()["not_at_start"]):
         return 0.0, []
-    read = profile.numbers.value[profile.numbers.read]
-    return (clear if np.all((read >= 0) & (read <= 130)) else 0.0), evidence
+    value, counts = profile.numbers.value, profile.counts
+    likely = (value >= 0) & (value <= OLDEST)
+    return (clear if counts[likely].sum() >= _RECOGNISED * profile.filled else 0.0), evidence
 
 
 def _number(profile: Profile) -> tuple[float, list[Evidence]]:
@@ -182,9 +183,8 @@ def _middle(register: Register, profile: Profile) -> float:
     if found is None:
         return 0.0
     days = read_dates(found.texts, found.settling.order, last_year=register.last_year)
-    weights = text_counts(profile.column, register.source.patients())
-    read = (days.fault == Fault.NONE) & (weights > 0)
-    return float(np.median(np.repeat(days.day[read], weights[read]))) if read.any() else 0.0
+    read = (days.fault == Fault.NONE) & (profile.counts > 0)
+    return float(np.median(np.repeat(days.day[read], profile.counts[read]))) if read.any() else 0.0
 
 
 def _rest(profile: Profile) -> tuple[str, list[Evidence]]:

@@ -35,7 +35,8 @@ def excerpt(text: str) -> str:
 def same(text: str) -> str:
     """Return the form of ``text`` by which spellings are matched; empty for a blank cell."""
     if text.isascii():
-        return " ".join(text.translate(_CONTROLS).split()).casefold()
+        plain = text if text.isprintable() else text.translate(_CONTROLS)
+        return " ".join(plain.split()).casefold()
     folded = unicodedata.normalize("NFKC", text).translate(_CONTROLS).casefold()
     seen = "".join(letter for letter in folded if not _unseen(letter))
     return " ".join(unicodedata.normalize("NFKC", seen).split())

@@ -23,7 +23,7 @@ MOST_CELLS = 40_000_000
 _SEARCHED = 200
 """Headings are looked for in the first so many rows that have anything in them."""
 
-_SHARE_OF_ROWS = 0.1
+_SHARE_OF_ROWS = 0.25
 """A column without a heading is one if at least this share of the rows has something in it."""
 
 
@@ -238,10 +238,11 @@ def _names_columns(cells: list[str]) -> bool:
 
 def _width(headings: list[str], widths: np.ndarray) -> int:
     """Return how many columns there are: those with a heading, and those that many rows fill."""
-    common = 0
-    for width, _ in Counter(widths.tolist()).items():
-        if np.mean(widths >= width) >= _SHARE_OF_ROWS:
-            common = max(common, width)
+    if not headings:
+        return int(widths.max())
+    common = max(
+        (width for width in set(widths.tolist()) if np.mean(widths >= width) >= _SHARE_OF_ROWS), default=0
+    )
     named = max((i + 1 for i, heading in enumerate(headings) if same(heading)), default=0)
     return max(named, common)
 
