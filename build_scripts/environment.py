@@ -25,8 +25,8 @@ def enter(group):
     """
     inside = Path(sys.prefix).resolve() == VENV.resolve()
     if not inside:
-        if not _ready(group):
-            _make(find_python(), group)
+        if not _works(venv_python()):
+            _make(find_python())
         os.execv(str(venv_python()), [str(venv_python()), *sys.argv])
     if not _ready(group):
         _install(group)
@@ -84,16 +84,19 @@ def _wanted(group):
 
 
 def _ready(group):
-    return venv_python().exists() and STAMP.exists() and _wanted(group) in STAMP.read_text().split()
+    return STAMP.exists() and _wanted(group) in STAMP.read_text().split()
 
 
-def _make(python, group):
+def _works(python):
+    return python.exists() and _version(str(python)) is not None
+
+
+def _make(python):
     print("Setting up the environment in .venv with %s …" % python, flush=True)
     if VENV.exists():
-        shutil.rmtree(VENV)
+        shutil.rmtree(str(VENV))
     subprocess.run([python, "-m", "venv", str(VENV)], check=True)
     pip("install", "--upgrade", "pip>=25.1")
-    _install(group)
 
 
 def _install(group):
