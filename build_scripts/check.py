@@ -6,7 +6,7 @@ import sys
 
 import environment
 
-ROOMS = ["unit", "reference", "build", "wasm", "browser"]
+ROOMS = ["unit", "hard_cases", "reference", "build", "wasm", "browser"]
 
 
 def main():

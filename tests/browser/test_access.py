@@ -3,10 +3,12 @@
 from __future__ import annotations
 
 from collections.abc import Callable
+from itertools import pairwise
 
 import pytest
-from environment import HOUSE
 from playwright.sync_api import Page
+
+from environment import HOUSE
 from site_server import SiteServer
 
 AXE = (HOUSE / "web" / "node_modules" / "axe-core" / "axe.min.js").read_text(encoding="utf-8")
@@ -97,4 +99,4 @@ def test_an_answer_is_announced_and_headings_are_in_order(site: SiteServer, open
         "() => [...document.querySelectorAll('#place-outcomes :is(h1, h2, h3)')].map((h) => Number(h.tagName[1]))"
     )
     assert levels[0] == 1
-    assert all(later - earlier <= 1 for earlier, later in zip(levels, levels[1:], strict=False))
+    assert all(later - earlier <= 1 for earlier, later in pairwise(levels))

@@ -5,6 +5,7 @@ from __future__ import annotations
 from collections.abc import Callable
 
 from playwright.sync_api import Page
+
 from site_server import SiteServer
 
 ANSWER_MS = 90_000
