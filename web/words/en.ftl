@@ -359,7 +359,7 @@ caution-short_rows = { $n ->
   } fewer cells than there are headings (lines { $lines }…); the rest was read as blank.
 caution-subtotal_rows = Rows with totals were found ({ $n }); they are no patients.
 caution-text_in_numbers = In “{ $heading }”, { $n } cells are not numbers ({ $examples }) and count as not recorded.
-caution-two_digit_years = { $n } years in “{ $heading }” have two digits; they were taken as no later than { NUMBER($last_year, useGrouping: "false") }.
+caution-two_digit_years = { $n } years with two digits ({ $headings }) were taken as lying between { $first } and { $last }.
 caution-unnamed_columns = Columns without a heading: { $columns }.
 caution-unreadable_characters = { $n } characters could not be read.
 caution-unseen_for_long = { $n ->
@@ -782,8 +782,8 @@ caution-history_too_short = The register holds { $whole_years ->
 caution-newcomers_overdispersed = Newcomers differ between years more than chance would explain (by a factor of { NUMBER($dispersion, maximumFractionDigits: 1) }); the bands are widened for it.
 caution-newcomers_trend = Newcomers have changed by about { NUMBER($percent_per_year, maximumFractionDigits: 0) }% a year. The projection does not carry the trend on: if it goes on, type a number that you expect.
 caution-years_without_newcomers = { $count ->
-    [one] In one year ({ NUMBER($year, useGrouping: "false") }) nobody was registered
-   *[other] In { $count } years (the first is { NUMBER($year, useGrouping: "false") }) nobody was registered
+    [one] In one year ({ $year }) nobody was registered
+   *[other] In { $count } years (the first is { $year }) nobody was registered
   }. If registration had stopped, the mean is too low.
 caution-old_cases_not_newcomers = { $count } patients were old cases when the register opened and are not counted as newcomers.
 caution-no_newcomers_lately = Nobody has been registered since { $last }, { $days } days before the closing date. If registration lags behind, the last year is too low.

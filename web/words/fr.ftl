@@ -359,7 +359,7 @@ caution-short_rows = { $n ->
   } moins de cellules que d’en-têtes (lignes { $lines }…) ; le reste a été lu comme vide.
 caution-subtotal_rows = Des lignes de totaux ont été trouvées ({ $n }) ; ce ne sont pas des patients.
 caution-text_in_numbers = Dans « { $heading } », { $n } cellules ne sont pas des nombres ({ $examples }) et comptent comme non renseignées.
-caution-two_digit_years = { $n } années de « { $heading } » ont deux chiffres ; elles ont été prises au plus tard en { NUMBER($last_year, useGrouping: "false") }.
+caution-two_digit_years = { $n } années à deux chiffres ({ $headings }) ont été placées entre { $first } et { $last }.
 caution-unnamed_columns = Colonnes sans en-tête : { $columns }.
 caution-unreadable_characters = { $n } caractères n’ont pas pu être lus.
 caution-unseen_for_long = { $n ->
@@ -782,8 +782,8 @@ caution-history_too_short = Le registre contient { $whole_years ->
 caution-newcomers_overdispersed = Les arrivées diffèrent d’une année à l’autre plus que le hasard ne l’explique (d’un facteur { NUMBER($dispersion, maximumFractionDigits: 1) }) ; les bandes sont élargies en conséquence.
 caution-newcomers_trend = Les arrivées ont changé d’environ { NUMBER($percent_per_year, maximumFractionDigits: 0) } % par an. La projection ne prolonge pas cette tendance : si elle doit continuer, saisissez le nombre attendu.
 caution-years_without_newcomers = { $count ->
-    [one] Une année ({ NUMBER($year, useGrouping: "false") }), personne n’a été inscrit
-   *[other] { $count } années (la première : { NUMBER($year, useGrouping: "false") }), personne n’a été inscrit
+    [one] Une année ({ $year }), personne n’a été inscrit
+   *[other] { $count } années (la première : { $year }), personne n’a été inscrit
   }. Si l’inscription s’était arrêtée, la moyenne est trop basse.
 caution-old_cases_not_newcomers = { $count } patients étaient d’anciens cas à l’ouverture du registre et ne sont pas comptés comme nouveaux.
 caution-no_newcomers_lately = Personne n’a été inscrit depuis le { $last }, { $days } jours avant la clôture. Si l’inscription a du retard, la dernière année est trop basse.

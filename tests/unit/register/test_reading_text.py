@@ -124,7 +124,9 @@ def test_headings_are_found_below_a_preamble():
 def test_headings_stand_where_the_person_says():
     text = "No,Zone\n1,North\nNr,Place\n2,South\n"
     assert columns(text, heading_line=3) == {"Nr": ["2"], "Place": ["South"]}
-    assert list(columns(text, heading_line=0)) == ["", ""][:1]
+    unnamed = open_source(text.encode(), heading_line=0).table
+    assert [column.heading for column in unnamed.columns] == ["", ""]
+    assert len(unnamed) == 4
     with pytest.raises(Refusal) as refused:
         open_source(text.encode(), heading_line=9)
     assert (refused.value.code, refused.value.field) == ("no_such_line", "header_line")

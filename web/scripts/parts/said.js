@@ -39,6 +39,10 @@ export function named(app, parameters = {}) {
     const key = `${name}-${values[name]}`;
     if (typeof values[name] === 'string' && app.words.has(key)) values[name] = app.words.say(key);
   }
+  // A calendar year is a name, not an amount: no mark between its thousands.
+  for (const name of ['year', 'first', 'last']) {
+    if (typeof values[name] === 'number') values[name] = String(values[name]);
+  }
   for (const name of ['start', 'end', 'birth', 'observed_from', 'last']) {
     if (/^\d{4}-\d{2}-\d{2}$/.test(values[name])) values[name] = app.words.day(values[name]);
   }

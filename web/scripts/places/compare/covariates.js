@@ -31,7 +31,9 @@ function withDefaults(state, covariate) {
 export function coxRequest(state) {
   const covariates = chosen(state);
   if (!state.cohort || covariates.length === 0) return null;
-  return { task: 'compare.cox', request: { interest: state.question.interest, covariates, ties: state.compare.ties } };
+  // The compared group comes first: it is what the question is about.
+  const ordered = [...covariates].sort((one, other) => Number(other.id === state.question.group) - Number(one.id === state.question.group));
+  return { task: 'compare.cox', request: { interest: state.question.interest, covariates: ordered, ties: state.compare.ties } };
 }
 
 /** @param {import('../../app.js').App} app */
