@@ -82,14 +82,14 @@ def open_register(memory: Memory, request: OpenRequest, report: Report) -> dict[
         ``dates`` is null or {order, settled, choices, read, unread, examples: [{text, date_iso}]};
         ``preview``: the first rows as {line, cells}; ``cautions``.
 
-    A file opened before, and its cohort, are dropped first. Refusals and cautions: those of
-    ``source.open_source``.
+    A file opened before, and its cohort, are dropped, unless this one is refused. Refusals and
+    cautions: those of ``source.open_source``.
     """
-    memory.forget()
     source = open_source(
         request.content, request.name, sheet=request.sheet, heading_line=request.header_line, report=report
     )
     register = profile_columns(source)
+    memory.forget()
     memory.source = register
     proposals = propose_roles(register)
     return {

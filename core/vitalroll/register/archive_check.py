@@ -75,8 +75,9 @@ def refuse_by_signature(content: bytes) -> None:
     if content.startswith(_COMPOUND):
         if "EncryptedPackage".encode("utf-16-le") in content:
             raise Refusal("workbook_encrypted")
-        old = any(name.encode("utf-16-le") in content for name in ("Workbook", "Book"))
-        raise Refusal("workbook_old_form" if old else "not_a_table")
+        if any(name.encode("utf-16-le") in content for name in ("Workbook", "Book")):
+            raise Refusal("workbook_old_form")
+        raise Refusal("not_a_table")
     if content.startswith((b"\x1f\x8b", b"BZh", b"\xfd7zXZ", b"7z\xbc\xaf", b"Rar!")):
         raise Refusal("compressed_file")
     if content.startswith((b"%PDF", b"\x89PNG", b"\xff\xd8\xff", b"GIF8", b"\x7fELF", b"MZ\x90", b"{\\rtf")):

@@ -52,7 +52,8 @@ class Profile:
     """What a column holds.
 
     ``kind`` is identifier, date, number, category, text or empty; ``counts`` says how many patients
-    have each distinct text.
+    have each distinct text. ``dates`` is there for every column that could be read as dates, even if
+    its kind is another; ``numbers`` likewise for most that are numbers.
     """
 
     column: Column
@@ -91,15 +92,14 @@ def profile_columns(source: Source) -> Register:
     person is still asked.
     """
     rows = source.patients()
-    parsed = {
-        column.position: _date_texts(column, text_counts(column, rows)) for column in source.table.columns
-    }
-    years = [last_written_year(texts) for texts in parsed.values() if texts is not None]
-    last_year = max((year for year in years if year is not None), default=YEAR_IF_NONE_WRITTEN)
-    usual = _usual_order(source, parsed, rows)
+    taken_apart = [_maybe_dates(column, text_counts(column, rows)) for column in source.table.columns]
+    likely = [maybe.texts for maybe in taken_apart if maybe is not None and maybe.likely]
+    years = [year for texts in likely if (year := last_written_year(texts)) is not None]
+    last_year = max(years, default=YEAR_IF_NONE_WRITTEN)
+    usual = _usual_order(source, taken_apart, rows)
     profiles = tuple(
-        _profile(column, rows, parsed[column.position], usual, last_year, source)
-        for column in source.table.columns
+        _profile(column, rows, maybe, usual, last_year, source)
+        for column, maybe in zip(source.table.columns, taken_apart, strict=True)
     )
     return Register(source, profiles, last_year)
 
@@ -122,7 +122,7 @@ def numbers_anyhow(profile: Profile, source: Source) -> NumberColumn:
 def _profile(
     column: Column,
     rows: np.ndarray,
-    texts: DateTexts | None,
+    maybe: _MaybeDates | None,
     usual: str | None,
     last_year: int,
     source: Source,
@@ -132,17 +132,19 @@ def _profile(
     filled = int(values.counts.sum())
     if not filled:
         return Profile(column, "empty", 0, weights, values, None, None)
-    if texts is not None:
-        dates = _date_profile(texts, weights, usual, last_year, source.epoch)
-        return Profile(column, "date", filled, weights, values, dates, None)
+    dates = None
+    if maybe is not None:
+        dates = _date_profile(maybe.texts, weights, usual, last_year, source.epoch)
+        if maybe.likely:
+            return Profile(column, "date", filled, weights, values, dates, None)
     sample = _sample(column.texts, weights)
     if np.mean(parse_numbers(sample).read) >= 0.5:
         numbers = parse_numbers(column.texts, weights, comma=source.delimiter == ";")
         if weights[numbers.read].sum() >= _MOSTLY * filled:
             present = numbers.value[numbers.read & (weights > 0)]
             kind = _kind_of_numbers(present, values, filled)
-            return Profile(column, kind, filled, weights, values, None, numbers)
-    return Profile(column, _kind_of_texts(values, filled), filled, weights, values, None, None)
+            return Profile(column, kind, filled, weights, values, dates, numbers)
+    return Profile(column, _kind_of_texts(values, filled), filled, weights, values, dates, None)
 
 
 def _sample(texts: Sequence[str], weights: np.ndarray) -> list[str]:
@@ -155,28 +157,37 @@ def _sample(texts: Sequence[str], weights: np.ndarray) -> list[str]:
     return found
 
 
-def _date_texts(column: Column, weights: np.ndarray) -> DateTexts | None:
-    """Return the column taken apart as dates if it looks like a column of dates."""
+@dataclass(frozen=True)
+class _MaybeDates:
+    """A column taken apart as dates, and whether it is likely that it holds any.
+
+    If not, the person may still say that it does, and can then be asked in which order.
+    """
+
+    texts: DateTexts
+    likely: bool
+
+
+def _maybe_dates(column: Column, weights: np.ndarray) -> _MaybeDates | None:
     sample = _sample(column.texts, weights)
     if not sample:
         return None
     first = parse_dates(sample)
     written = (first.form == Form.FIXED) | (first.form == Form.PARTS)
-    if np.mean(written | (first.form == Form.PARTIAL)) >= 0.5 and written.any():
-        return parse_dates(column.texts)
-    says_date = has_any(bare(column.heading), words()["dates"])
-    if says_date and np.mean(first.form == Form.SERIAL) >= _MOSTLY:
-        return parse_dates(column.texts)
+    if written.any():
+        likely = np.mean(written | (first.form == Form.PARTIAL)) >= 0.5
+        return _MaybeDates(parse_dates(column.texts), bool(likely))
+    if np.mean(first.form == Form.SERIAL) >= _MOSTLY:
+        return _MaybeDates(parse_dates(column.texts), has_any(bare(column.heading), words()["dates"]))
     return None
 
 
-def _usual_order(source: Source, parsed: dict[int, DateTexts | None], rows: np.ndarray) -> str | None:
+def _usual_order(source: Source, taken_apart: list[_MaybeDates | None], rows: np.ndarray) -> str | None:
     """Return the order that most evidence in the file speaks for."""
     evidence: dict[str, int] = {}
-    for column in source.table.columns:
-        texts = parsed[column.position]
-        if texts is not None:
-            found = settle(texts, text_counts(column, rows))
+    for column, maybe in zip(source.table.columns, taken_apart, strict=True):
+        if maybe is not None and maybe.likely:
+            found = settle(maybe.texts, text_counts(column, rows))
             if found.settled:
                 evidence[found.order] = evidence.get(found.order, 0) + found.for_order
     return max(evidence, key=lambda order: evidence[order]) if any(evidence.values()) else None

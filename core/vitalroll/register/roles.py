@@ -73,7 +73,7 @@ def _proposal(profile: Profile, chosen: tuple[str, list[Evidence]] | None) -> Pr
 def _content(profile: Profile) -> Iterable[Evidence]:
     if profile.kind == "empty":
         yield Evidence("nothing_in_it", {})
-    if profile.dates is not None:
+    if profile.kind == "date" and profile.dates is not None:
         yield Evidence("reads_as_dates", {"read": profile.dates.read, "filled": profile.filled})
         settling = profile.dates.settling
         if not settling.settled:

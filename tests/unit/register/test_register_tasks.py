@@ -145,13 +145,39 @@ def test_nothing_is_known_before_opening_and_after_forgetting(desk):
     assert ask(desk, "outcomes.survival")["code"] == "no_register"
 
 
-def test_a_file_that_is_refused_and_choices_that_are_leave_no_cohort_behind(desk):
+def test_choices_that_are_refused_leave_no_cohort_behind(desk):
     opened(desk)
     ask(desk, "register.build", **BUILD)
     ask(desk, "register.build", **BUILD | {"roles": {}})
     assert ask(desk, "outcomes.survival")["code"] == "no_register"
+
+
+def test_a_file_that_is_refused_leaves_the_one_before_as_it_was(desk):
+    opened(desk)
+    ask(desk, "register.build", **BUILD)
     assert opened(desk, "")["code"] == "empty_file"
-    assert ask(desk, "register.build", **BUILD)["code"] == "no_register"
+    assert ask(desk, "outcomes.survival", interest=["died_of_disease"])["curves"][0]["n"] == 4
+
+
+def test_opening_another_file_drops_the_cohort_of_the_one_before(desk):
+    opened(desk)
+    ask(desk, "register.build", **BUILD)
+    opened(desk, TEXT.replace("North", "East"))
+    assert ask(desk, "outcomes.survival")["code"] == "no_register"
+
+
+def test_a_column_that_only_might_hold_dates_can_be_asked_about(desk):
+    days = "".join(f"{i},{42_000 + 31 * i},{44_000 + i},care\n" for i in range(9))
+    found = opened(desk, "No,Began,Ended,Status\n" + days)
+    began = found["columns"][1]
+    assert (began["kind"], began["role"]) == ("number", "group")
+    assert began["dates"]["choices"] == ["serial_1900", "serial_1904"]
+    assert found["columns"][0]["dates"] is None
+    roles = {"c1": "start", "c2": "end", "c3": "outcome"}
+    request = {"roles": roles, "meanings": {"care": "under_care"}, "closing_date": "2024-01-01"}
+    assert ask(desk, "register.build", **request)["code"] == "date_order_unsettled"
+    orders = {"c1": "serial_1900", "c2": "serial_1900"}
+    assert ask(desk, "register.build", **request, date_orders=orders)["first_start"] == "2014-12-27"
 
 
 @pytest.mark.parametrize("given", ["", "31/12/2020", "2020-02-30", "1700-01-01", "tomorrow"])
