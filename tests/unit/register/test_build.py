@@ -119,6 +119,10 @@ def test_a_first_visit_before_the_start_means_observed_from_the_start():
     ]
 
 
+def test_a_start_on_the_closing_date_is_kept():
+    assert built(row(start="2020-12-31", last="2020-12-31")).cohort.exit.tolist() == [0]
+
+
 def test_a_death_on_the_day_of_the_start_is_kept_and_said():
     found = built(GOOD, row(last="2018-01-01", status="died"))
     assert found.cohort.exit.tolist() == [365, 0]

@@ -102,6 +102,12 @@ def test_a_part_above_12_settles_the_whole_column():
     assert (found.order, found.settled, found.for_order) == ("month_day_year", True, 3)
 
 
+@pytest.mark.parametrize("day", [13, 31])
+def test_every_day_above_12_is_evidence(day):
+    assert settled(["03/07/2018", f"{day}/07/2018"]).settled
+    assert settled(["03/07/2018", f"07/{day}/2018"]).order == "month_day_year"
+
+
 def test_a_column_that_nothing_settles_is_asked_about():
     found = settled(["03/07/2018", "04/05/2019"])
     assert not found.settled

@@ -227,12 +227,12 @@ def test_every_date_role_needs_a_column_of_dates():
 
 
 def test_kinds_of_columns():
-    text = "id,when,weight,code,zone,story,nothing\n" + "\n".join(
-        f"P{i:03},2020-01-{1 + i % 28:02},{50 + i / 7:.2f},{i % 3},{'NS'[i % 2]},{'word ' * (5 + i)},"
+    text = "id,when,weight,visits,code,zone,story,nothing\n" + "\n".join(
+        f"P{i:03},2020-01-{1 + i % 28:02},{50 + i / 7:.2f},{i % 25},{i % 3},{'NS'[i % 2]},{'word ' * (5 + i)},"
         for i in range(40)
     )
     kinds = {heading: kind for heading, (kind, _) in proposed(text).items()}
     assert kinds == {
-        "id": "identifier", "when": "date", "weight": "number", "code": "category", "zone": "category",
-        "story": "text", "nothing": "empty",
+        "id": "identifier", "when": "date", "weight": "number", "visits": "number", "code": "category",
+        "zone": "category", "story": "text", "nothing": "empty",
     }  # fmt: skip
