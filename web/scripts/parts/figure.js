@@ -25,7 +25,13 @@ export function figure(app, { name, title, described, draw, below, data }) {
     const width = Math.round(Math.max(NARROWEST, Math.min(WIDEST, room)));
     if (width === drawnAt) return;
     drawnAt = width;
-    plate.replaceChildren(draw(width));
+    const drawing = draw(width);
+    // The plate speaks for the drawing as a whole; names within it would only be noise.
+    for (const part of drawing.querySelectorAll('[aria-label], [aria-description]')) {
+      part.removeAttribute('aria-label');
+      part.removeAttribute('aria-description');
+    }
+    plate.replaceChildren(drawing);
   }
 
   redraw(WIDEST);

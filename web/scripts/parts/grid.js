@@ -13,13 +13,14 @@ import { h } from './element.js';
 
 /**
  * @param {import('../app.js').App} app
- * @param {{ id: string, caption: string, columns: GridColumn[], rows: Array<Record<string, any>>, blank: () => Record<string, any>,
+ * @param {{ id: string, caption: string, columns: GridColumn[], rows: Array<Record<string, any>>, current: () => Array<Record<string, any>>, blank: () => Record<string, any>,
  *   faults?: (row: Record<string, any>) => Record<string, string>, onchange: (rows: Array<Record<string, any>>) => void }} grid
+ *   `rows` are drawn, `current` gives them as they are when something is changed;
  *   `faults` names what is wrong with the fields of a row, in words
  */
-export function typedGrid(app, { id, caption, columns, rows, blank, faults = () => ({}), onchange }) {
+export function typedGrid(app, { id, caption, columns, rows, current, blank, faults = () => ({}), onchange }) {
   const { say } = app.words;
-  const replace = (position, patch) => onchange(rows.map((row, i) => (i === position ? { ...row, ...patch } : row)));
+  const replace = (position, patch) => onchange(current().map((row, i) => (i === position ? { ...row, ...patch } : row)));
 
   function cell(row, position, column) {
     const fault = faults(row)[column.name];
@@ -41,7 +42,7 @@ export function typedGrid(app, { id, caption, columns, rows, blank, faults = () 
     if (lines.length === 1 && lines[0].length === 1) return;
     event.preventDefault();
     const from = columns.indexOf(column);
-    const filled = [...rows];
+    const filled = [...current()];
     lines.forEach((cells, i) => {
       const row = { ...(filled[position + i] ?? blank()) };
       cells.forEach((text, j) => {
@@ -53,7 +54,7 @@ export function typedGrid(app, { id, caption, columns, rows, blank, faults = () 
     onchange(filled);
   }
 
-  const remove = (position) => button(say('grid-remove'), () => onchange(rows.filter((_, i) => i !== position)), {
+  const remove = (position) => button(say('grid-remove'), () => onchange(current().filter((_, i) => i !== position)), {
     class: 'quiet', id: `${id}-${position}-remove`, 'aria-label': say('grid-remove-row', { row: position + 1 }),
   });
 
@@ -63,7 +64,7 @@ export function typedGrid(app, { id, caption, columns, rows, blank, faults = () 
         h('caption', {}, caption),
         h('thead', {}, h('tr', {}, columns.map(({ heading }) => h('th', { scope: 'col', class: 'text' }, heading)), h('td', {}))),
         h('tbody', {}, rows.map((row, position) => h('tr', {}, columns.map((column) => cell(row, position, column)), h('td', {}, remove(position))))))),
-    button(say('grid-add'), () => onchange([...rows, blank()]), { class: 'plain', id: `${id}-add` }),
+    button(say('grid-add'), () => onchange([...current(), blank()]), { class: 'plain', id: `${id}-add` }),
     h('p', { class: 'hint' }, say('grid-paste-hint')));
 }
 

@@ -1,10 +1,38 @@
 /** A part of the page that redraws itself when what it shows has changed. */
 import { h } from './element.js';
 
+/** Redraws that wait: a control must not be replaced while it is being left or pressed. @type {Set<() => void>} */
+const waiting = new Set();
+let pressing = false;
+
+document.addEventListener('pointerdown', () => {
+  pressing = true;
+}, true);
+for (const released of ['pointerup', 'pointercancel']) {
+  document.addEventListener(released, () => {
+    pressing = false;
+    // The click comes after the release; it must still find what was pressed.
+    setTimeout(redrawWaiting);
+  }, true);
+}
+
+function redrawWaiting() {
+  if (pressing) return;
+  const due = [...waiting];
+  waiting.clear();
+  for (const redraw of due) redraw();
+}
+
+function redrawLater(redraw) {
+  waiting.add(redraw);
+  setTimeout(redrawWaiting);
+}
+
 /**
  * @param {import('../app.js').App} app
  * @param {(state: import('../store.js').State) => unknown} select what the drawing depends on, as plain data
- * @param {(state: import('../store.js').State) => Array<Node|null|false>} draw
+ * @param {(state: import('../store.js').State) => Array<Node|null|false>} draw handlers in it read the state when they are
+ *   called, not when they were drawn: a redraw may still be waiting
  * @param {Record<string, string>} [attributes]
  */
 export function live(app, select, draw, attributes = {}) {
@@ -19,6 +47,12 @@ export function live(app, select, draw, attributes = {}) {
     const now = JSON.stringify([state.language, select(state)]);
     if (now === seen) return;
     seen = now;
+    if (box.childNodes.length && box.contains(document.activeElement)) redrawLater(redraw);
+    else redraw();
+  }
+
+  function redraw() {
+    const { state } = app.store;
     const focused = box.contains(document.activeElement) ? document.activeElement?.id : '';
     box.replaceChildren(...draw(state).filter((node) => node instanceof Node));
     // Whoever was typing here goes on typing here.

@@ -26,7 +26,7 @@ function choices(app) {
     const { say } = app.words;
     return [choiceRow(...ITEMS.map((item) => numberField({
       id: `resources-${item}`, label: say(`resource-${item}-per`), value: caseload.resources[item], least: 0,
-      onchange: (amount) => app.store.amend('caseload', { resources: { ...caseload.resources, [item]: Math.max(0, amount ?? 0) } }),
+      onchange: (amount) => app.store.amend('caseload', { resources: { ...app.store.state.caseload.resources, [item]: Math.max(0, amount ?? 0) } }),
     })))];
   });
 }

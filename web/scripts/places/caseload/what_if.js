@@ -25,7 +25,7 @@ function choices(app) {
   return live(app, (state) => [state.caseload.whatIf, state.caseload.years], ({ caseload }) => {
     const { say } = app.words;
     const { whatIf } = caseload;
-    const change = (patch) => app.store.amend('caseload', { whatIf: { ...whatIf, ...patch } });
+    const change = (patch) => app.store.amend('caseload', { whatIf: { ...app.store.state.caseload.whatIf, ...patch } });
     const lever = (name) => numberField({
       id: `what-if-${name}`, label: say(`lever-${name}`), value: whatIf[name], least: 0, greatest: 100, unit: say('percent-sign'),
       fault: whatIf[name] < 0 || whatIf[name] > 100 ? say('lever-fault') : null,

@@ -27,6 +27,11 @@ function withDefaults(state, covariate) {
   return { id: covariate.id, reference: pair?.group === covariate.id ? pair.reference : largest, per: 1 };
 }
 
+/** A covariate as it was chosen already, or with what suits it to begin with. */
+function pick(state, id) {
+  return chosen(state).find((each) => each.id === id) ?? withDefaults(state, usable(state).find((each) => each.id === id));
+}
+
 /** @param {import('../../store.js').State} state */
 export function coxRequest(state) {
   const covariates = chosen(state);
@@ -46,10 +51,10 @@ export function covariateChoices(app) {
       id: 'cox-covariates', legend: say('cox-covariates'), hint: say('cox-covariates-hint'),
       options: usable(state).map(({ id }) => ({ value: id, label: covariateName(app, id) })),
       values: now.map(({ id }) => id),
-      onchange: (ids) => change(ids.map((id) => now.find((each) => each.id === id) ?? withDefaults(state, usable(state).find((each) => each.id === id)))),
+      onchange: (ids) => change(ids.map((id) => pick(app.store.state, id))),
     });
     const details = now.map((picked) => detail(app, state, picked, (patch) =>
-      change(now.map((each) => (each.id === picked.id ? { ...each, ...patch } : each)))));
+      change(chosen(app.store.state).map((each) => (each.id === picked.id ? { ...each, ...patch } : each)))));
     const ties = selectOne({
       id: 'cox-ties', label: say('cox-ties'), value: state.compare.ties,
       options: ['efron', 'breslow'].map((rule) => ({ value: rule, label: say(`cox-ties-${rule}`) })),

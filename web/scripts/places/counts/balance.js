@@ -36,10 +36,14 @@ function example(say) {
   };
 }
 
+function typed({ leaving }) {
+  return leaving.length ? leaving : [blank(), blank()];
+}
+
 function form(app) {
   return live(app, (state) => state.counts.balance, ({ counts: { balance } }) => {
     const { say } = app.words;
-    const change = (patch) => app.store.amend('counts', { balance: { ...balance, ...patch } });
+    const change = (patch) => app.store.amend('counts', { balance: { ...app.store.state.counts.balance, ...patch } });
     const field = (name, options = {}) => numberField({
       id: `balance-${name}`, label: say(`balance-${name}`), value: balance[name], least: 0,
       onchange: (value) => change({ [name]: value }), ...options,
@@ -49,7 +53,7 @@ function form(app) {
       choiceRow(field('prevalent', { step: 1 }), field('new_per_year'), field('population', { hint: say('balance-population-hint') }),
         field('years', { least: 1, greatest: 30, step: 1, onchange: (years) => years >= 1 && years <= 30 && change({ years }) })),
       typedGrid(app, {
-        id: 'balance-leaving', caption: say('balance-leaving'), rows: balance.leaving.length ? balance.leaving : [blank(), blank()], blank,
+        id: 'balance-leaving', caption: say('balance-leaving'), rows: typed(balance), current: () => typed(app.store.state.counts.balance), blank,
         columns: [
           { name: 'label', heading: say('way-of-leaving'), kind: 'text' },
           { name: 'per_year', heading: say('balance-per-year'), kind: 'number', least: 0 },

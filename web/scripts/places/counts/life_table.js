@@ -42,16 +42,21 @@ function request({ entering, rows }) {
   return { task: 'counts.life_table', request: { entering, rows: filled.map((row) => Object.fromEntries(FIELDS.map((name) => [name, row[name]]))) } };
 }
 
+/** What has been typed so far, with some empty rows to begin with. */
+function typed({ lifeTable: { entering, rows } }) {
+  return { entering, rows: rows.length ? rows : EMPTY.rows };
+}
+
 function form(app) {
   return live(app, (state) => state.counts.lifeTable, ({ counts }) => {
     const { say } = app.words;
-    const { entering, rows } = counts.lifeTable.rows.length ? counts.lifeTable : EMPTY;
-    const change = (patch) => app.store.amend('counts', { lifeTable: { entering, rows, ...patch } });
+    const { entering, rows } = typed(counts);
+    const change = (patch) => app.store.amend('counts', { lifeTable: { ...typed(app.store.state.counts), ...patch } });
     return [
       h('p', {}, say('counts-life-table-lead')),
       numberField({ id: 'counts-entering', label: say('counts-entering'), value: entering, least: 1, step: 1, onchange: (value) => change({ entering: value }) }),
       typedGrid(app, {
-        id: 'counts-intervals', caption: say('counts-intervals'), rows, blank,
+        id: 'counts-intervals', caption: say('counts-intervals'), rows, current: () => typed(app.store.state.counts).rows, blank,
         columns: [
           { name: 'width_years', heading: say('width-years'), kind: 'number', least: 0 },
           { name: 'lost', heading: say('lost'), kind: 'number', least: 0, step: 1 },

@@ -38,11 +38,12 @@ function example(say) {
 function form(app) {
   return live(app, (state) => state.counts.strata, ({ counts }) => {
     const { say } = app.words;
-    const rows = counts.strata.length ? counts.strata : EMPTY;
+    const typed = (strata) => (strata.length ? strata : EMPTY);
+    const rows = typed(counts.strata);
     return [
       h('p', {}, say('counts-strata-lead')),
       typedGrid(app, {
-        id: 'counts-strata-grid', caption: say('counts-strata-grid'), rows, blank,
+        id: 'counts-strata-grid', caption: say('counts-strata-grid'), rows, current: () => typed(app.store.state.counts.strata), blank,
         columns: [
           { name: 'label', heading: say('stratum'), kind: 'text' },
           ...NUMBERS.map((name) => ({ name, heading: say(`typed-${name}`), kind: /** @type {'number'} */ ('number'), least: 0, step: 1 })),

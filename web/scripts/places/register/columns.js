@@ -75,7 +75,7 @@ function orderChoice(app, column, reading) {
     h('label', { for: `order-${column.id}` }, say('order-ask')),
     h('select', {
       id: `order-${column.id}`,
-      onchange: (event) => app.store.amend('reading', { date_orders: { ...reading.date_orders, [column.id]: event.target.value } }),
+      onchange: (event) => app.store.amend('reading', { date_orders: { ...app.store.state.reading.date_orders, [column.id]: event.target.value } }),
     }, h('option', { value: '' }, say('choose')), column.dates.choices.map((order) =>
       h('option', { value: order, selected: order === chosen }, name(order)))));
 }

@@ -44,7 +44,7 @@ function valuesBlock(app, { role, id, choices, word, field, blank }) {
     const rows = known.values.map(({ value, count: number }, i) => line(written(value), number,
       h('select', {
         id: `${id}-${i}`, 'aria-label': say('meaning-of', { value }),
-        onchange: (event) => app.store.amend('reading', { [field]: without(state.reading[field], value, event.target.value) }),
+        onchange: (event) => app.store.amend('reading', { [field]: without(app.store.state.reading[field], value, event.target.value) }),
       }, options(state.reading[field][value]))));
     if (blank && known.blank > 0) {
       const { value, change } = blank(state.reading);
