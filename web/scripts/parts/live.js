@@ -53,10 +53,14 @@ export function live(app, select, draw, attributes = {}) {
 
   function redraw() {
     const { state } = app.store;
-    const focused = box.contains(document.activeElement) ? document.activeElement?.id : '';
+    const active = box.contains(document.activeElement) ? document.activeElement : null;
+    const typed = active instanceof HTMLInputElement && active.type !== 'checkbox' ? active.value : null;
     box.replaceChildren(...draw(state).filter((node) => node instanceof Node));
-    // Whoever was typing here goes on typing here.
-    if (focused) document.getElementById(focused)?.focus();
+    if (!active?.id) return;
+    // Whoever was typing here goes on typing here, with what was typed so far.
+    const again = document.getElementById(active.id);
+    if (typed !== null && again instanceof HTMLInputElement) again.value = typed;
+    again?.focus();
   }
 
   const stop = app.store.subscribe(update);
