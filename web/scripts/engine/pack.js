@@ -1,5 +1,5 @@
 /** The engine pack: fetched with progress and checked, or taken from the page itself in the one-file copy. */
-import { EngineRefusal } from './bridge.js';
+import { EngineRefusal } from './refusal.js';
 
 /**
  * @typedef {{ name: string, file: string, bytes: number, size: number, integrity: string }} Member

@@ -1,54 +1,22 @@
 /**
- * The engine's worker: Pyodide from the bytes it is handed, then tasks one after another.
+ * The engine's worker: Pyodide from what it is handed, then tasks one after another.
  *
- * In:  { start: { members } } once, then { id, task, request, content }.
+ * In:  { start: { module, stdlib, lock, engine } } once, then { id, task, request, content }.
  * Out: { stage, done, total } while starting, then { ready };
- *      { id, stage, done, total }, and at last { id, answer } or { id, refusal } or { id, failed };
- *      { dead: reason } when Python can no longer be used.
+ *      { id, stage, done, total }, and at last { id, answer, nulls } or { id, refusal } or
+ *      { id, failed: { kind, detail } } for what should never happen; kinds are "out_of_memory" and
+ *      "internal", the detail is for developers. Any message may carry { dead: kind }: Python can no
+ *      longer be used, and the worker waits for its end.
  *
  * This is a classic script, put behind Pyodide's own at build time (build_scripts/worker_source.py).
  */
 (() => {
   'use strict';
 
-  /** An address that can never be a host: files of the pack are asked for under it. */
+  /** An address that can never be a host: Pyodide asks for its files under it. */
   const PACK = 'https://pack.invalid/';
-  const STEPS = 4;
 
-  /** Answers only from the pack. The seal forbids everything else anyway; this says so plainly. */
-  function fetchFromPack(files) {
-    return async (address) => {
-      const name = String(address.url ?? address).slice(PACK.length);
-      if (!files.has(name)) throw new TypeError(`not in the pack: ${name}`);
-      const type = name.endsWith('.wasm') ? 'application/wasm' : 'application/octet-stream';
-      return new Response(files.get(name), { headers: { 'Content-Type': type } });
-    };
-  }
-
-  async function start({ members }) {
-    const stage = (name, done) => self.postMessage({ stage: name, done, total: STEPS });
-    stage('engine-stage-runtime', 0);
-    self.fetch = fetchFromPack(new Map([
-      ['pyodide.asm.wasm', members.get('wasm')],
-      ['python_stdlib.zip', members.get('stdlib')],
-    ]));
-    const python = await self.loadPyodide({
-      indexURL: PACK,
-      lockFileContents: new TextDecoder().decode(members.get('lock')),
-      createPyodideModule: self.createPyodideModule,
-      stdin: () => null,
-    });
-    stage('engine-stage-unpacking', 1);
-    unpack(python, members.get('engine'));
-    stage('engine-stage-libraries', 2);
-    python.runPython('import numpy, scipy.special');
-    stage('engine-stage-desk', 3);
-    const answer = python.runPython(DOOR);
-    stage('engine-stage-desk', STEPS);
-    return answer;
-  }
-
-  /** JSON text in, JSON text out: nothing else crosses into Python but the bytes of a file. */
+  /** Python's way in: JSON text in and out. Nothing else crosses but the bytes of a file and progress. */
   const DOOR = `
 import json
 from vitalroll.desk import Desk
@@ -56,10 +24,14 @@ from vitalroll.desk import Desk
 def door():
     desk = Desk()
 
-    def answer(task, request, content, report):
+    def answer(task, request, content, tell):
         given = json.loads(request)
         if content is not None:
             given["content"] = content.to_bytes()
+
+        def report(stage, done, total):
+            tell(str(stage), int(done), int(total))
+
         return json.dumps(desk.answer(task, given, report), allow_nan=False)
 
     return answer
@@ -67,38 +39,83 @@ def door():
 door()
 `;
 
-  /** The archive holds files stored as they are; Python's own zip reader unpacks it. */
+  /** What is done after the runtime has started, in order: [stage, work]. */
+  const STEPS = [
+    ['engine-stage-unpacking', (python, { engine }) => unpack(python, engine)],
+    ['engine-stage-libraries', (python) => python.runPython('import numpy')],
+    ['engine-stage-libraries', (python) => python.runPython('import scipy.special')],
+    ['engine-stage-desk', (python) => python.runPython(DOOR)],
+  ];
+
+  async function start(handed) {
+    const total = STEPS.length + 1;
+    self.postMessage({ stage: 'engine-stage-runtime', done: 0, total });
+    const python = await runtime(handed);
+    let result;
+    for (const [i, [stage, work]] of STEPS.entries()) {
+      self.postMessage({ stage, done: i + 1, total });
+      result = work(python, handed);
+    }
+    return result;
+  }
+
+  /** Start Pyodide. The seal forbids every request; what Pyodide would fetch is put in its hands instead. */
+  function runtime({ module, stdlib, lock }) {
+    self.fetch = async (address) => {
+      const name = String(address.url ?? address).slice(PACK.length);
+      if (name === 'python_stdlib.zip') return new Response(stdlib);
+      // Its content is the compiled module, below.
+      if (name === 'pyodide.asm.wasm') return new Response();
+      throw new TypeError(`not in the pack: ${name}`);
+    };
+    WebAssembly.instantiateStreaming = async (response, imports) => {
+      await response;
+      return { module, instance: await WebAssembly.instantiate(module, imports) };
+    };
+    return self.loadPyodide({
+      indexURL: PACK,
+      lockFileContents: new TextDecoder().decode(lock),
+      createPyodideModule: self.createPyodideModule,
+      stdin: () => null,
+    });
+  }
+
+  /** The archive holds site-packages as stored files; no package loader is needed for them. */
   function unpack(python, archive) {
     python.unpackArchive(archive, 'zip', { extractDir: python.runPython('import site; site.getsitepackages()[0]') });
   }
 
-  function work(answer, { id, task, request, content }) {
-    const report = (stage, done, total) => self.postMessage({ id, stage, done, total });
+  function work({ id, task, request, content }) {
+    const tell = (stage, done, total) => self.postMessage({ id, stage, done, total });
+    const bytes = content === undefined ? undefined : new Uint8Array(content);
     try {
-      const said = JSON.parse(answer(task, JSON.stringify(request), content ? new Uint8Array(content) : undefined, report));
-      self.postMessage(said.refusal ? { id, refusal: said.refusal } : { id, answer: said.answer, nulls: said.nulls });
+      const { answer: found, nulls, refusal } = JSON.parse(answer(task, JSON.stringify(request), bytes, tell));
+      self.postMessage(refusal ? { id, refusal } : { id, answer: found, nulls });
     } catch (fault) {
-      const kind = reasonOf(fault);
-      self.postMessage({ id, failed: kind });
-      if (fault.name !== 'PythonError' || kind === 'out_of_memory') self.postMessage({ dead: kind });
+      const kind = kindOf(fault);
+      // An exception in Python leaves Python whole, but memory that it took is never given back.
+      const usable = fault.name === 'PythonError' && kind !== 'out_of_memory';
+      self.postMessage({ id, failed: { kind, detail: String(fault.message) }, dead: usable ? null : kind });
     }
   }
 
-  function reasonOf(fault) {
+  /** Memory runs out in Python (MemoryError), in JavaScript (RangeError) or in WebAssembly (RuntimeError). */
+  function kindOf(fault) {
     console.error(fault);
-    const memory = fault instanceof RangeError || fault.type === 'MemoryError' || /out of memory/i.test(fault.message);
+    const memory = fault.type === 'MemoryError' || /out of memory|allocation failed|array buffer|array length/i.test(fault.message);
     return memory ? 'out_of_memory' : 'internal';
   }
 
-  let answer = null;
+  /** @type {Function} */
+  let answer;
 
   self.onmessage = async ({ data }) => {
-    if (!data.start) return work(answer, data);
+    if (!data.start) return work(data);
     try {
       answer = await start(data.start);
       self.postMessage({ ready: true });
     } catch (fault) {
-      self.postMessage({ dead: reasonOf(fault) });
+      self.postMessage({ dead: kindOf(fault) });
     }
   };
 })();
