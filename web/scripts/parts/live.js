@@ -39,6 +39,7 @@ export function live(app, select, draw, attributes = {}) {
   const box = h('div', attributes);
   let seen = null;
   let wasConnected = false;
+  let drawn = false;
 
   function update() {
     if (box.isConnected) wasConnected = true;
@@ -47,8 +48,9 @@ export function live(app, select, draw, attributes = {}) {
     const now = JSON.stringify([state.language, select(state)]);
     if (now === seen) return;
     seen = now;
-    if (box.childNodes.length && box.contains(document.activeElement)) redrawLater(redraw);
+    if (drawn) redrawLater(redraw);
     else redraw();
+    drawn = true;
   }
 
   function redraw() {
