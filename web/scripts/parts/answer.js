@@ -66,8 +66,10 @@ export function answerBlock(app, { id, title, ask, draw, empty, choices }) {
     const question = state.engine.ready ? ask(state) : null;
     const key = JSON.stringify([question, question && state.cohort?.serial]);
     if (key === latestKey) {
-      if (language !== state.language) redraw();
+      const translated = language !== state.language;
+      // Before redrawing: that tells the report, and the report tells everybody.
       language = state.language;
+      if (translated) redraw();
       return;
     }
     latestKey = key;
