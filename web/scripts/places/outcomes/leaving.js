@@ -39,7 +39,7 @@ function drawGroup(app, group, name) {
       name: `leaving${group.level === null ? '' : `-${group.level}`}`,
       title: say('leaving-figure', { group: name }),
       described: say('leaving-figure-described', { ways: ways.length }),
-      draw: (width) => leavingStack({ layers, lastYear: Math.max(1, Math.floor(years.at(-1))) }, { width, words: app.words }),
+      draw: (width) => leavingStack({ layers, lastYear: Math.max(1, years.at(-1)) }, { width, words: app.words }),
     }),
     incidenceTable(app, ways, name),
   ];
