@@ -18,6 +18,9 @@ WITHOUT_TEXT = {
 }
 """What to say of a package that carries no licence file of its own."""
 
+SAME_TEXT = {"Apache-2.0": MODULES / "typescript" / "LICENSE.txt"}
+"""Where the text of a licence stands that a package names without carrying it."""
+
 
 def collect(wheels: list[Path]) -> str:
     """Return one text with the licences of the page's packages and of the engine's wheels."""
@@ -38,6 +41,8 @@ def _npm_part(folder: Path) -> str:
     texts = [path.read_text(encoding="utf-8") for path in sorted(folder.iterdir()) if _is_licence(path.name)]
     if not texts and about["name"] in WITHOUT_TEXT:
         texts = [WITHOUT_TEXT[about["name"]]]
+    if not texts and about.get("license") in SAME_TEXT:
+        texts = [SAME_TEXT[about["license"]].read_text(encoding="utf-8")]
     return _part(about["name"], about["version"], about.get("license", ""), texts)
 
 
