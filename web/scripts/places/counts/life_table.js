@@ -37,7 +37,9 @@ export function lifeTablePart(app) {
 }
 
 function request({ entering, rows }) {
-  const filled = rows.filter((row) => complete(row, FIELDS));
+  const filled = rows.slice(0, rows.findLastIndex((row) => complete(row, FIELDS)) + 1);
+  // An interval left open between others would shift all that follow: nothing is answered until it is filled.
+  if (!filled.every((row) => complete(row, FIELDS))) return null;
   if (typeof entering !== 'number' || !filled.length) return null;
   return { task: 'counts.life_table', request: { entering, rows: filled.map((row) => Object.fromEntries(FIELDS.map((name) => [name, row[name]]))) } };
 }

@@ -20,8 +20,9 @@ export function strataPart(app) {
     choices: form(app),
     empty: 'counts-strata-empty',
     ask: ({ counts }) => {
-      const filled = counts.strata.filter((row) => complete(row, NUMBERS));
-      return filled.length ? { task: 'counts.strata', request: { strata: filled } } : null;
+      const filled = counts.strata.filter((row) => NUMBERS.some((name) => typeof row[name] === 'number'));
+      // A stratum half typed must not be left out of the pooled figures without a word.
+      return filled.length && filled.every((row) => complete(row, NUMBERS)) ? { task: 'counts.strata', request: { strata: filled } } : null;
     },
     draw: (answer) => draw(app, answer),
   });
