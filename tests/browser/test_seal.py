@@ -97,7 +97,7 @@ def test_attempts_do_reach_a_server_before_the_seal(site: SiteServer, elsewhere:
 def test_the_page_proves_its_seal_and_says_so(site: SiteServer, opened: Callable) -> None:
     watched = opened(site.address)
     seal = watched.page.locator("#engine-state .sealed")
-    assert "can no longer reach any network" in seal.inner_text()
+    assert "the browser now refuses" in seal.inner_text()
     seal.locator("summary").click()
     assert "refused 2" in seal.inner_text()
     assert not [path for _, path in site.requests if "seal-proof" in path]
