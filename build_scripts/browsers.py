@@ -15,12 +15,6 @@ def chromium() -> str:
     return _found(CHROMIUM_NAMES) or _installed("chromium", CHROMIUM_NAMES)
 
 
-def firefox() -> str:
-    """Return the path of a Firefox; install Debian's ESR when running as root without one."""
-    names = ("firefox-esr", "firefox")
-    return _found(names) or _installed("firefox-esr", names)
-
-
 def _found(names: tuple[str, ...]) -> str | None:
     return next((path for path in map(shutil.which, names) if path), None)
 

@@ -24,6 +24,10 @@ class Estimate:
     standard_error: float = float("nan")
 
 
+NOT_GIVEN = Estimate(float("nan"), float("nan"), float("nan"))
+"""The estimate where there is nothing to estimate from."""
+
+
 def two_sided_z(confidence: float) -> float:
     """Return the normal quantile z for a two-sided interval, for example 1.96 for 0.95."""
     return NormalDist().inv_cdf(0.5 + confidence / 2)

@@ -7,8 +7,7 @@ come from the same server on this machine and open in a fresh browser each time,
 - plain: from the address until Pyodide is loaded, numpy, scipy and pandas are loaded from whole
   wheels, and numpy, scipy.special and pandas are imported. It draws nothing.
 
-A third measurement opens a register of 50,000 rows and draws its curve. Memory is the largest resident
-set of the renderer process, as Linux keeps it.
+Memory is the largest resident set of the renderer process, as Linux keeps it.
 """
 
 from __future__ import annotations

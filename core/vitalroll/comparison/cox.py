@@ -2,7 +2,7 @@
 
 from __future__ import annotations
 
-from collections.abc import Collection, Sequence
+from collections.abc import Collection, Iterable, Sequence
 from dataclasses import dataclass
 from typing import get_args
 
@@ -31,6 +31,9 @@ from vitalroll.register.cohort import Cohort
 
 FEW_PER_PARAMETER = 10
 TOO_FEW_PER_PARAMETER = 3
+NOT_PROPORTIONAL = 0.05
+"""A test of proportional hazards below this says that the ratios change over time."""
+
 MOST_STEPS = 50
 MOST_HALVINGS = 30
 CLOSE_ENOUGH = 1e-18
@@ -137,14 +140,7 @@ def cox(
     fit = _maximise(data, x, plan.columns)
     covariance = np.linalg.inv(fit.information)
     proportional, whole = proportional_tests(data, x, fit.sums, fit.information, plan.columns)
-    cautions = []
-    if events < FEW_PER_PARAMETER * parameters:
-        cautions.append(Caution("few_events", {"events": events, "parameters": parameters}))
-    if whole.p < 0.05:
-        cautions.append(Caution("not_proportional", {"p": whole.p}))
     incomplete = int(np.count_nonzero(usable & ~plan.complete))
-    if incomplete:
-        cautions.append(Caution("covariate_missing", {"n": incomplete}))
     return CoxFit(
         n=len(event),
         events=events,
@@ -167,8 +163,17 @@ def cox(
         proportional_global=whole,
         iterations=fit.iterations,
         left_out=plan.left_out,
-        cautions=tuple(cautions),
+        cautions=tuple(_cautions(events, parameters, whole, incomplete)),
     )
+
+
+def _cautions(events: int, parameters: int, whole: Chi2Test, incomplete: int) -> Iterable[Caution]:
+    if events < FEW_PER_PARAMETER * parameters:
+        yield Caution("few_events", {"events": events, "parameters": parameters})
+    if whole.p < NOT_PROPORTIONAL:
+        yield Caution("not_proportional", {"p": whole.p})
+    if incomplete:
+        yield Caution("covariate_missing", {"n": incomplete})
 
 
 def _check_events(

@@ -6,8 +6,8 @@ from dataclasses import dataclass
 
 import numpy as np
 
-from vitalroll.numbers import DAYS_PER_YEAR, Estimate, two_sided_z
-from vitalroll.outcomes.product_limit import NOT_GIVEN, SurvivalCurve
+from vitalroll.numbers import DAYS_PER_YEAR, NOT_GIVEN, Estimate, two_sided_z
+from vitalroll.outcomes.product_limit import SurvivalCurve
 
 
 @dataclass(frozen=True)

@@ -8,10 +8,8 @@ import numpy as np
 from scipy.special import gammaln
 
 from vitalroll.errors import Refusal
-from vitalroll.numbers import Estimate, two_sided_z
+from vitalroll.numbers import NOT_GIVEN, Estimate, two_sided_z
 from vitalroll.outcomes.limits import check_confidence
-
-NOT_GIVEN = Estimate(float("nan"), float("nan"), float("nan"))
 
 
 @dataclass(frozen=True)

@@ -11,7 +11,7 @@ import numpy as np
 from vitalroll.desk.fields import Between
 from vitalroll.desk.memory import Memory
 from vitalroll.errors import Caution
-from vitalroll.numbers import DAYS_PER_YEAR
+from vitalroll.numbers import DAYS_PER_YEAR, NOT_GIVEN
 from vitalroll.outcomes.actuarial import MANY_LOST, Step, life_table
 from vitalroll.outcomes.competing import WAYS_OF_LEAVING, Leaving, as_if_others_were_censored, leaving
 from vitalroll.outcomes.follow_up import follow_up_median
@@ -19,7 +19,7 @@ from vitalroll.outcomes.groups import groups_of
 from vitalroll.outcomes.limits import Interval
 from vitalroll.outcomes.losses import Losses, losses_by
 from vitalroll.outcomes.person_time import event_rate
-from vitalroll.outcomes.product_limit import NOT_GIVEN, SurvivalCurve, product_limit
+from vitalroll.outcomes.product_limit import SurvivalCurve, product_limit
 from vitalroll.outcomes.quantiles import TimeQuantile, time_quantile
 from vitalroll.outcomes.risk_table import RiskTable
 from vitalroll.outcomes.stretches import Span

@@ -8,14 +8,14 @@ from dataclasses import dataclass
 import numpy as np
 
 from vitalroll.errors import Caution
-from vitalroll.numbers import Estimate, two_sided_z
+from vitalroll.numbers import NOT_GIVEN, Estimate, two_sided_z
 from vitalroll.outcomes.limits import (
     check_confidence,
     lower_limit_at_one,
     probability_limits,
     upper_limit_at_zero,
 )
-from vitalroll.outcomes.product_limit import NOT_GIVEN, product_limit
+from vitalroll.outcomes.product_limit import product_limit
 from vitalroll.outcomes.risk_table import RiskTable
 from vitalroll.outcomes.stretches import Span, Stretch, fewest_at_risk, span, stretches
 from vitalroll.register.cohort import MEANINGS

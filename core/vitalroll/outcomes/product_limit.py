@@ -8,7 +8,7 @@ from dataclasses import dataclass
 import numpy as np
 
 from vitalroll.errors import Caution
-from vitalroll.numbers import Estimate, two_sided_z
+from vitalroll.numbers import NOT_GIVEN, Estimate, two_sided_z
 from vitalroll.outcomes.limits import (
     Interval,
     check_confidence,
@@ -19,9 +19,6 @@ from vitalroll.outcomes.limits import (
 )
 from vitalroll.outcomes.risk_table import RiskTable
 from vitalroll.outcomes.stretches import Span, Stretch, fewest_at_risk, span, stretches
-
-NOT_GIVEN = Estimate(float("nan"), float("nan"), float("nan"))
-"""The estimate where there is nothing to estimate from."""
 
 
 @dataclass(frozen=True)

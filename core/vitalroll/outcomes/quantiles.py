@@ -7,8 +7,8 @@ from dataclasses import dataclass
 import numpy as np
 
 from vitalroll.errors import Refusal
-from vitalroll.numbers import DAYS_PER_YEAR, Estimate
-from vitalroll.outcomes.product_limit import NOT_GIVEN, SurvivalCurve
+from vitalroll.numbers import DAYS_PER_YEAR, NOT_GIVEN, Estimate
+from vitalroll.outcomes.product_limit import SurvivalCurve
 
 # Products such as 9/10 * 8/9 * ... meet 1/2 only to round-off; a step this close is taken to meet it.
 _ROUND_OFF = 1e-10

@@ -84,6 +84,7 @@ class _Gatherer:
         self._cells = 0
 
     def add(self, lines: list[int], rows: list[list[str]]) -> None:
+        """Take in more rows with their lines; rows with nothing in them are passed over."""
         filled = [(line, row) for line, row in zip(lines, rows, strict=True) if _has_something(row)]
         if not filled:
             return
@@ -117,6 +118,7 @@ class _Gatherer:
             raise Refusal("too_many_cells_in_file", most=MOST_CELLS)
 
     def columns(self, headings: Sequence[str], width: int) -> tuple[Column, ...]:
+        """Return the first ``width`` columns of all rows taken in, under their headings."""
         return tuple(
             Column(
                 position,
