@@ -86,7 +86,14 @@ export function answerBlock(app, { id, title, ask, draw, empty, choices }) {
       const answer = await askOnce(app, question, key, id);
       if (key === latestKey) latest = { answer, state };
     } catch (refusal) {
-      if (refusal.code === 'superseded') return;
+      if (refusal.code === 'superseded') {
+        // Another block that shared this question moved on; this one still wants its answer.
+        if (key === latestKey) {
+          latestKey = null;
+          update();
+        }
+        return;
+      }
       if (!refusal.code) throw refusal;
       if (key === latestKey) latest = { refusal };
     } finally {
