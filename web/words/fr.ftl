@@ -3,14 +3,14 @@
 ## The frame
 
 page-title = { $place } – Vitalroll
-job = Du registre de suivi aux réponses : ce que sont devenus les patients, quel groupe s’en est mieux sorti, combien seront suivis demain.
+job = Du registre de suivi aux réponses : ce que sont devenus les patients, quel groupe s’en est mieux sorti, combien seront suivis demain.
 skip-to-content = Aller au contenu
 places-label = Rubriques
 language = Langue
 undo = Annuler
 licences = Licences des logiciels inclus
 engine-version = Vitalroll { $version }
-always-cautions = Décrit des groupes ; ne sert pas à décider pour un patient. Les recommandations locales et l’exercice autorisé de la médecine priment. Une association n’est pas une cause.
+always-cautions = Décrit des groupes ; ne sert pas à décider pour un patient. Les recommandations locales et l’exercice autorisé de la médecine priment. Une association n’est pas une cause.
 
 place-register = Registre
 place-outcomes = Devenir
@@ -24,28 +24,28 @@ needs-javascript = Vitalroll a besoin de JavaScript, désactivé dans ce navigat
 ## The engine's start and the seal
 
 engine-stage-waiting = Préparation…
-engine-stage-fetching = Chargement du moteur : { $done } sur { $total }
+engine-stage-fetching = Chargement du moteur : { $done } sur { $total }
 engine-stage-unpacking = Décompression du moteur…
 engine-stage-runtime = Démarrage du moteur…
 engine-stage-libraries = Chargement des bibliothèques numériques…
 engine-stage-desk = Ouverture du guichet…
 not-yet-sealed = Pas encore scellée. Un registre pourra être ouvert une fois la page scellée.
-sealed = Scellée : le navigateur refuse désormais ce que cette page demande à tout réseau.
-seal-broken = Non scellée : ce navigateur laisse encore la page joindre un réseau. N’ouvrez pas de registre ici ; utilisez un navigateur récent.
-sealed-meaning = Tout le nécessaire a été chargé. Le navigateur refuse désormais les demandes de fichiers, d’images, de cadres, de formulaires et de connexions de cette page, qui n’en fait aucune. Aucune règle du navigateur n’empêche une page d’aller à une autre adresse ni toute forme de connexion directe ; le programme de cette page ne fait ni l’un ni l’autre. Pour une certitude entière, coupez le réseau avant d’ouvrir un registre. Recharger la page recommence de zéro, rien n’est conservé.
-sealed-tried = Pour s’en assurer, la page a tenté { $tried } requêtes inoffensives vers sa propre adresse après le scellement ; le navigateur en a refusé { $refused }.
-sealed-check-yourself = Pour le vérifier vous-même : coupez le réseau maintenant ; tout continue de fonctionner. Ou ouvrez les outils de développement du navigateur, liste des requêtes, et constatez que rien ne s’ajoute.
-engine-revived-out_of_memory = Le moteur a manqué de mémoire et a été relancé. Votre fichier et vos choix sont de retour ; la dernière question est restée sans réponse.
+sealed = Scellée : le navigateur refuse désormais ce que cette page demande à tout réseau.
+seal-broken = Non scellée : ce navigateur laisse encore la page joindre un réseau. N’ouvrez pas de registre ici ; utilisez un navigateur récent.
+sealed-meaning = Tout le nécessaire a été chargé. Le navigateur refuse désormais les demandes de fichiers, d’images, de cadres, de formulaires et de connexions de cette page, qui n’en fait aucune. Aucune règle du navigateur n’empêche une page d’aller à une autre adresse ni toute forme de connexion directe ; le programme de cette page ne fait ni l’un ni l’autre. Pour une certitude entière, coupez le réseau avant d’ouvrir un registre. Recharger la page recommence de zéro, rien n’est conservé.
+sealed-tried = Pour s’en assurer, la page a tenté { $tried } requêtes inoffensives vers sa propre adresse après le scellement ; le navigateur en a refusé { $refused }.
+sealed-check-yourself = Pour le vérifier vous-même : coupez le réseau maintenant ; tout continue de fonctionner. Ou ouvrez les outils de développement du navigateur, liste des requêtes, et constatez que rien ne s’ajoute.
+engine-revived-out_of_memory = Le moteur a manqué de mémoire et a été relancé. Votre fichier et vos choix sont de retour ; la dernière question est restée sans réponse.
 engine-revived-internal = Le moteur s’est arrêté de façon inattendue et a été relancé. Votre fichier et vos choix sont de retour.
 engine-revived-register_lost = Le moteur a été relancé, mais votre registre n’a pas pu être rouvert. Ouvrez de nouveau le fichier.
 engine-revived-gone = Le moteur s’est arrêté et n’a pas pu être relancé. Rechargez la page et ouvrez de nouveau le fichier.
 engine-revived-stopped = Arrêté. Votre fichier et vos choix sont de retour.
 start-again = Recommencer
 engine-failure-network = Le moteur n’a pas pu être chargé. Vérifiez la connexion vers l’endroit d’où vient cette page, puis recommencez.
-engine-failure-integrity = Une partie du moteur est arrivée abîmée ou modifiée et n’a pas été utilisée. Recommencez ; si cela se répète, prévenez la personne qui héberge cette page.
+engine-failure-integrity = Une partie du moteur est arrivée abîmée ou modifiée et n’a pas été utilisée. Recommencez ; si cela se répète, prévenez la personne qui héberge cette page.
 engine-failure-too_old = Ce navigateur est trop ancien pour le moteur. Utilisez une version récente de Firefox, Chrome, Edge ou Safari.
 engine-failure-framed = Cette page est affichée dans une autre page et n’y ouvrira aucun registre. Ouvrez-la dans son propre onglet.
-engine-failure-internal = Le moteur n’a pas pu démarrer. Recommencez ; si cela se répète, essayez un autre navigateur récent.
+engine-failure-internal = Le moteur n’a pas pu démarrer. Recommencez ; si cela se répète, essayez un autre navigateur récent.
 megabytes = { $size } Mo
 
 ## Words that every place uses
@@ -58,7 +58,7 @@ save-table = Enregistrer ce tableau en CSV
 save-figure = Enregistrer cette figure en SVG
 figure-data = Les nombres derrière cette figure
 cautions-label = Précautions
-no-register-yet = Ouvrez d’abord un registre, dans la rubrique Registre ; ou passez par « À partir de totaux » si vous n’avez que des totaux.
+no-register-yet = Ouvrez d’abord un registre, dans la rubrique Registre ; ou passez par « À partir de totaux » si vous n’avez que des totaux.
 choose = Choisir…
 none = Aucun
 years-count = { $years ->
@@ -84,10 +84,10 @@ sex-female = Femme
 sex-male = Homme
 sex-other = Autre
 
-question-interest = Quelles issues sont l’événement étudié ?
+question-interest = Quelles issues sont l’événement étudié ?
 question-interest-hint = Toute autre issue met seulement fin à l’observation.
 question-group = Par groupe
-question-no-group = Sans groupes : tout le monde ensemble
+question-no-group = Sans groupes : tout le monde ensemble
 
 ## Refusals that any place can meet
 
@@ -96,8 +96,8 @@ refusal-worker_died = Le moteur s’est arrêté deux fois sur cette question. D
 refusal-out_of_memory = La mémoire n’a pas suffi. Fermez d’autres onglets ou ouvrez un fichier plus petit.
 refusal-stopped = Arrêté avant la fin.
 refusal-no_register = Ouvrez d’abord un registre.
-refusal-unknown_field = La demande comporte un élément inconnu : { $field }.
-refusal-missing_field = Il manque encore : { $field }.
+refusal-unknown_field = La demande comporte un élément inconnu : { $field }.
+refusal-missing_field = Il manque encore : { $field }.
 refusal-wrong_type = { $field } n’est pas du bon type.
 refusal-not_one_of = { $field } ne fait pas partie des choix possibles.
 refusal-out_of_range = { $field } doit être compris entre { $least } et { $greatest }.
@@ -106,33 +106,33 @@ refusal-unknown_meaning = { $meaning } ne fait pas partie des issues connues.
 refusal-unknown_covariate = La colonne { $covariate } ne fait pas partie du registre tel qu’il a été lu.
 refusal-group_is_numeric = { $covariate } est un nombre. Choisissez une colonne à quelques catégories pour former des groupes.
 refusal-no_outcome_of_interest = Choisissez au moins une issue comme événement étudié.
-refusal-under_care_is_not_an_outcome = Être encore suivi n’est pas une issue : choisissez une fin de suivi.
+refusal-under_care_is_not_an_outcome = Être encore suivi n’est pas une issue : choisissez une fin de suivi.
 refusal-uneven_cohort = Les colonnes du registre n’ont pas la même longueur.
-refusal-negative_time = Ligne { $line } : temps antérieur au début du suivi.
-refusal-exit_before_entry = Ligne { $line } : le suivi se termine avant d’avoir commencé.
+refusal-negative_time = Ligne { $line } : temps antérieur au début du suivi.
+refusal-exit_before_entry = Ligne { $line } : le suivi se termine avant d’avoir commencé.
 
 ## Register
 
 register-title = Registre
 
-register-lead = Ouvrez la liste des patients : une ligne par patient, depuis un tableur ou un fichier texte. Elle est lue sur cet ordinateur et nulle part ailleurs.
+register-lead = Ouvrez la liste des patients : une ligne par patient, depuis un tableur ou un fichier texte. Elle est lue sur cet ordinateur et nulle part ailleurs.
 open-file = Choisissez un fichier ou déposez-le ici
 open-file-hint = .csv, .tsv, .txt ou .xlsx
 open-demo = Ouvrir le registre inventé de démonstration
 demo-meaning = Environ 1 160 patients inventés d’une consultation inventée de cardiopathie rhumatismale, avec les défauts des vrais registres.
-open-not-yet = Un registre peut être ouvert dès que le moteur est prêt et la page scellée ; voyez la ligne en haut.
+open-not-yet = Un registre peut être ouvert dès que le moteur est prêt et la page scellée ; voyez la ligne en haut.
 paste-summary = Ou collez des cellules d’un tableur
 paste-label = Cellules avec leurs en-têtes
 paste-open = Ouvrir ce qui a été collé
 pasted-name = cellules collées
 opening-file = Lecture…
-opening-share = Lecture : { $share }
+opening-share = Lecture : { $share }
 replace-question = Un registre est ouvert. En ouvrir un autre l’abandonne, avec tous les choix faits à son sujet.
 replace-yes = Ouvrir l’autre
 replace-no = Garder celui-ci
 
 register-example-title = Ce qu’il faut dans la liste
-register-example-lead = Au minimum : le début du suivi, le dernier contact ou le départ, et comment cela s’est terminé. Un numéro de patient sert à trouver les doublons, puis il est abandonné. D’autres colonnes peuvent former des groupes ; celles qui ne servent pas sont abandonnées.
+register-example-lead = Au minimum : le début du suivi, le dernier contact ou le départ, et comment cela s’est terminé. Un numéro de patient sert à trouver les doublons, puis il est abandonné. D’autres colonnes peuvent former des groupes ; celles qui ne servent pas sont abandonnées.
 register-example-caption = Un exemple inventé
 register-example-number = Numéro
 register-example-start = Début du suivi
@@ -160,8 +160,8 @@ register-example-sex-3 = F
 register-example-group-3 = Modéré
 
 source-title = Le fichier
-source-delimited = { $rows } lignes, { $columns } colonnes, séparées par : { $delimiter } ; caractères lus en { $encoding }.
-source-workbook = un classeur : { $rows } lignes, { $columns } colonnes.
+source-delimited = { $rows } lignes, { $columns } colonnes, séparées par : { $delimiter } ; caractères lus en { $encoding }.
+source-workbook = un classeur : { $rows } lignes, { $columns } colonnes.
 source-sheet = Feuille
 source-header = Ligne des en-têtes
 source-header-hint = À changer si les en-têtes sont ailleurs.
@@ -174,9 +174,9 @@ line = Ligne
 rows = Lignes
 
 columns-title = À quoi sert chaque colonne
-columns-lead = Les choix ci-dessous sont des propositions. Corrigez ce qui est faux ; tout le reste en découle.
+columns-lead = Les choix ci-dessous sont des propositions. Corrigez ce qui est faux ; tout le reste en découle.
 columns-caption = Les colonnes et leur usage
-columns-dropped = Les colonnes « non utilisées » sont abandonnées avant tout calcul, de même que le numéro de patient.
+columns-dropped = Les colonnes « non utilisées » sont abandonnées avant tout calcul, de même que le numéro de patient.
 column-heading = Colonne
 column-looks = Ce qu’elle contient
 column-role = Usage
@@ -192,23 +192,23 @@ role-sex = sexe
 role-birth_date = date de naissance
 role-age = âge au début
 role-group = pour former des groupes
-order-settled = Dates : { $order }.
-order-ask = Comment les dates sont-elles écrites ?
+order-settled = Dates : { $order }.
+order-ask = Comment les dates sont-elles écrites ?
 order-day_month_year = jour, mois, année
 order-month_day_year = mois, jour, année
 order-year_month_day = année, mois, jour
 order-serial_1900 = numéros de jour du tableur
 order-serial_1904 = numéros de jour du tableur, comptés depuis 1904
 
-meanings-title = L’issue : ce que signifie chaque valeur
+meanings-title = L’issue : ce que signifie chaque valeur
 meanings-lead = Les lignes dont la valeur n’a pas de sens sont écartées et comptées.
 meanings-caption = Valeurs de la colonne de l’issue
-meaning-none = aucun sens : écartée
+meaning-none = aucun sens : écartée
 meaning-of = Sens de { $value }
 blank-value = (rien d’écrit)
 value = Valeur
 means = Signifie
-sexes-title = Le sexe : ce que signifie chaque valeur
+sexes-title = Le sexe : ce que signifie chaque valeur
 sexes-lead = Les valeurs sans signification comptent comme non renseignées.
 sexes-caption = Valeurs de la colonne du sexe
 sex-none = non renseigné
@@ -218,14 +218,14 @@ closing-label = Jour où le registre a été arrêté
 closing-hint = Personne n’est suivi au-delà. Elle est demandée car le fichier ne la montre pas, et l’horloge de l’ordinateur n’est jamais utilisée.
 
 understood-title = Ce qui a été compris
-still-missing = Reste à choisir :
+still-missing = Reste à choisir :
 missing-start = la colonne du début du suivi
 missing-end = la colonne du dernier contact ou de la fin
 missing-outcome = la colonne de l’issue
 missing-closing = la date de clôture
 missing-order = la façon d’écrire les dates
 missing-meanings = ce que signifient les valeurs de l’issue
-understood-sentence = { $n } patients tirés de { $rows } lignes, dont le suivi a commencé entre le { $first } et le { $last } et va au plus tard jusqu’au { $closing } : { $years } personnes-années.
+understood-sentence = { $n } patients tirés de { $rows } lignes, dont le suivi a commencé entre le { $first } et le { $last } et va au plus tard jusqu’au { $closing } : { $years } personnes-années.
 outcomes-caption = Comment le suivi s’est terminé
 how-it-ended = Issue
 reason = Raison
@@ -244,26 +244,26 @@ changed-title = { $n ->
   }
 changed-caption = Modifications, par raison
 changed-lines-caption = Lignes modifiées, avec leur numéro dans le fichier
-dropped-columns = Abandonnées avant l’analyse : { $columns }.
-next = Ensuite :
+dropped-columns = Abandonnées avant l’analyse : { $columns }.
+next = Ensuite :
 register-other-title = Un autre registre
 forget = Tout oublier
 forget-meaning = Retire de la mémoire le registre et tous les choix faits à son sujet.
 
-evidence-heading_says = Son en-tête dit « { $words } ».
+evidence-heading_says = Son en-tête dit « { $words } ».
 evidence-reads_as_dates = { $read } sur { $filled } ressemblent à des dates.
 evidence-order_settled = { $n ->
     [one] Une date montre
    *[other] { $n } dates montrent
-  } l’ordre : { $order }.
+  } l’ordre : { $order }.
 evidence-order_not_settled = Rien ne montre si le jour ou le mois vient en premier.
 evidence-reads_as_numbers = Des nombres dans les { $filled } lignes remplies.
 evidence-values_recognised = { $recognised } sur { $filled } disent quelque chose de reconnu.
 evidence-all_different = { $distinct } valeurs différentes.
 evidence-few_values = { $distinct } valeurs différentes.
-evidence-many_values = { $distinct } valeurs différentes : trop pour former des groupes.
-evidence-heading_identifies = Son en-tête (« { $words } ») dit qu’elle identifie des personnes.
-evidence-heading_of_notes = Son en-tête (« { $words } ») dit qu’elle contient des notes.
+evidence-many_values = { $distinct } valeurs différentes : trop pour former des groupes.
+evidence-heading_identifies = Son en-tête (« { $words } ») dit qu’elle identifie des personnes.
+evidence-heading_of_notes = Son en-tête (« { $words } ») dit qu’elle contient des notes.
 evidence-earliest_dates = Ses dates viennent en premier.
 evidence-latest_dates = Ses dates viennent en dernier.
 evidence-free_text = Texte libre.
@@ -273,27 +273,27 @@ set-aside-repeated_heading = Les en-têtes sont répétés ici.
 set-aside-repeated_heading-short = En-têtes répétés
 set-aside-subtotal_row = Un total, pas un patient.
 set-aside-subtotal_row-short = Totaux
-set-aside-too_many_cells = Plus de cellules que de colonnes ({ $cells } au lieu de { $columns }) : un séparateur se trouve peut-être dans une cellule.
+set-aside-too_many_cells = Plus de cellules que de colonnes ({ $cells } au lieu de { $columns }) : un séparateur se trouve peut-être dans une cellule.
 set-aside-too_many_cells-short = Trop de cellules
 set-aside-no_start_date = Le début du suivi est vide.
 set-aside-no_start_date-short = Sans date de début
-set-aside-unreadable_start_date = « { $written } » n’est pas une date de début.
+set-aside-unreadable_start_date = « { $written } » n’est pas une date de début.
 set-aside-unreadable_start_date-short = Le début n’est pas une date
-set-aside-partial_start_date = Il manque au début, « { $written } », le jour ou le mois.
+set-aside-partial_start_date = Il manque au début, « { $written } », le jour ou le mois.
 set-aside-partial_start_date-short = Début sans jour ou sans mois
-set-aside-impossible_start_date = Le jour « { $written } » n’existe pas.
+set-aside-impossible_start_date = Le jour « { $written } » n’existe pas.
 set-aside-impossible_start_date-short = Le jour du début n’existe pas
 set-aside-start_after_closing = Commence le { $start }, après la date de clôture.
 set-aside-start_after_closing-short = Commence après la clôture
 set-aside-no_outcome = L’issue est vide.
 set-aside-no_outcome-short = Issue vide
-set-aside-outcome_without_meaning = « { $value } » n’a reçu aucun sens.
+set-aside-outcome_without_meaning = « { $value } » n’a reçu aucun sens.
 set-aside-outcome_without_meaning-short = Issue sans signification
-set-aside-unreadable_end_date = « { $written } » n’est pas une date de fin.
+set-aside-unreadable_end_date = « { $written } » n’est pas une date de fin.
 set-aside-unreadable_end_date-short = La fin n’est pas une date
-set-aside-partial_end_date = Il manque à la fin, « { $written } », le jour ou le mois.
+set-aside-partial_end_date = Il manque à la fin, « { $written } », le jour ou le mois.
 set-aside-partial_end_date-short = Fin sans jour ou sans mois
-set-aside-impossible_end_date = Le jour « { $written } » n’existe pas.
+set-aside-impossible_end_date = Le jour « { $written } » n’existe pas.
 set-aside-impossible_end_date-short = Le jour de la fin n’existe pas
 set-aside-no_end_date = Le suivi s’est terminé, mais on ne sait pas quand.
 set-aside-no_end_date-short = Terminé sans date
@@ -301,95 +301,95 @@ set-aside-end_before_start = Se termine le { $end }, avant d’avoir commencé l
 set-aside-end_before_start-short = Se termine avant de commencer
 set-aside-birth_after_start = Né le { $birth }, après le début le { $start }.
 set-aside-birth_after_start-short = Né après le début
-set-aside-unreadable_observed_from = « { $written } » n’est pas une date de première visite ici.
+set-aside-unreadable_observed_from = « { $written } » n’est pas une date de première visite ici.
 set-aside-unreadable_observed_from-short = La première visite ici n’est pas une date
-set-aside-partial_observed_from = Il manque à la première visite ici, « { $written } », le jour ou le mois.
+set-aside-partial_observed_from = Il manque à la première visite ici, « { $written } », le jour ou le mois.
 set-aside-partial_observed_from-short = Première visite ici sans jour ou sans mois
-set-aside-impossible_observed_from = Le jour « { $written } » n’existe pas.
+set-aside-impossible_observed_from = Le jour « { $written } » n’existe pas.
 set-aside-impossible_observed_from-short = Le jour de la première visite ici n’existe pas
 set-aside-before_observed_from = Se termine le { $end }, avant la première visite ici le { $observed_from }.
 set-aside-before_observed_from-short = Se termine avant la première visite ici
-set-aside-no_time_at_risk = Vu ici pour la première et la dernière fois le même jour, { $observed_from } : aucun temps observé.
+set-aside-no_time_at_risk = Vu ici pour la première et la dernière fois le même jour, { $observed_from } : aucun temps observé.
 set-aside-no_time_at_risk-short = Aucun temps observé
 set-aside-duplicate_number = Le numéro de patient figure déjà à la ligne { $first_line }.
 set-aside-duplicate_number-short = Numéro de patient répété
 
-changed-under_care_to_closing = Encore suivi sans dernier contact : suivi jusqu’à la date de clôture.
+changed-under_care_to_closing = Encore suivi sans dernier contact : suivi jusqu’à la date de clôture.
 changed-under_care_to_closing-short = Encore suivi, jusqu’à la clôture
-changed-observed_before_start = Première visite ici le { $observed_from }, avant le début : observé depuis le début.
+changed-observed_before_start = Première visite ici le { $observed_from }, avant le début : observé depuis le début.
 changed-observed_before_start-short = Première visite avant le début
-changed-followed_past_closing = Se termine le { $end }, après la clôture : encore suivi à cette date.
-changed-followed_past_closing-short = Terminé après la clôture : encore suivi à cette date
+changed-followed_past_closing = Se termine le { $end }, après la clôture : encore suivi à cette date.
+changed-followed_past_closing-short = Terminé après la clôture : encore suivi à cette date
 
 caution-age_out_of_range = { $n } âges inférieurs à 0 ou supérieurs à { $oldest } comptent comme non renseignés.
-caution-all_censored = Aucun des { $n } patients n’est décédé. La survie ne peut pas baisser ; étudiez une autre issue ou vérifiez le sens des valeurs.
-caution-all_set_aside = Toutes les lignes ({ $rows }) ont été écartées. Voyez les raisons : sans doute une colonne ou la façon d’écrire les dates a-t-elle été mal choisie.
-caution-birth_dates_unreadable = { $n } dates de naissance de « { $heading } » n’ont pas pu être lues ; l’âge y compte comme non renseigné.
-caution-buddhist_years = { $n } années de « { $heading } » sont comptées selon l’ère bouddhique ; 543 a été retranché.
-caution-closing_long_after_last = La dernière date du fichier est le { $last }, { $days } jours avant la clôture. La date de clôture est-elle juste ?
-caution-dates_against_order = { $n } dates de « { $heading } » ne suivent pas l’ordre des autres et ont été écartées.
+caution-all_censored = Aucun des { $n } patients n’est décédé. La survie ne peut pas baisser ; étudiez une autre issue ou vérifiez le sens des valeurs.
+caution-all_set_aside = Toutes les lignes ({ $rows }) ont été écartées. Voyez les raisons : sans doute une colonne ou la façon d’écrire les dates a-t-elle été mal choisie.
+caution-birth_dates_unreadable = { $n } dates de naissance de « { $heading } » n’ont pas pu être lues ; l’âge y compte comme non renseigné.
+caution-buddhist_years = { $n } années de « { $heading } » sont comptées selon l’ère bouddhique ; 543 a été retranché.
+caution-closing_long_after_last = La dernière date du fichier est le { $last }, { $days } jours avant la clôture. La date de clôture est-elle juste ?
+caution-dates_against_order = { $n } dates de « { $heading } » ne suivent pas l’ordre des autres et ont été écartées.
 caution-day_zero = { $n ->
     [one] Un patient a été vu pour la dernière fois
    *[other] { $n } patients ont été vus pour la dernière fois
   } le jour même du début (lignes { $lines }…).
-caution-doubled_headings = Ces en-têtes figurent plusieurs fois : { $headings }.
+caution-doubled_headings = Ces en-têtes figurent plusieurs fois : { $headings }.
 caution-encoding_assumed = Les caractères ont été lus en { $encoding }. Si des noms paraissent faux, enregistrez le fichier en UTF-8.
 caution-formulas_without_value = { $n } cellules contiennent une formule sans valeur enregistrée et ont été lues comme vides. Ouvrez et enregistrez d’abord le classeur dans son tableur.
-caution-hidden_columns = { $n } colonnes sont masquées dans le classeur ; elles ont été lues.
-caution-hidden_rows = { $n } lignes sont masquées ou filtrées dans le classeur ; elles ont été lues.
-caution-hidden_sheets = Le classeur a des feuilles masquées : { $sheets }.
+caution-hidden_columns = { $n } colonnes sont masquées dans le classeur ; elles ont été lues.
+caution-hidden_rows = { $n } lignes sont masquées ou filtrées dans le classeur ; elles ont été lues.
+caution-hidden_sheets = Le classeur a des feuilles masquées : { $sheets }.
 caution-long_rows = { $n ->
     [one] Une ligne a
    *[other] { $n } lignes ont
-  } plus de cellules que d’en-têtes (lignes { $lines }…) : des colonnes y sont peut-être décalées.
-caution-many_after_closing = { $n } patients commencent après la date de clôture. Est-elle juste ?
-caution-many_levels = « { $heading } » a { $levels } valeurs différentes : trop pour comparer des groupes.
-caution-merged_cells = { $n } cellules fusionnées : seule la première de chacune contient la valeur.
-caution-no_headings = Il n’y a pas d’en-têtes ; les colonnes sont numérotées.
+  } plus de cellules que d’en-têtes (lignes { $lines }…) : des colonnes y sont peut-être décalées.
+caution-many_after_closing = { $n } patients commencent après la date de clôture. Est-elle juste ?
+caution-many_levels = « { $heading } » a { $levels } valeurs différentes : trop pour comparer des groupes.
+caution-merged_cells = { $n } cellules fusionnées : seule la première de chacune contient la valeur.
+caution-no_headings = Il n’y a pas d’en-têtes ; les colonnes sont numérotées.
 caution-nul_bytes = { $n } caractères vides (NUL) ont été retirés.
-caution-number_style_unsettled = Dans « { $heading } », une virgule ou un point peut séparer milliers ou décimales ; « { $decimal } » a été pris pour les décimales.
+caution-number_style_unsettled = Dans « { $heading } », une virgule ou un point peut séparer milliers ou décimales ; « { $decimal } » a été pris pour les décimales.
 caution-one_patient_only = Il ne reste qu’un patient. Les résultats concernent des groupes.
-caution-order_against_evidence = L’ordre choisi pour « { $heading } » ({ $order }) contredit les dates qui s’y trouvent.
+caution-order_against_evidence = L’ordre choisi pour « { $heading } » ({ $order }) contredit les dates qui s’y trouvent.
 caution-preamble = { $n ->
     [one] Une ligne au-dessus des en-têtes a été laissée de côté.
    *[other] { $n } lignes au-dessus des en-têtes ont été laissées de côté.
   }
-caution-quotes_unbalanced = Un guillemet ouvert à la ligne { $line } n’est jamais fermé ; les guillemets ont été lus comme des caractères ordinaires.
-caution-repeated_headings = Les en-têtes sont répétés dans la liste ({ $n }) ; ces lignes ne sont pas des patients.
+caution-quotes_unbalanced = Un guillemet ouvert à la ligne { $line } n’est jamais fermé ; les guillemets ont été lus comme des caractères ordinaires.
+caution-repeated_headings = Les en-têtes sont répétés dans la liste ({ $n }) ; ces lignes ne sont pas des patients.
 caution-sex_without_meaning = { $n } lignes ont un sexe qui n’a reçu aucun sens ({ $values }).
 caution-short_rows = { $n ->
     [one] Une ligne a
    *[other] { $n } lignes ont
-  } moins de cellules que d’en-têtes (lignes { $lines }…) ; le reste a été lu comme vide.
-caution-subtotal_rows = Des lignes de totaux ont été trouvées ({ $n }) ; ce ne sont pas des patients.
-caution-text_in_numbers = Dans « { $heading } », { $n } cellules ne sont pas des nombres ({ $examples }) et comptent comme non renseignées.
+  } moins de cellules que d’en-têtes (lignes { $lines }…) ; le reste a été lu comme vide.
+caution-subtotal_rows = Des lignes de totaux ont été trouvées ({ $n }) ; ce ne sont pas des patients.
+caution-text_in_numbers = Dans « { $heading } », { $n } cellules ne sont pas des nombres ({ $examples }) et comptent comme non renseignées.
 caution-two_digit_years = { $n } années à deux chiffres ({ $headings }) ont été placées entre { $first } et { $last }.
-caution-unnamed_columns = Colonnes sans en-tête : { $columns }.
+caution-unnamed_columns = Colonnes sans en-tête : { $columns }.
 caution-unreadable_characters = { $n } caractères n’ont pas pu être lus.
 caution-unseen_for_long = { $n ->
     [one] Un patient compte
    *[other] { $n } patients comptent
   } comme suivis mais ont été vus pour la dernière fois plus de { $days } jours avant la clôture (lignes { $lines }…). Ils sont peut-être perdus de vue.
-caution-values_not_listed = Seules les { $listed } valeurs les plus fréquentes sur { $distinct } sont listées ; les autres n’ont pas de sens.
-caution-list_shortened = { $listed } lignes sur { $n } sont listées ; toutes sont comptées.
-caution-levels_not_listed = { $covariate } a { $levels } valeurs ; { $listed } sont listées.
+caution-values_not_listed = Seules les { $listed } valeurs les plus fréquentes sur { $distinct } sont listées ; les autres n’ont pas de sens.
+caution-list_shortened = { $listed } lignes sur { $n } sont listées ; toutes sont comptées.
+caution-levels_not_listed = { $covariate } a { $levels } valeurs ; { $listed } sont listées.
 
 refusal-compressed_file = C’est un fichier compressé. Décompressez-le et ouvrez la liste qu’il contient.
-refusal-date_order_unsettled = Choisissez comment les dates de « { $heading } » sont écrites : rien ne montre si le jour ou le mois vient en premier.
+refusal-date_order_unsettled = Choisissez comment les dates de « { $heading } » sont écrites : rien ne montre si le jour ou le mois vient en premier.
 refusal-empty_file = Le fichier est vide.
 refusal-file_too_large = Le fichier est plus grand que ce que cette page peut ouvrir (la limite est 200 Mo). Enregistrez seulement la liste des patients dans un fichier à part.
 refusal-no_end_column = Choisissez la colonne du dernier contact ou de la fin.
 refusal-no_outcome_column = Choisissez la colonne de l’issue.
 refusal-no_start_column = Choisissez la colonne du début du suivi.
-refusal-no_readable_dates = Rien dans « { $heading } » ne se lit comme une date (par exemple { $examples }). Choisissez une autre colonne pour le début.
+refusal-no_readable_dates = Rien dans « { $heading } » ne se lit comme une date (par exemple { $examples }). Choisissez une autre colonne pour le début.
 refusal-no_such_line = La ligne { $given } ne contient pas d’en-têtes.
-refusal-no_such_sheet = Le classeur n’a pas de feuille « { $given } ».
+refusal-no_such_sheet = Le classeur n’a pas de feuille « { $given } ».
 refusal-not_a_table = Ce n’est pas une liste lisible. Enregistrez-la depuis son logiciel en .xlsx ou .csv.
 refusal-not_text = Ce n’est ni un fichier texte ni un classeur. Enregistrez la liste depuis son logiciel en .xlsx ou .csv.
-refusal-not_a_date = « { $given } » n’est pas une date.
-refusal-role_given_twice = Plusieurs colonnes servent de « { $role } ». Choisissez-en une.
+refusal-not_a_date = « { $given } » n’est pas une date.
+refusal-role_given_twice = Plusieurs colonnes servent de « { $role } ». Choisissez-en une.
 refusal-too_many_cells_in_file = La liste a plus de { $most } cellules, plus que cette page ne peut contenir.
-refusal-too_many_columns = La liste a { $columns } colonnes ; on peut en lire au plus { $most }.
+refusal-too_many_columns = La liste a { $columns } colonnes ; on peut en lire au plus { $most }.
 refusal-too_many_rows = La liste a plus de { $most } lignes, plus que cette page ne peut contenir.
 refusal-unknown_column = Le fichier n’a pas cette colonne.
 refusal-workbook_binary = C’est un classeur binaire (.xlsb). Enregistrez-le en .xlsx.
@@ -422,47 +422,47 @@ censored-so-far = Censurés jusque-là
 beyond-follow-up = au-delà du suivi
 count-share = { $count } ({ $share })
 from-to = { $lower } à { $upper }
-sentence-group = { $group } : {""}
-levels-left-out = Laissés de côté car personne n’en fait partie : { $levels }.
+sentence-group = { $group } : {""}
+levels-left-out = Laissés de côté car personne n’en fait partie : { $levels }.
 
 survival-title = Survie au cours du temps
 survival-sentence-deaths = { $group }{ $survival } étaient en vie { $years ->
     [one] { $years } an
    *[other] { $years } ans
-  } après le début (intervalle à 95 % : { $interval }), d’après { $n } patients et { $events } décès.
+  } après le début (intervalle à 95 % : { $interval }), d’après { $n } patients et { $events } décès.
 survival-sentence-other = { $group }{ $survival } n’avaient pas connu l’événement choisi { $years ->
     [one] { $years } an
    *[other] { $years } ans
-  } après le début (intervalle à 95 % : { $interval }), d’après { $n } patients et { $events } événements.
-survival-sentence-short = { $group }le suivi de ces { $n } patients est inférieur à un an ; lisez la courbe jusqu’où elle va.
-median-reached = La moitié l’avait connu à { $median } ans (intervalle à 95 % : { $lower } à { $upper }).
-median-reached-open = La moitié l’avait connu à { $median } ans (intervalle à 95 % : à partir de { $lower } ; limite supérieure non atteinte).
-median-unsupported = La moitié ne l’avait connu qu’après que moins de 10 patients étaient encore suivis : pas de médiane.
-median-not-reached = Moins de la moitié l’avait connu à la fin du suivi : il n’y a pas de médiane.
+  } après le début (intervalle à 95 % : { $interval }), d’après { $n } patients et { $events } événements.
+survival-sentence-short = { $group }le suivi de ces { $n } patients est inférieur à un an ; lisez la courbe jusqu’où elle va.
+median-reached = La moitié l’avait connu à { $median } ans (intervalle à 95 % : { $lower } à { $upper }).
+median-reached-open = La moitié l’avait connu à { $median } ans (intervalle à 95 % : à partir de { $lower } ; limite supérieure non atteinte).
+median-unsupported = La moitié ne l’avait connu qu’après que moins de 10 patients étaient encore suivis : pas de médiane.
+median-not-reached = Moins de la moitié l’avait connu à la fin du suivi : il n’y a pas de médiane.
 survival-figure-deaths = Part encore en vie, selon les années depuis le début
 survival-figure-other = Part n’ayant pas connu l’événement, selon les années depuis le début
 survival-figure-described = { $curves ->
-    [one] Une courbe en escalier descendante avec sa bande à 95 % ; les effectifs à risque sont en dessous et le tableau derrière la figure contient toutes les valeurs.
-   *[other] { $curves } courbes en escalier descendantes avec leurs bandes à 95 % ; les effectifs à risque sont en dessous et le tableau derrière la figure contient toutes les valeurs.
+    [one] Une courbe en escalier descendante avec sa bande à 95 % ; les effectifs à risque sont en dessous et le tableau derrière la figure contient toutes les valeurs.
+   *[other] { $curves } courbes en escalier descendantes avec leurs bandes à 95 % ; les effectifs à risque sont en dessous et le tableau derrière la figure contient toutes les valeurs.
   }
 survival-counts-caption = À risque, événements et censurés à chaque année
-survival-at-years-caption = Survie à des moments choisis, avec limites à 95 %
+survival-at-years-caption = Survie à des moments choisis, avec limites à 95 %
 survival-heading-deaths = En vie
 survival-heading-other = Sans l’événement
 losses-caption = Ce que les perdus de vue pourraient changer
-losses-note = La vérité se trouve entre les deux colonnes. La courbe ci-dessus suppose que les perdus de vue ressemblent à ceux qui sont restés ; en cas de doute, citez les deux colonnes.
+losses-note = La vérité se trouve entre les deux colonnes. La courbe ci-dessus suppose que les perdus de vue ressemblent à ceux qui sont restés ; en cas de doute, citez les deux colonnes.
 if-all-lost-died = Si tous avaient connu l’événement au dernier contact
 if-none-lost-died = Si aucun, jusqu’à la date de clôture
-no-losses = Personne n’a été perdu de vue : les pertes ne changent rien ici.
+no-losses = Personne n’a été perdu de vue : les pertes ne changent rien ici.
 interval-kind = Type d’intervalle de confiance
 interval-log-log = log-log (choix habituel)
 interval-log = log
 interval-plain = simple
-survival-method = Produit-limite (Kaplan & Meier 1958), variance de Greenwood (1926), limites { $interval } ; là où la courbe est restée à 100 % ou a atteint 0 %, limites bêta-produit (Fay et coll. 2013). Les événements précèdent les censures du même jour. La médiane est le premier moment où la courbe est à 50 % ou moins (Brookmeyer & Crowley 1982). Tracée tant qu’au moins 10 sont à risque ; les petits traits marquent les patients censurés.
+survival-method = Produit-limite (Kaplan & Meier 1958), variance de Greenwood (1926), limites { $interval } ; là où la courbe est restée à 100 % ou a atteint 0 %, limites bêta-produit (Fay et coll. 2013). Les événements précèdent les censures du même jour. La médiane est le premier moment où la courbe est à 50 % ou moins (Brookmeyer & Crowley 1982). Tracée tant qu’au moins 10 sont à risque ; les petits traits marquent les patients censurés.
 
 life-table-title = Table de survie
 life-table-caption = Table de survie actuarielle
-life-table-caption-group = Table de survie actuarielle : { $group }
+life-table-caption-group = Table de survie actuarielle : { $group }
 life-table-step = Longueur des intervalles
 step-year = Années
 step-quarter = Trimestres
@@ -476,23 +476,23 @@ events = Événements
 effective = Effectif corrigé
 chance = Probabilité dans l’intervalle
 odds = Cote dans l’intervalle
-survival-to-end = Survie à la fin (limites à 95 %)
+survival-to-end = Survie à la fin (limites à 95 %)
 hazard-per-year = Risque instantané par an
-life-table-method = Méthode actuarielle (Berkson & Gage 1950 ; Cutler & Ederer 1958) : les perdus de vue et autres sorties d’un intervalle comptent pour moitié. Erreur type de Greenwood ; risque instantané au milieu de l’intervalle (Gehan 1969).
+life-table-method = Méthode actuarielle (Berkson & Gage 1950 ; Cutler & Ederer 1958) : les perdus de vue et autres sorties d’un intervalle comptent pour moitié. Erreur type de Greenwood ; risque instantané au milieu de l’intervalle (Gehan 1969).
 
 leaving-title = Toutes les façons de sortir
 leaving-sentence = { $group }après { $years ->
     [one] { $years } an
    *[other] { $years } ans
-  }, { $stayed } étaient encore suivis ; la sortie la plus fréquente était « { $way } », avec { $share }.
+  }, { $stayed } étaient encore suivis ; la sortie la plus fréquente était « { $way } », avec { $share }.
 leaving-sentence-nobody = { $group }personne n’est encore sorti.
-leaving-figure = Où en sont les patients, selon les années depuis le début : { $group }
-leaving-figure-described = Une aire empilée : ceux encore suivis en bas, au-dessus { $ways ->
+leaving-figure = Où en sont les patients, selon les années depuis le début : { $group }
+leaving-figure-described = Une aire empilée : ceux encore suivis en bas, au-dessus { $ways ->
     [one] une façon de sortir
    *[other] { $ways } façons de sortir
-  }, toujours 100 % ensemble. Le tableau ci-dessous contient les valeurs.
-leaving-caption = Incidence cumulée de chaque façon de sortir, avec limites à 95 % : { $group }
-leaving-note = La dernière colonne montre ce que « un moins la survie » dirait à tort, comme si les autres sorties n’existaient pas. Ne la citez pas.
+  }, toujours 100 % ensemble. Le tableau ci-dessous contient les valeurs.
+leaving-caption = Incidence cumulée de chaque façon de sortir, avec limites à 95 % : { $group }
+leaving-note = La dernière colonne montre ce que « un moins la survie » dirait à tort, comme si les autres sorties n’existaient pas. Ne la citez pas.
 way-of-leaving = Façon de sortir
 events-in-all = En tout
 by-years = À { $years ->
@@ -500,26 +500,26 @@ by-years = À { $years ->
    *[other] { $years } ans
   }
 one-minus-survival = Un moins la survie à { $years } (trop élevé)
-leaving-method = Aalen & Johansen (1978), toutes les façons de sortir à la fois ; variance selon Marubini & Valsecchi (1995).
+leaving-method = Aalen & Johansen (1978), toutes les façons de sortir à la fois ; variance selon Marubini & Valsecchi (1995).
 
 refusal-no_patients = Il n’y a aucun patient à décrire.
-refusal-one_patient = Un patient seul n’est pas décrit ici : les résultats concernent des groupes. Regardez le dossier lui-même.
-refusal-nobody_at_risk = Personne n’a été observé ne serait-ce qu’un jour : rien ne peut être dit du temps.
-refusal-too_many_groups = { $covariate } compte { $groups } groupes ; on en distingue au plus { $most }. Regroupez-en dans le registre ou choisissez une autre colonne.
+refusal-one_patient = Un patient seul n’est pas décrit ici : les résultats concernent des groupes. Regardez le dossier lui-même.
+refusal-nobody_at_risk = Personne n’a été observé ne serait-ce qu’un jour : rien ne peut être dit du temps.
+refusal-too_many_groups = { $covariate } compte { $groups } groupes ; on en distingue au plus { $most }. Regroupez-en dans le registre ou choisissez une autre colonne.
 refusal-groups_too_small = Aucun groupe de { $covariate } n’a au moins deux patients. Choisissez une autre colonne.
-caution-no_events = { $level } : personne sur { $n } n’a connu l’événement. La courbe reste à 100 % ; sa limite inférieure montre jusqu’où elle pourrait descendre.
-caution-all_events_on_day_zero = { $level } : les { $events } événements tombent tous le premier jour. Vérifiez que les dates de début et de fin n’ont pas été confondues.
-caution-last_at_risk_had_event = { $level } : la courbe tombe à 0 parce que le tout dernier patient observé a connu l’événement. N’en lisez pas la fin.
-caution-never_at_risk = { $level } : { $n } patients vus tardivement ont commencé et fini leur observation le même jour et ne comptent nulle part.
-caution-begins_late = { $level } : personne n’était observé avant le jour { $days }. La courbe ne concerne que ceux qui sont arrivés jusque-là.
-caution-risk_set_emptied = { $level } : pendant un temps personne n’était observé (en dernier après le jour { $emptied_days }) ; la courbe repart au jour { $restart_days } et concerne ceux qui sont arrivés jusque-là.
-caution-few_patients = { $level } : seulement { $n } patients. Un de plus ou de moins changerait beaucoup les chiffres.
-caution-few_at_risk = { $level } : moins de 10 encore à risque à { $years } ans ({ $at_risk }). Ne vous appuyez pas sur ce chiffre.
-caution-many_lost = { $level } : { $lost } perdus de vue ({ $share }). S’ils ont évolué moins bien que les autres, la vraie survie est plus basse : citez aussi les bornes.
-caution-all_lost = { $level } : les { $n } patients ont tous été perdus de vue ; seules les bornes peuvent être données.
-caution-lost_is_of_interest = Être perdu de vue compte ici comme événement ; les bornes des pertes n’ont alors aucun sens.
-caution-few_effective = { $level } : moins de 10 effectivement à risque dans l’intervalle qui commence au jour { $from_days }. Ne lisez pas au-delà.
-caution-nobody_left = { $level } : personne sur { $n } n’est encore sorti.
+caution-no_events = { $level } : personne sur { $n } n’a connu l’événement. La courbe reste à 100 % ; sa limite inférieure montre jusqu’où elle pourrait descendre.
+caution-all_events_on_day_zero = { $level } : les { $events } événements tombent tous le premier jour. Vérifiez que les dates de début et de fin n’ont pas été confondues.
+caution-last_at_risk_had_event = { $level } : la courbe tombe à 0 parce que le tout dernier patient observé a connu l’événement. N’en lisez pas la fin.
+caution-never_at_risk = { $level } : { $n } patients vus tardivement ont commencé et fini leur observation le même jour et ne comptent nulle part.
+caution-begins_late = { $level } : personne n’était observé avant le jour { $days }. La courbe ne concerne que ceux qui sont arrivés jusque-là.
+caution-risk_set_emptied = { $level } : pendant un temps personne n’était observé (en dernier après le jour { $emptied_days }) ; la courbe repart au jour { $restart_days } et concerne ceux qui sont arrivés jusque-là.
+caution-few_patients = { $level } : seulement { $n } patients. Un de plus ou de moins changerait beaucoup les chiffres.
+caution-few_at_risk = { $level } : moins de 10 encore à risque à { $years } ans ({ $at_risk }). Ne vous appuyez pas sur ce chiffre.
+caution-many_lost = { $level } : { $lost } perdus de vue ({ $share }). S’ils ont évolué moins bien que les autres, la vraie survie est plus basse : citez aussi les bornes.
+caution-all_lost = { $level } : les { $n } patients ont tous été perdus de vue ; seules les bornes peuvent être données.
+caution-lost_is_of_interest = Être perdu de vue compte ici comme événement ; les bornes des pertes n’ont alors aucun sens.
+caution-few_effective = { $level } : moins de 10 effectivement à risque dans l’intervalle qui commence au jour { $from_days }. Ne lisez pas au-delà.
+caution-nobody_left = { $level } : personne sur { $n } n’est encore sorti.
 caution-group_not_recorded = { $n ->
     [one] Un patient n’a rien d’inscrit dans la colonne des groupes et n’est dans aucun groupe.
    *[other] { $n } patients n’ont rien d’inscrit dans la colonne des groupes et ne sont dans aucun groupe.
@@ -529,7 +529,7 @@ caution-group_not_recorded = { $n ->
 
 compare-title = Comparer
 
-compare-lead = Un groupe s’en est-il mieux sorti qu’un autre ? D’abord simplement, puis en tenant compte de ce qui les distingue par ailleurs. Rien ici ne montre que le groupe en est la cause.
+compare-lead = Un groupe s’en est-il mieux sorti qu’un autre ? D’abord simplement, puis en tenant compte de ce qui les distingue par ailleurs. Rien ici ne montre que le groupe en est la cause.
 compare-choose-group = Choisissez ci-dessus une colonne pour former les groupes.
 compare-exposed = Groupe étudié
 compare-reference = Comparé à
@@ -544,12 +544,12 @@ difference-title = La différence de survie
 difference-sentence = Après { $years ->
     [one] { $years } an
    *[other] { $years } ans
-  }, { $inExposed } dans « { $exposed } » et { $inReference } dans « { $reference } » n’avaient pas connu l’événement : une différence de { $difference } points de pourcentage (intervalle à 95 % : { $interval }).
+  }, { $inExposed } dans « { $exposed } » et { $inReference } dans « { $reference } » n’avaient pas connu l’événement : une différence de { $difference } points de pourcentage (intervalle à 95 % : { $interval }).
 difference-caption = Sans l’événement à des moments choisis, et la différence
 difference-points = Différence, points de pourcentage
-difference-method = Différence de deux estimations produit-limite ; les variances des deux groupes s’ajoutent (Greenwood 1926). Sans aucun ajustement.
+difference-method = Différence de deux estimations produit-limite ; les variances des deux groupes s’ajoutent (Greenwood 1926). Sans aucun ajustement.
 
-rank-test-title = Les courbes peuvent-elles différer par hasard ?
+rank-test-title = Les courbes peuvent-elles différer par hasard ?
 rank-sentence-differ = Sur l’ensemble du suivi, les groupes diffèrent plus que le hasard ne l’expliquerait facilement (khi-deux { $chi }, { $df ->
     [one] { $df } degré
    *[other] { $df } degrés
@@ -565,102 +565,102 @@ expected = Attendus
 observed-to-expected = Observés / attendus
 rank-weight = Poids donné à chaque moment
 rank-weight-hint = À choisir avant de regarder le résultat.
-rank-log_rank = Égal : log-rank
-rank-gehan = Effectif à risque : Gehan
-rank-tarone_ware = Sa racine carrée : Tarone-Ware
-rank-fleming_harrington = Survie jusque-là : Fleming-Harrington
-rank-method-log_rank = Test du log-rank (Mantel 1966 ; Peto & Peto 1972), variance hypergéométrique.
-rank-method-gehan = Test de Wilcoxon généralisé par Gehan : les poids sont les effectifs à risque, les différences précoces comptent davantage.
-rank-method-tarone_ware = Tarone & Ware (1977) : les poids sont les racines carrées des effectifs à risque.
-rank-method-fleming_harrington = Fleming & Harrington (1991), poids S(t−) : les différences précoces comptent davantage.
+rank-log_rank = Égal : log-rank
+rank-gehan = Effectif à risque : Gehan
+rank-tarone_ware = Sa racine carrée : Tarone-Ware
+rank-fleming_harrington = Survie jusque-là : Fleming-Harrington
+rank-method-log_rank = Test du log-rank (Mantel 1966 ; Peto & Peto 1972), variance hypergéométrique.
+rank-method-gehan = Test de Wilcoxon généralisé par Gehan : les poids sont les effectifs à risque, les différences précoces comptent davantage.
+rank-method-tarone_ware = Tarone & Ware (1977) : les poids sont les racines carrées des effectifs à risque.
+rank-method-fleming_harrington = Fleming & Harrington (1991), poids S(t−) : les différences précoces comptent davantage.
 
 intervals-title = Intervalle par intervalle
-intervals-lead = Parmi ceux qui ont commencé chaque intervalle dans « { $exposed } » et dans « { $reference } », combien y ont connu l’événement. Les perdus de vue et autres sorties d’un intervalle comptent pour moitié.
-intervals-caption = Événements sur effectifs corrigés dans chaque intervalle de suivi (limites à 95 %)
+intervals-lead = Parmi ceux qui ont commencé chaque intervalle dans « { $exposed } » et dans « { $reference } », combien y ont connu l’événement. Les perdus de vue et autres sorties d’un intervalle comptent pour moitié.
+intervals-caption = Événements sur effectifs corrigés dans chaque intervalle de suivi (limites à 95 %)
 risk-ratio = Rapport des risques
 odds-ratio = Rapport des cotes
 risk-difference = Différence des risques, points de pourcentage
-intervals-left-out = Laissés hors des chiffres regroupés car un groupe ou un événement y manque : { $intervals }.
-intervals-method = Effectifs corrigés n − w/2 (Cutler & Ederer 1958) ; limites du rapport des risques Katz (1978), du rapport des cotes Woolf (1955), de la différence Newcombe (1998) ; regroupement par Mantel & Haenszel (1959), variances de Robins, Breslow & Greenland (1986) et Greenland & Robins (1985).
-pooled-caption = Regroupé sur les strates (Mantel-Haenszel, limites à 95 %)
-pooled-sentence = Au total, le risque dans « { $exposed } » était { $ratio } fois celui de « { $reference } » (intervalle à 95 % : { $interval } ; p { $p }).
-odds-are-not-risks = Un rapport des cotes n’est pas un rapport des risques : quand l’événement est fréquent, il s’éloigne davantage de 1. Citez le rapport et la différence des risques.
+intervals-left-out = Laissés hors des chiffres regroupés car un groupe ou un événement y manque : { $intervals }.
+intervals-method = Effectifs corrigés n − w/2 (Cutler & Ederer 1958) ; limites du rapport des risques Katz (1978), du rapport des cotes Woolf (1955), de la différence Newcombe (1998) ; regroupement par Mantel & Haenszel (1959), variances de Robins, Breslow & Greenland (1986) et Greenland & Robins (1985).
+pooled-caption = Regroupé sur les strates (Mantel-Haenszel, limites à 95 %)
+pooled-sentence = Au total, le risque dans « { $exposed } » était { $ratio } fois celui de « { $reference } » (intervalle à 95 % : { $interval } ; p { $p }).
+odds-are-not-risks = Un rapport des cotes n’est pas un rapport des risques : quand l’événement est fréquent, il s’éloigne davantage de 1. Citez le rapport et la différence des risques.
 crude = Brut
 pooled = Regroupé
-strata-agree = Les strates concordent assez pour être regroupées (Breslow-Day corrigé par Tarone : khi-deux { $chi }, degrés de liberté { $df }, p { $p }).
-strata-differ = Les strates diffèrent entre elles (Breslow-Day corrigé par Tarone : khi-deux { $chi }, degrés de liberté { $df }, p { $p }) : lisez-les une à une ; le chiffre regroupé masque la différence.
+strata-agree = Les strates concordent assez pour être regroupées (Breslow-Day corrigé par Tarone : khi-deux { $chi }, degrés de liberté { $df }, p { $p }).
+strata-differ = Les strates diffèrent entre elles (Breslow-Day corrigé par Tarone : khi-deux { $chi }, degrés de liberté { $df }, p { $p }) : lisez-les une à une ; le chiffre regroupé masque la différence.
 
 cox-title = En tenant compte d’autres facteurs
 cox-choose-covariates = Cochez ce dont il faut tenir compte.
 cox-covariates = Tenir compte de
 cox-covariates-hint = Seulement ce qui était connu au début. Laissez de côté ce que le groupe a pu lui-même modifier.
-cox-reference = { $covariate } : comparé à
-cox-per = { $covariate } : par
+cox-reference = { $covariate } : comparé à
+cox-per = { $covariate } : par
 cox-ties = Événements le même jour
 cox-ties-efron = Efron (choix habituel)
 cox-ties-breslow = Breslow
-cox-term-level = { $covariate } : { $level } contre { $reference }
+cox-term-level = { $covariate } : { $level } contre { $reference }
 cox-term-number = { $covariate }, par { $per }
-cox-sentence-higher = { $term } : l’événement est venu plus tôt ; à tout moment, son risque instantané était { $ratio } fois aussi élevé (intervalle à 95 % : { $interval } ; p { $p }){ $others ->
+cox-sentence-higher = { $term } : l’événement est venu plus tôt ; à tout moment, son risque instantané était { $ratio } fois aussi élevé (intervalle à 95 % : { $interval } ; p { $p }){ $others ->
     [0] , sans tenir compte d’autre chose.
    *[other] , les autres covariables étant égales.
   }
-cox-sentence-lower = { $term } : l’événement est venu plus tard ; à tout moment, son risque instantané était { $ratio } fois aussi élevé (intervalle à 95 % : { $interval } ; p { $p }){ $others ->
+cox-sentence-lower = { $term } : l’événement est venu plus tard ; à tout moment, son risque instantané était { $ratio } fois aussi élevé (intervalle à 95 % : { $interval } ; p { $p }){ $others ->
     [0] , sans tenir compte d’autre chose.
    *[other] , les autres covariables étant égales.
   }
-cox-sentence-unclear = { $term } : pas de différence nette ; le rapport des risques instantanés est { $ratio }, mais tout ce qui va de { $interval } est compatible avec ces données (p { $p }){ $others ->
+cox-sentence-unclear = { $term } : pas de différence nette ; le rapport des risques instantanés est { $ratio }, mais tout ce qui va de { $interval } est compatible avec ces données (p { $p }){ $others ->
     [0] , sans tenir compte d’autre chose.
    *[other] , les autres covariables étant égales.
   }
-cox-does-not-mean = Un rapport des risques instantanés n’est ni un rapport de risques ni un rapport de cotes, et ne dit pas combien : lisez-le avec la différence de survie ci-dessus.
-cox-figure = Rapports des risques instantanés avec limites à 95 %
+cox-does-not-mean = Un rapport des risques instantanés n’est ni un rapport de risques ni un rapport de cotes, et ne dit pas combien : lisez-le avec la différence de survie ci-dessus.
+cox-figure = Rapports des risques instantanés avec limites à 95 %
 cox-figure-described = { $terms ->
     [one] Un rapport des risques instantanés avec ses limites
    *[other] { $terms } rapports des risques instantanés avec leurs limites
-  } sur une échelle logarithmique ; le tableau ci-dessous contient les valeurs.
+  } sur une échelle logarithmique ; le tableau ci-dessous contient les valeurs.
 axis-hazard-ratio = Rapport des risques instantanés (1 = aucune différence)
 cox-caption = Régression de Cox
 covariate = Covariable
 coefficient = Coefficient
-hazard-ratio = Rapport des risques instantanés (limites à 95 %)
-cox-fit = { $n } patients, { $events } événements. Concordance { $concordance } : la part des paires de patients que le modèle range dans le bon ordre.
+hazard-ratio = Rapport des risques instantanés (limites à 95 %)
+cox-fit = { $n } patients, { $events } événements. Concordance { $concordance } : la part des paires de patients que le modèle range dans le bon ordre.
 cox-tests-caption = Tests du modèle entier
 test-likelihood_ratio = Rapport de vraisemblance
 test-wald = Wald
 test-score = Score
-proportional = Les rapports peuvent être tenus pour constants dans le temps (test du score des risques proportionnels : khi-deux { $chi }, degrés de liberté { $df }, p { $p }).
-not-proportional = Les rapports changent au cours du temps (test du score des risques proportionnels : khi-deux { $chi }, degrés de liberté { $df }, p { $p }) : chacun n’est qu’une moyenne, et la différence de survie ci-dessus en dit plus.
+proportional = Les rapports peuvent être tenus pour constants dans le temps (test du score des risques proportionnels : khi-deux { $chi }, degrés de liberté { $df }, p { $p }).
+not-proportional = Les rapports changent au cours du temps (test du score des risques proportionnels : khi-deux { $chi }, degrés de liberté { $df }, p { $p }) : chacun n’est qu’une moyenne, et la différence de survie ci-dessus en dit plus.
 cox-incomplete = { $incomplete ->
     [one] Un patient a été laissé de côté car une covariable manque.
    *[other] { $incomplete } patients ont été laissés de côté car une covariable manque.
   }
-cox-left-out = Laissées de côté car elles ne varient pas ou répètent ce que d’autres disent déjà : { $covariates }.
-cox-method-efron = Cox (1972), ex æquo selon Efron (1977), limites de Wald ; risques proportionnels par le test du score de Grambsch & Therneau (1994).
-cox-method-breslow = Cox (1972), ex æquo selon Breslow (1974), limites de Wald ; risques proportionnels par le test du score de Grambsch & Therneau (1994).
+cox-left-out = Laissées de côté car elles ne varient pas ou répètent ce que d’autres disent déjà : { $covariates }.
+cox-method-efron = Cox (1972), ex æquo selon Efron (1977), limites de Wald ; risques proportionnels par le test du score de Grambsch & Therneau (1994).
+cox-method-breslow = Cox (1972), ex æquo selon Breslow (1974), limites de Wald ; risques proportionnels par le test du score de Grambsch & Therneau (1994).
 
-caution-few_events_in_group = { $level } : seulement { $events ->
+caution-few_events_in_group = { $level } : seulement { $events ->
     [0] aucun événement
     [one] un événement
    *[other] { $events } événements
   }. La comparaison tient à un ou deux patients.
-caution-common_in_interval = L’événement est fréquent dans les intervalles (jusqu’à { $share }) : ne lisez pas le rapport des cotes regroupé comme un rapport de risques, instantanés ou non.
-caution-strata_differ = Les strates diffèrent entre elles (p { NUMBER($p, maximumFractionDigits: 3) }) : regardez-les une à une avant de citer un chiffre regroupé.
+caution-common_in_interval = L’événement est fréquent dans les intervalles (jusqu’à { $share }) : ne lisez pas le rapport des cotes regroupé comme un rapport de risques, instantanés ou non.
+caution-strata_differ = Les strates diffèrent entre elles (p { NUMBER($p, maximumFractionDigits: 3) }) : regardez-les une à une avant de citer un chiffre regroupé.
 caution-half_added = { $strata ->
     [one] Dans une strate
    *[other] Dans { $strata } strates
-  }, une case est vide ; un demi y a été ajouté pour le test de Woolf.
-caution-few_events = Seulement { $events } événements pour { $parameters } coefficients : moins de 10 pour chacun. Tenez compte de moins de facteurs, ou lisez le résultat comme un indice.
-caution-not_proportional = Les rapports changent au cours du temps (p { NUMBER($p, maximumFractionDigits: 3) }). Un seul nombre pour tout le suivi le cache ; regardez les courbes.
+  }, une case est vide ; un demi y a été ajouté pour le test de Woolf.
+caution-few_events = Seulement { $events } événements pour { $parameters } coefficients : moins de 10 pour chacun. Tenez compte de moins de facteurs, ou lisez le résultat comme un indice.
+caution-not_proportional = Les rapports changent au cours du temps (p { NUMBER($p, maximumFractionDigits: 3) }). Un seul nombre pour tout le suivi le cache ; regardez les courbes.
 caution-covariate_missing = { $n ->
     [one] Un patient
    *[other] { $n } patients
-  } aux données incomplètes ont été laissés de côté ; s’ils diffèrent des autres, le résultat penche.
+  } aux données incomplètes ont été laissés de côté ; s’ils diffèrent des autres, le résultat penche.
 refusal-one_group = Il n’y a qu’un seul groupe. Choisissez une colonne à deux groupes ou plus.
-refusal-no_events_to_compare = Personne n’a connu l’événement : il n’y a rien à comparer.
-refusal-nothing_to_compare = À aucun moment deux groupes n’étaient observés ensemble : ils ne peuvent pas être comparés.
+refusal-no_events_to_compare = Personne n’a connu l’événement : il n’y a rien à comparer.
+refusal-nothing_to_compare = À aucun moment deux groupes n’étaient observés ensemble : ils ne peuvent pas être comparés.
 refusal-same_group = Choisissez deux groupes différents.
-refusal-unknown_level = « { $level } » n’est pas un groupe de { $covariate } qui puisse être comparé.
+refusal-unknown_level = « { $level } » n’est pas un groupe de { $covariate } qui puisse être comparé.
 refusal-no_strata = Il n’y a encore rien à comparer.
 refusal-no_usable_strata = Aucune strate, aucun intervalle ne contient des patients des deux groupes.
 refusal-exact_needs_whole_numbers = Les chiffres exacts demandent des nombres entiers.
@@ -669,17 +669,17 @@ refusal-covariate_twice = { $covariate } figure deux fois.
 refusal-per_not_positive = Le pas de { $covariate } doit dépasser 0.
 refusal-nobody_complete = Aucun patient n’a toutes les covariables cochées. Cochez-en moins.
 refusal-nothing_varies = { $covariate } est identique pour tous. Cochez une autre covariable.
-refusal-reference_is_empty = Personne n’est dans « { $level } » de { $covariate }. Comparez à une autre catégorie.
-refusal-too_few_events = { $events } événements ne suffisent pas pour { $parameters } coefficients : il en faut au moins 3 pour chacun, mieux 10. Cochez moins de covariables.
-refusal-level_without_events = Personne dans « { $level } » de { $covariate } n’a connu l’événement : son rapport n’a pas de fin. Fusionnez cette catégorie avec une autre dans le registre, ou laissez la covariable de côté.
-refusal-separation = { $covariate } sépare complètement ceux qui ont connu l’événement des autres : son rapport n’a pas de fin. Fusionnez des catégories ou laissez-la de côté.
+refusal-reference_is_empty = Personne n’est dans « { $level } » de { $covariate }. Comparez à une autre catégorie.
+refusal-too_few_events = { $events } événements ne suffisent pas pour { $parameters } coefficients : il en faut au moins 3 pour chacun, mieux 10. Cochez moins de covariables.
+refusal-level_without_events = Personne dans « { $level } » de { $covariate } n’a connu l’événement : son rapport n’a pas de fin. Fusionnez cette catégorie avec une autre dans le registre, ou laissez la covariable de côté.
+refusal-separation = { $covariate } sépare complètement ceux qui ont connu l’événement des autres : son rapport n’a pas de fin. Fusionnez des catégories ou laissez-la de côté.
 refusal-no_convergence = Les estimations ne se sont pas stabilisées après { $steps } étapes. Prenez moins de covariables en compte, ou cherchez celle qui en répète presque une autre.
 
 ## Caseload
 
 
 caseload-title = Qui sera suivi
-caseload-lead = À partir des arrivées et des sorties du registre lui-même : qui sera suivi, et ce que cela demande. Les taux du passé sont prolongés ; rien n’est su de ce qui ne s’est encore jamais produit.
+caseload-lead = À partir des arrivées et des sorties du registre lui-même : qui sera suivi, et ce que cela demande. Les taux du passé sont prolongés ; rien n’est su de ce qui ne s’est encore jamais produit.
 calendar-year = Année
 newcomers = Nouveaux
 whole-year = Année complète
@@ -693,9 +693,9 @@ what-if = Hypothèse
 under-care = Suivis
 on-day = Au
 year-to = Année jusqu’au
-band-80 = 80 % des tirages
-band-95 = 95 % des tirages
-percent-sign = %
+band-80 = 80 % des tirages
+band-95 = 95 % des tirages
+percent-sign = %
 difference = Différence
 axis-years-from-closing = Années depuis la date de clôture
 
@@ -706,19 +706,19 @@ newcomers-sentence = Environ { $mean } patients par an sont arrivés ({ $lower }
   }.
 newcomers-sentence-unknown = Aucune année complète ne permet de juger des arrivées. Saisissez un nombre ci-dessous.
 newcomers-figure = Nouveaux patients selon l’année de première visite ici
-newcomers-figure-described = Barres des nouveaux patients par année civile ; les années incomplètes sont vides et un trait pointillé marque la moyenne annuelle.
+newcomers-figure-described = Barres des nouveaux patients par année civile ; les années incomplètes sont vides et un trait pointillé marque la moyenne annuelle.
 retention-sentence = { $staying } sont restés pendant { $years ->
     [one] la première année
    *[other] les { $years } premières années
-  } ; la sortie la plus fréquente était alors « { $way } » ({ $share } des sorties).
+  } ; la sortie la plus fréquente était alors « { $way } » ({ $share } des sorties).
 retention-sentence-nobody = Personne n’est sorti pendant { $years ->
     [one] la première année
    *[other] les { $years } premières années
   }.
 retention-caption = Sorties pour 100 patients-années de suivi, selon les années depuis le début
-retention-note = À partir de { $years } ans depuis le début, trop peu a été observé : la dernière ligne est prolongée.
+retention-note = À partir de { $years } ans depuis le début, trop peu a été observé : la dernière ligne est prolongée.
 today-caption = Les { $total } patients suivis à la date de clôture, selon les années depuis le début
-history-method = Arrivées : limites de Poisson (Garwood 1936), élargies quand les années diffèrent plus que le hasard ne l’explique. Sorties : événements rapportés aux personnes-années de chaque année depuis le début, par cause.
+history-method = Arrivées : limites de Poisson (Garwood 1936), élargies quand les années diffèrent plus que le hasard ne l’explique. Sorties : événements rapportés aux personnes-années de chaque année depuis le début, par cause.
 
 projection-title = Les années à venir
 projection-needs-newcomers = Saisissez combien de nouveaux patients attendre chaque année.
@@ -727,15 +727,15 @@ newcomers-basis = Nouveaux patients
 newcomers-basis-history = comme par le passé
 newcomers-basis-typed = saisis
 newcomers-per-year = Nouveaux par an
-projection-sentence = De { $today } aujourd’hui, environ { $value } seront suivis le { $ends } (95 tirages sur 100 : { $lower } à { $upper }).
+projection-sentence = De { $today } aujourd’hui, environ { $value } seront suivis le { $ends } (95 tirages sur 100 : { $lower } à { $upper }).
 projection-figure = Patients suivis, avec bandes pour 80 et 95 tirages sur 100
 projection-figure-described = Une ligne à partir du nombre d’aujourd’hui sur { $years ->
     [one] { $years } an
    *[other] { $years } ans
-  }, avec des bandes qui s’élargissent et un trait pointillé pour l’hypothèse ; le tableau ci-dessous contient les valeurs.
+  }, avec des bandes qui s’élargissent et un trait pointillé pour l’hypothèse ; le tableau ci-dessous contient les valeurs.
 projection-caption = Patients suivis à la fin de chaque année
-projection-note = { $draws } tirages, germe { $seed } : le même germe donne les mêmes bandes.
-projection-method = Les patients d’aujourd’hui sont prolongés selon leur ancienneté, les nouveaux selon la survie depuis l’arrivée (Capocaccia & De Angelis 1997 ; Verdecchia et coll. 2002), mois par mois ; taux et effectifs sont retirés à chaque tirage. Au-delà de { $years } ans depuis le début, les derniers taux sont maintenus.
+projection-note = { $draws } tirages, germe { $seed } : le même germe donne les mêmes bandes.
+projection-method = Les patients d’aujourd’hui sont prolongés selon leur ancienneté, les nouveaux selon la survie depuis l’arrivée (Capocaccia & De Angelis 1997 ; Verdecchia et coll. 2002), mois par mois ; taux et effectifs sont retirés à chaque tirage. Au-delà de { $years } ans depuis le début, les derniers taux sont maintenus.
 
 what-if-title = Une hypothèse
 what-if-use = Montrer une hypothèse à côté de la situation actuelle
@@ -749,12 +749,12 @@ lever-from-year-hint = 1 est la première année après la date de clôture.
 what-if-sentence = Après { $years ->
     [one] { $years } an
    *[other] { $years } ans
-  }, par rapport à la situation actuelle : { $more } suivis (95 tirages sur 100 : { $lower } à { $upper }) ; sur toute la période { $deaths } décès et { $lost } perdus de vue.
+  }, par rapport à la situation actuelle : { $more } suivis (95 tirages sur 100 : { $lower } à { $upper }) ; sur toute la période { $deaths } décès et { $lost } perdus de vue.
 what-if-caption = Ce que l’hypothèse change sur { $years ->
     [one] { $years } an
    *[other] { $years } ans
   }
-what-if-note = On suppose un programme qui atteint ces pourcentages ; rien ne montre qu’il existe. Son propre coût n’est pas compté.
+what-if-note = On suppose un programme qui atteint ces pourcentages ; rien ne montre qu’il existe. Son propre coût n’est pas compté.
 difference-under_care = Suivis à la fin
 difference-newcomers = Nouveaux, en tout
 difference-deaths = Décès, en tout
@@ -763,7 +763,7 @@ difference-patient_years = Patients-années de suivi, en tout
 difference-visits = Consultations, en tout
 difference-medicine_units = Unités de médicament, en tout
 difference-cost = Coût, en tout
-what-if-method = Chaque pourcentage abaisse son taux à partir de l’année choisie ; les deux évolutions utilisent les mêmes nombres aléatoires, pour que le hasard ne brouille pas la différence.
+what-if-method = Chaque pourcentage abaisse son taux à partir de l’année choisie ; les deux évolutions utilisent les mêmes nombres aléatoires, pour que le hasard ne brouille pas la différence.
 
 resources-title = Ce que cela demande
 resources-type = Saisissez ce qu’un patient demande en une année de suivi.
@@ -782,34 +782,34 @@ caution-history_too_short = Le registre contient { $whole_years ->
     [0] aucune année complète
     [one] une année complète
    *[other] { $whole_years } années complètes
-  } d’arrivées ; il en faut { $needed } pour les prolonger. Saisissez plutôt un nombre.
-caution-newcomers_overdispersed = Les arrivées diffèrent d’une année à l’autre plus que le hasard ne l’explique (d’un facteur { NUMBER($dispersion, maximumFractionDigits: 1) }) ; les bandes sont élargies en conséquence.
-caution-newcomers_trend = Les arrivées ont changé d’environ { NUMBER($percent_per_year, maximumFractionDigits: 0) } % par an. La projection ne prolonge pas cette tendance : si elle doit continuer, saisissez le nombre attendu.
+  } d’arrivées ; il en faut { $needed } pour les prolonger. Saisissez plutôt un nombre.
+caution-newcomers_overdispersed = Les arrivées diffèrent d’une année à l’autre plus que le hasard ne l’explique (d’un facteur { NUMBER($dispersion, maximumFractionDigits: 1) }) ; les bandes sont élargies en conséquence.
+caution-newcomers_trend = Les arrivées ont changé d’environ { NUMBER($percent_per_year, maximumFractionDigits: 0) } % par an. La projection ne prolonge pas cette tendance : si elle doit continuer, saisissez le nombre attendu.
 caution-years_without_newcomers = { $count ->
     [one] Une année ({ $year }), personne n’a été inscrit
-   *[other] { $count } années (la première : { $year }), personne n’a été inscrit
+   *[other] { $count } années (la première : { $year }), personne n’a été inscrit
   }. Si l’inscription s’était arrêtée, la moyenne est trop basse.
 caution-old_cases_not_newcomers = { $count } patients étaient d’anciens cas à l’ouverture du registre et ne sont pas comptés comme nouveaux.
 caution-no_newcomers_lately = Personne n’a été inscrit depuis le { $last }, { $days } jours avant la clôture. Si l’inscription a du retard, la dernière année est trop basse.
-caution-retention_thin = Seulement { NUMBER($person_years, maximumFractionDigits: 0) } personnes-années et { $exits } sorties observées : les taux de sortie sont approximatifs.
-caution-no_exits_observed = Personne n’est sorti entre { $from_years } et { $to_years } ans depuis le début. Le taux y est pris égal à 0 ; il pourrait atteindre { NUMBER($upper, maximumFractionDigits: 2) } par an.
-caution-under_care_long_unseen = { $count } des patients suivis ({ $share }) ont été vus pour la dernière fois plus de { $days } jours avant la clôture. Certains sont peut-être perdus de vue : vérifiez-les, car ils gonflent la file active.
+caution-retention_thin = Seulement { NUMBER($person_years, maximumFractionDigits: 0) } personnes-années et { $exits } sorties observées : les taux de sortie sont approximatifs.
+caution-no_exits_observed = Personne n’est sorti entre { $from_years } et { $to_years } ans depuis le début. Le taux y est pris égal à 0 ; il pourrait atteindre { NUMBER($upper, maximumFractionDigits: 2) } par an.
+caution-under_care_long_unseen = { $count } des patients suivis ({ $share }) ont été vus pour la dernière fois plus de { $days } jours avant la clôture. Certains sont peut-être perdus de vue : vérifiez-les, car ils gonflent la file active.
 caution-horizon_beyond_history = { $years } ans d’avance dépassent les { $history_years } ans observés par le registre. Lisez la fin comme une esquisse.
 caution-hazard_held = À la fin, { $share } des patients suivis auront dépassé { $from_years } ans depuis le début, où les derniers taux observés sont simplement prolongés.
-refusal-nobody_under_care = Personne n’est suivi à la date de clôture : il n’y a personne à prolonger.
-refusal-no_person_time = Personne n’a été observé ne serait-ce qu’un jour : aucun taux ne peut être calculé.
+refusal-nobody_under_care = Personne n’est suivi à la date de clôture : il n’y a personne à prolonger.
+refusal-no_person_time = Personne n’a été observé ne serait-ce qu’un jour : aucun taux ne peut être calculé.
 refusal-start_after_closing = La ligne { $line } commence après la date de clôture.
 refusal-history_too_short = Le registre contient { $whole_years ->
     [0] aucune année complète
     [one] une année complète
    *[other] { $whole_years } années complètes
-  } d’arrivées ; il en faut { $needed } pour les prolonger. Choisissez « saisis » et saisissez un nombre.
+  } d’arrivées ; il en faut { $needed } pour les prolonger. Choisissez « saisis » et saisissez un nombre.
 
 ## From counts
 
 counts-title = À partir de totaux
 
-counts-lead = Pour qui dispose de totaux mais pas de liste. Saisissez ou collez des nombres ; il n’y a rien à ouvrir et les réponses suivent la saisie.
+counts-lead = Pour qui dispose de totaux mais pas de liste. Saisissez ou collez des nombres ; il n’y a rien à ouvrir et les réponses suivent la saisie.
 counts-example = Remplir avec des nombres inventés
 counts-clear = Effacer
 grid-cell = { $column }, ligne { $row }
@@ -829,31 +829,31 @@ counts-entering = Entrants au début
 counts-intervals = Les intervalles, dans l’ordre
 width-years = Longueur en années
 withdrawn-typed = Autres sorties
-counts-life-table-sentence = { $survival } ont traversé { $years } ans sans l’événement (intervalle à 95 % : { $interval }).
+counts-life-table-sentence = { $survival } ont traversé { $years } ans sans l’événement (intervalle à 95 % : { $interval }).
 
 counts-strata-title = Deux groupes, par strates
-counts-strata-lead = Pour chaque strate (tranche d’âge, stade, hôpital) : combien du groupe étudié ont connu l’événement, sur combien ; et de même pour le groupe de comparaison.
+counts-strata-lead = Pour chaque strate (tranche d’âge, stade, hôpital) : combien du groupe étudié ont connu l’événement, sur combien ; et de même pour le groupe de comparaison.
 counts-strata-empty = Saisissez au moins une ligne complète.
 counts-strata-grid = Les strates
 stratum = Strate
 typed-exposed = le groupe étudié
 typed-unexposed = le groupe de comparaison
-typed-exposed_events = Étudié : événements
-typed-exposed_total = Étudié : patients
-typed-unexposed_events = Comparaison : événements
-typed-unexposed_total = Comparaison : patients
+typed-exposed_events = Étudié : événements
+typed-exposed_total = Étudié : patients
+typed-unexposed_events = Comparaison : événements
+typed-unexposed_total = Comparaison : patients
 counts-strata-example-1 = Légère (inventé)
 counts-strata-example-2 = Sévère (inventé)
-strata-caption = Les deux groupes dans chaque strate (limites à 95 %)
+strata-caption = Les deux groupes dans chaque strate (limites à 95 %)
 risk-exposed = Risque, étudié
 odds-exposed = Cote, étudié
 risk-unexposed = Risque, comparaison
 odds-unexposed = Cote, comparaison
-risk-of = { $events } sur { $total } : { $risk }
-exact-note = Rapport des cotes exact { $odds } ; p exact { $p }, mi-p { $mid }.
-crude-and-pooled = Tout confondu, le rapport des risques est { $crude } ; à l’intérieur des strates, regroupé, il est { $pooled }. Si les deux diffèrent beaucoup, les strates diffèrent par plus que l’événement et le chiffre global trompe.
-strata-left-out = Hors des rapports car un groupe est vide, ou personne ou tout le monde a connu l’événement : { $strata }.
-strata-method = Limites du rapport des risques Katz (1978), du rapport des cotes Woolf (1955), de la différence Newcombe (1998) ; regroupement par Mantel & Haenszel (1959), variances de Robins, Breslow & Greenland (1986) et Greenland & Robins (1985) ; limites exactes conditionnelles aux marges.
+risk-of = { $events } sur { $total } : { $risk }
+exact-note = Rapport des cotes exact { $odds } ; p exact { $p }, mi-p { $mid }.
+crude-and-pooled = Tout confondu, le rapport des risques est { $crude } ; à l’intérieur des strates, regroupé, il est { $pooled }. Si les deux diffèrent beaucoup, les strates diffèrent par plus que l’événement et le chiffre global trompe.
+strata-left-out = Hors des rapports car un groupe est vide, ou personne ou tout le monde a connu l’événement : { $strata }.
+strata-method = Limites du rapport des risques Katz (1978), du rapport des cotes Woolf (1955), de la différence Newcombe (1998) ; regroupement par Mantel & Haenszel (1959), variances de Robins, Breslow & Greenland (1986) et Greenland & Robins (1985) ; limites exactes conditionnelles aux marges.
 
 counts-balance-title = Arrivées et sorties
 counts-balance-lead = Combien sont suivis aujourd’hui, combien arrivent et combien sortent chaque année.
@@ -869,30 +869,30 @@ balance-example-died = Décédés (inventé)
 balance-example-lost = Perdus de vue (inventé)
 balance-example-moved_away = Partis ailleurs (inventé)
 balance-sentence = De { $now } aujourd’hui à { $then } dans { $years } ans si le même nombre sort chaque année, ou { $rate } si c’est la même part. { $turnover } sortent pour 100 patients-années.
-balance-steady = Si rien ne changeait, le nombre se stabiliserait à { $steady } ; un patient reste { $duration } ans en moyenne.
+balance-steady = Si rien ne changeait, le nombre se stabiliserait à { $steady } ; un patient reste { $duration } ans en moyenne.
 balance-population-sentence = Prévalence { $prevalence } et nouveaux cas { $incidence } par an, chacun pour 100 000 habitants.
 balance-caption = Suivis dans les années à venir
 after-years = Après (années)
 balance-fixed = Même nombre de sorties
 balance-constant = Même part de sorties
-balance-method = P + t (nouveaux − sorties) pour la première, taux de sortie constant pour la seconde ; l’état stable est le nombre de nouveaux par an multiplié par la durée moyenne.
+balance-method = P + t (nouveaux − sorties) pour la première, taux de sortie constant pour la seconde ; l’état stable est le nombre de nouveaux par an multiplié par la durée moyenne.
 
 refusal-no_rows = Saisissez au moins une ligne.
 refusal-uneven_rows = Les lignes ne sont pas complètes.
 refusal-nobody_entered = Au moins un patient doit entrer.
-refusal-width_not_positive = Ligne { $row } : la longueur de l’intervalle doit dépasser 0.
+refusal-width_not_positive = Ligne { $row } : la longueur de l’intervalle doit dépasser 0.
 refusal-negative_count = Un nombre de patients ne peut pas être inférieur à 0.
-refusal-more_left_than_entered = Ligne { $row } : { $left } sortent, mais seuls { $entering } sont présents au début.
+refusal-more_left_than_entered = Ligne { $row } : { $left } sortent, mais seuls { $entering } sont présents au début.
 refusal-more_events_than_patients = Plus d’événements ({ $events }) que de patients ({ $total }).
 refusal-population_not_above_prevalent = La population ({ $population }) doit dépasser le nombre de patients suivis ({ $prevalent }).
-caution-balance_short_horizon = La première colonne vaut pour { $limit } ans au plus : davantage de patients, c’est aussi davantage de sorties. Lisez la seconde.
-caution-balance_paths_apart = À l’année { $year }, les deux colonnes diffèrent ({ $under_care } et { $at_constant_rate }) : lisez la seconde.
+caution-balance_short_horizon = La première colonne vaut pour { $limit } ans au plus : davantage de patients, c’est aussi davantage de sorties. Lisez la seconde.
+caution-balance_paths_apart = À l’année { $year }, les deux colonnes diffèrent ({ $under_care } et { $at_constant_rate }) : lisez la seconde.
 caution-balance_reaches_zero = Avec le même nombre de sorties chaque année, il ne resterait personne à l’année { $year }.
-caution-nobody_leaves = Personne ne sort : le nombre ne fait que croître et il n’y a pas d’état stable.
-caution-not_in_steady_state = { $new_per_year } arrivent et { $leaving_per_year } sortent chaque année : le nombre change, la prévalence n’est donc pas simplement l’incidence multipliée par la durée.
-caution-utilisation_at_or_above_one = { $places } places ne suffisent pas : { $needed } seraient occupées en moyenne.
+caution-nobody_leaves = Personne ne sort : le nombre ne fait que croître et il n’y a pas d’état stable.
+caution-not_in_steady_state = { $new_per_year } arrivent et { $leaving_per_year } sortent chaque année : le nombre change, la prévalence n’est donc pas simplement l’incidence multipliée par la durée.
+caution-utilisation_at_or_above_one = { $places } places ne suffisent pas : { $needed } seraient occupées en moyenne.
 
-refusal-utilisation_at_or_above_one = { $places } places ne suffisent pas : { $needed } seraient occupées en moyenne.
+refusal-utilisation_at_or_above_one = { $places } places ne suffisent pas : { $needed } seraient occupées en moyenne.
 
 ## Report
 
@@ -904,17 +904,17 @@ report-field-title = Titre
 report-field-hospital = Hôpital ou programme
 report-field-author = Préparé par
 report-field-date = Date
-report-date-hint = Telle qu’elle doit être imprimée ; cette page n’utilise jamais l’horloge de l’ordinateur.
+report-date-hint = Telle qu’elle doit être imprimée ; cette page n’utilise jamais l’horloge de l’ordinateur.
 report-pieces = Dans le rapport
 report-print = Imprimer
 report-save = Enregistrer en un fichier HTML
 report-untitled = Rapport de suivi
 report-no-byline = Hôpital, auteur et date non renseignés
-report-made-with = Calculé sur un seul ordinateur avec Vitalroll { $version } ; aucun dossier ne l’a quitté.
+report-made-with = Calculé sur un seul ordinateur avec Vitalroll { $version } ; aucun dossier ne l’a quitté.
 figure-number = Figure { $number }. { $title }
 table-number = Tableau { $number }. { $title }
 about-data = Les patients
-about-data-sentence = { $n } patients dont le suivi a commencé entre le { $first } et le { $last }, suivis jusqu’à la date de clôture du { $closing } : { $years } personnes-années au total.
+about-data-sentence = { $n } patients dont le suivi a commencé entre le { $first } et le { $last }, suivis jusqu’à la date de clôture du { $closing } : { $years } personnes-années au total.
 about-file = Fichier
 about-fingerprint = Empreinte du fichier (SHA-256)
 about-rows = Lignes du fichier
