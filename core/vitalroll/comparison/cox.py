@@ -128,18 +128,20 @@ def cox(
     # Delayed entry on the day of leaving is no time at risk.
     usable = ~((cohort.entry > 0) & (cohort.entry == cohort.exit))
     plan = design(cohort, choices, usable)
-    order = np.argsort(cohort.exit[plan.complete], kind="stable")
+    order = np.argsort(cohort.exit[plan.complete])
     entry, exit, event = (each[plan.complete][order] for each in (cohort.entry, cohort.exit, event_of_all))
     values = plan.values[order]
     events = int(event.sum())
     parameters = len(plan.columns)
     _check_events(plan.columns, values, event, parameters)
     scale = values.std(axis=0)
-    x = (values - values.mean(axis=0)) / scale
-    data = follow_up(entry, exit, event, ties)
-    fit = _maximise(data, x, plan.columns)
+    x = ((values - values.mean(axis=0)) / scale).T
+    data = follow_up(entry, exit, event, x, ties)
+    fit = _maximise(data, plan.columns)
     covariance = np.linalg.inv(fit.information)
-    proportional, whole = proportional_tests(data, x, fit.sums, fit.information, plan.columns)
+    proportional, whole = proportional_tests(data, fit.sums, fit.information, plan.columns)
+    # Equal covariates must give equal risks, whatever the rounding of the product.
+    risk = np.round(fit.coefficients @ x, 12)
     incomplete = int(np.count_nonzero(usable & ~plan.complete))
     return CoxFit(
         n=len(event),
@@ -158,7 +160,7 @@ def cox(
         ),
         tests=_tests(fit, parameters),
         log_likelihood=(fit.null_log_likelihood, fit.log_likelihood),
-        concordance=concordance(entry, exit, event, x @ fit.coefficients, confidence=confidence),
+        concordance=concordance(entry, exit, event, risk, confidence=confidence),
         proportional=proportional,
         proportional_global=whole,
         iterations=fit.iterations,
@@ -206,17 +208,17 @@ class _Maximum:
     iterations: int
 
 
-def _maximise(data: FollowUp, x: np.ndarray, columns: tuple[Column, ...]) -> _Maximum:
+def _maximise(data: FollowUp, columns: tuple[Column, ...]) -> _Maximum:
     """Climb by Newton's steps from 0, halving a step that would go down."""
-    coefficients = np.zeros(x.shape[1])
-    value, sums = _evaluate(data, x, coefficients)
-    start = value, score(data, x, sums), information(data, x, sums)
+    coefficients = np.zeros(len(columns))
+    value, sums = _evaluate(data, coefficients)
+    start = value, score(data, sums), information(data, sums)
     slope, curvature = start[1], start[2]
     for iteration in range(1, MOST_STEPS + 1):
         step = _newton_step(curvature, slope, coefficients, columns)
         decrement = float(slope @ step)
-        better, coefficients, sums = _climb(data, x, coefficients, step, value, sums)
-        slope, curvature = score(data, x, sums), information(data, x, sums)
+        better, coefficients, sums = _climb(data, coefficients, step, value, sums)
+        slope, curvature = score(data, sums), information(data, sums)
         _check_runaway(coefficients, columns)
         # The likelihood is known to about 1e-16 of its size; below that no step can be judged.
         settled = decrement <= max(CLOSE_ENOUGH, 1e-15 * abs(better))
@@ -226,10 +228,10 @@ def _maximise(data: FollowUp, x: np.ndarray, columns: tuple[Column, ...]) -> _Ma
     raise Refusal("no_convergence", steps=MOST_STEPS)
 
 
-def _evaluate(data: FollowUp, x: np.ndarray, coefficients: np.ndarray) -> tuple[float, RiskSums]:
-    eta = x @ coefficients
+def _evaluate(data: FollowUp, coefficients: np.ndarray) -> tuple[float, RiskSums]:
+    eta = coefficients @ data.x[1:]
     shift = float(eta.max())
-    sums = risk_sums(data, x, np.exp(eta - shift))
+    sums = risk_sums(data, np.exp(eta - shift))
     return log_likelihood(data, eta, sums, shift), sums
 
 
@@ -243,11 +245,11 @@ def _newton_step(
 
 
 def _climb(
-    data: FollowUp, x: np.ndarray, here: np.ndarray, step: np.ndarray, value: float, sums: RiskSums
+    data: FollowUp, here: np.ndarray, step: np.ndarray, value: float, sums: RiskSums
 ) -> tuple[float, np.ndarray, RiskSums]:
     for _ in range(MOST_HALVINGS):
         there = here + step
-        found, found_sums = _evaluate(data, x, there)
+        found, found_sums = _evaluate(data, there)
         if np.isfinite(found) and found >= value - 1e-12 * abs(value):
             return found, there, found_sums
         step = step / 2

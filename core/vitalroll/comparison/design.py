@@ -152,11 +152,12 @@ def _useful(
     """
     values = np.column_stack([data for _, data in made])
     centred = values - values.mean(axis=0)
-    length = np.sqrt(np.einsum("ij,ij->j", centred, centred))
-    size = np.abs(values).max(axis=0) * np.sqrt(len(values))
+    product = centred.T @ centred
+    length = np.sqrt(np.diag(product))
+    size = np.maximum(values.max(axis=0), -values.min(axis=0)) * np.sqrt(len(values))
     varies = length > _SAME * size
-    unit = centred / np.where(varies, length, 1)
-    product = unit.T @ unit
+    unit = np.where(varies, length, 1)
+    product = product / np.outer(unit, unit)
     kept: list[int] = []
     left_out = []
     for i, (column, _) in enumerate(made):

@@ -24,7 +24,7 @@ class ProportionalTest:
 
 
 def proportional_tests(
-    data: FollowUp, x: np.ndarray, sums: RiskSums, fitted_information: np.ndarray, columns: tuple[Column, ...]
+    data: FollowUp, sums: RiskSums, fitted_information: np.ndarray, columns: tuple[Column, ...]
 ) -> tuple[tuple[ProportionalTest, ...], Chi2Test]:
     """Test each term, and all at once, for a hazard ratio that changes with time.
 
@@ -33,8 +33,8 @@ def proportional_tests(
 
     Parameters
     ----------
-    data, x, sums
-        The model's follow-up, covariates and risk sums at the fitted coefficients.
+    data, sums
+        The model's follow-up and risk sums at the fitted coefficients.
     fitted_information : array, shape (p, p)
     columns : the terms
 
@@ -43,10 +43,10 @@ def proportional_tests(
     Grambsch & Therneau (1994) Biometrika 81:515-526, as a score test rather than their approximation.
     """
     g = _transformed_time(data)
-    weight = g - g.mean()
-    slope = score(data, x, sums, weight)
-    across = information(data, x, sums, weight)
-    own = information(data, x, sums, weight**2)
+    weight = g - g[data.at].mean()
+    slope = score(data, sums, weight)
+    across = information(data, sums, weight)
+    own = information(data, sums, weight**2)
     left = own - across @ np.linalg.solve(fitted_information, across)
     tests = []
     for i, column in enumerate(columns):
@@ -60,7 +60,7 @@ def proportional_tests(
 
 
 def _transformed_time(data: FollowUp) -> np.ndarray:
-    """Return 1 - S(t-) for each outcome."""
+    """Return 1 - S(t-) for each day of outcomes."""
     m = len(data.days)
     left = np.bincount(data.leaves, minlength=m + 1).astype(np.int64)
     at_risk = left[::-1].cumsum()[::-1][1:]
@@ -68,4 +68,4 @@ def _transformed_time(data: FollowUp) -> np.ndarray:
     events = np.bincount(data.at, minlength=m)
     survival = np.cumprod(1 - events / (at_risk - entered_later))
     before = np.concatenate(([1.0], survival[:-1]))
-    return (1 - before)[data.at]
+    return 1 - before

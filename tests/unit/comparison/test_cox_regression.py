@@ -9,6 +9,7 @@ import numpy as np
 import pytest
 from comparison_cohorts import DIED, cohort, random_cohort
 
+from vitalroll.comparison.concordance import concordance
 from vitalroll.comparison.cox import cox
 from vitalroll.comparison.design import Choice
 from vitalroll.comparison.rank_tests import rank_test
@@ -122,21 +123,24 @@ def test_splitting_follow_up_changes_nothing():
 
 
 @pytest.mark.parametrize("late", [False, True])
-def test_concordance_agrees_with_counting_pairs(late):
+@pytest.mark.parametrize("decimals", [0, 1, 9])
+def test_concordance_and_its_error_agree_with_counting_pairs(late, decimals):
+    """With many equal risks, with some and with none; the error from each patient's share in the pairs."""
     subject = random_cohort(11, 90, late=late)
-    keep = ~((subject.entry > 0) & (subject.entry == subject.exit))
-    subject = subject.having(keep)
-    fit = cox(subject, DIED, [Choice("group", reference="a")])
-    risk = subject.covariates["group"].codes * fit.terms[0].coefficient
+    subject = subject.having(~((subject.entry > 0) & (subject.entry == subject.exit)))
+    risk = np.round(subject.covariates["x0"].values, decimals)
     event = subject.outcome == 1
-    agree = pairs = 0.0
+    agree, pairs = np.zeros(len(subject)), np.zeros(len(subject))
     for i in np.flatnonzero(event):
         for j in range(len(subject)):
             later = subject.exit[j] > subject.exit[i] or (subject.exit[j] == subject.exit[i] and not event[j])
             if i != j and later and (subject.entry[j] < subject.exit[i] or subject.entry[j] == 0):
-                pairs += 1
-                agree += 1.0 if risk[i] > risk[j] else 0.5 if risk[i] == risk[j] else 0.0
-    assert fit.concordance.value == pytest.approx(agree / pairs, abs=1e-12)
+                pairs[[i, j]] += 1
+                agree[[i, j]] += 1.0 if risk[i] > risk[j] else 0.5 if risk[i] == risk[j] else 0.0
+    found = concordance(subject.entry, subject.exit, event, risk)
+    assert found.value == pytest.approx(agree.sum() / pairs.sum(), abs=1e-12)
+    influence = (agree - found.value * pairs) / (pairs.sum() / 2)
+    assert found.standard_error == pytest.approx(np.sqrt((influence**2).sum()), abs=1e-12)
 
 
 def test_error_of_concordance_is_that_of_leaving_each_patient_out():
