@@ -147,7 +147,13 @@ def plain_folder(folder: Path) -> Path:
     names: list[str] = []
     for name in STOCK:
         names += [each for each in [name, *_needed(lock, name)] if each not in names]
-    for file in ("pyodide.mjs", "pyodide.asm.mjs", "pyodide.asm.wasm", "python_stdlib.zip", "pyodide-lock.json"):
+    for file in (
+        "pyodide.mjs",
+        "pyodide.asm.mjs",
+        "pyodide.asm.wasm",
+        "python_stdlib.zip",
+        "pyodide-lock.json",
+    ):
         shutil.copy(RUNTIME / file, folder / file)
     for wheel in engine_wheels(RUNTIME, names):
         shutil.copy(wheel, folder / wheel.name)
