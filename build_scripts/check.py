@@ -18,13 +18,18 @@ def main():
     options = asked.parse_args()
     environment.enter("check")
 
-    from browsers import chromium
+    from browsers import chromium, firefox, virtual_screen, webkit
     from make_dist import WEB, build
     from node import node_and_npm
 
     rooms = options.only or ROOMS
     if "browser" in rooms:
+        # Found, or installed, or a plain word of what is missing, before anything takes long.
         chromium()
+        firefox()
+        webkit()
+        with virtual_screen():
+            pass
     build()
     node, _ = node_and_npm()
     steps = [

@@ -54,6 +54,8 @@ export function live(app, select, draw, attributes = {}) {
   }
 
   function redraw() {
+    // The box around this one may have been redrawn first, without it.
+    if (wasConnected && !box.isConnected) return;
     const { state } = app.store;
     const active = box.contains(document.activeElement) ? document.activeElement : null;
     const typed = active instanceof HTMLInputElement && active.type !== 'checkbox' ? active.value : null;
