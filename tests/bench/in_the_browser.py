@@ -108,7 +108,7 @@ def cox_in_the_page(address: str, folder: Path) -> None:
     measures = [column["id"] for column in source["columns"] if column["heading"].startswith("Measure")]
     roles = {column["id"]: column["role"] for column in source["columns"] if column["role"] != "none"}
     roles |= dict.fromkeys(measures, "group")
-    meanings = {"Died - disease": "died_of_disease", "Lost": "lost", "Transferred out": "transferred", "Under care": "under_care"}
+    meanings = {"Died - disease": "died_of_disease", "Lost": "lost", "Transferred out": "moved_away", "Under care": "under_care"}
     built = desk.answer("register.build", {"roles": roles, "meanings": meanings, "sexes": {"F": "female", "M": "male"},
                                            "date_orders": {}, "closing_date": CLOSING})  # fmt: skip
     assert "answer" in built, built

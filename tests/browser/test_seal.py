@@ -40,6 +40,9 @@ FROM_THE_PAGE = {
         "try { new WebSocket('${there}'.replace('http', 'ws')) } catch {}`])))"
     ),
     "service worker": "navigator.serviceWorker?.register(there + 'sw.js').catch(() => 0)",
+    "another window": "window.open(there + 'window')",
+    "another address": "location.href = there + 'moved?data'",
+    "a link": "const a = document.createElement('a'); a.href = there + 'link?data'; document.body.append(a); a.click()",
     "peer connection": "new RTCPeerConnection({ iceServers: [{ urls: 'stun:127.0.0.1:3478' }] })",
 }
 """Each way a page can ask for something, as a statement in which `there` is an address."""

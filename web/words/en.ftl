@@ -44,7 +44,6 @@ start-again = Start again
 engine-failure-network = The engine could not be fetched. Check the connection to where this page came from, then start again.
 engine-failure-integrity = A part of the engine arrived damaged or changed, so it was not used. Start again; if this repeats, tell whoever hosts this page.
 engine-failure-too_old = This browser is too old for the engine. Use a current Firefox, Chrome, Edge or Safari.
-engine-failure-framed = This page is shown inside another page and will not open registers there. Open it in a tab of its own.
 engine-failure-internal = The engine could not be started. Start again; if this repeats, try another current browser.
 megabytes = { $size } MB
 

@@ -44,7 +44,6 @@ start-again = Recommencer
 engine-failure-network = Le moteur n’a pas pu être chargé. Vérifiez la connexion vers l’endroit d’où vient cette page, puis recommencez.
 engine-failure-integrity = Une partie du moteur est arrivée abîmée ou modifiée et n’a pas été utilisée. Recommencez ; si cela se répète, prévenez la personne qui héberge cette page.
 engine-failure-too_old = Ce navigateur est trop ancien pour le moteur. Utilisez une version récente de Firefox, Chrome, Edge ou Safari.
-engine-failure-framed = Cette page est affichée dans une autre page et n’y ouvrira aucun registre. Ouvrez-la dans son propre onglet.
 engine-failure-internal = Le moteur n’a pas pu démarrer. Recommencez ; si cela se répète, essayez un autre navigateur récent.
 megabytes = { $size } Mo
 

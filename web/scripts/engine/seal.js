@@ -12,11 +12,22 @@ export function seal(document) {
   closeSideDoors();
 }
 
-/** What no policy of today closes: peer connections are taken away before a register can be opened. */
+/** What no policy of today closes: ways out that are taken away before a register can be opened. */
 function closeSideDoors() {
-  for (const name of ['RTCPeerConnection', 'webkitRTCPeerConnection', 'RTCDataChannel', 'WebTransport']) {
+  for (const name of ['RTCPeerConnection', 'webkitRTCPeerConnection', 'RTCDataChannel', 'WebTransport', 'open']) {
     if (name in globalThis) Object.defineProperty(globalThis, name, { value: undefined, writable: false, configurable: false });
   }
+  globalThis.navigation?.addEventListener('navigate', stayHere);
+}
+
+/** A page may move to an address that carries data away; only this page, saved files and a reload are let through. */
+function stayHere(event) {
+  const here = new URL(location.href);
+  const next = new URL(event.destination.url);
+  here.hash = '';
+  next.hash = '';
+  const harmless = next.href === here.href || event.downloadRequest !== null || event.navigationType === 'traverse';
+  if (!harmless && event.cancelable) event.preventDefault();
 }
 
 /**
