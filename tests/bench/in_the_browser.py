@@ -59,7 +59,9 @@ def register(rows: int, columns: int) -> str:
     stay = random.exponential(2500, rows).astype(int) + 1
     closing = np.datetime64(CLOSING)
     end = np.minimum(start + stay, closing)
-    ended = np.where(end < closing, random.choice(["Died - disease", "Lost", "Transferred out"], rows), "Under care")
+    ended = np.where(
+        end < closing, random.choice(["Died - disease", "Lost", "Transferred out"], rows), "Under care"
+    )
     frame = pd.DataFrame({
         "Reg no": np.arange(rows) + 1, "Sex": random.choice(["F", "M"], rows), "Age": random.integers(5, 70, rows),
         "Diagnosed": pd.Series(start).dt.strftime("%d/%m/%Y"), "Last contact": pd.Series(end).dt.strftime("%d/%m/%Y"),
@@ -108,7 +110,12 @@ def cox_in_the_page(address: str, folder: Path) -> None:
     measures = [column["id"] for column in source["columns"] if column["heading"].startswith("Measure")]
     roles = {column["id"]: column["role"] for column in source["columns"] if column["role"] != "none"}
     roles |= dict.fromkeys(measures, "group")
-    meanings = {"Died - disease": "died_of_disease", "Lost": "lost", "Transferred out": "moved_away", "Under care": "under_care"}
+    meanings = {
+        "Died - disease": "died_of_disease",
+        "Lost": "lost",
+        "Transferred out": "moved_away",
+        "Under care": "under_care",
+    }
     built = desk.answer("register.build", {"roles": roles, "meanings": meanings, "sexes": {"F": "female", "M": "male"},
                                            "date_orders": {}, "closing_date": CLOSING})  # fmt: skip
     assert "answer" in built, built
@@ -144,7 +151,9 @@ def cox_in_the_page(address: str, folder: Path) -> None:
         }""")
         page.get_by_label("Measure 10", exact=True).check()
         took = page.wait_for_function("() => window.took").json_value() / 1000
-    print(f"Cox, 100,000 x 10, in the page {took:.2f} s, {took / natively:.1f} of native ({natively:.2f} s); limit 6")
+    print(
+        f"Cox, 100,000 x 10, in the page {took:.2f} s, {took / natively:.1f} of native ({natively:.2f} s); limit 6"
+    )
 
 
 def main() -> None:
