@@ -11,6 +11,7 @@ from scipy.special import chdtrc, ndtr
 
 from vitalroll.comparison.concordance import concordance
 from vitalroll.comparison.design import Choice, Column, LeftOutCovariate, design
+from vitalroll.comparison.newton import Maximum, maximise
 from vitalroll.comparison.proportional import ProportionalTest, proportional_tests
 from vitalroll.comparison.risk_sums import (
     FollowUp,
@@ -33,14 +34,6 @@ FEW_PER_PARAMETER = 10
 TOO_FEW_PER_PARAMETER = 3
 NOT_PROPORTIONAL = 0.05
 """A test of proportional hazards below this says that the ratios change over time."""
-
-MOST_STEPS = 50
-MOST_HALVINGS = 30
-CLOSE_ENOUGH = 1e-18
-"""Newton's decrement at which to stop; convergence is quadratic, so the step after it is below round-off."""
-
-RUNAWAY = 12.0
-"""A coefficient this far from zero, per standard deviation, is on its way to infinity."""
 
 
 @dataclass(frozen=True)
@@ -196,74 +189,14 @@ def _check_events(
         raise Refusal("too_few_events", events=events, parameters=parameters)
 
 
-@dataclass(frozen=True)
-class _Maximum:
-    coefficients: np.ndarray
-    log_likelihood: float
-    null_log_likelihood: float
-    null_score: np.ndarray
-    null_information: np.ndarray
-    information: np.ndarray
-    sums: RiskSums
-    iterations: int
+def _maximise(data: FollowUp, columns: tuple[Column, ...]) -> Maximum[RiskSums]:
+    def evaluate(coefficients: np.ndarray) -> tuple[float, RiskSums]:
+        eta = coefficients @ data.x[1:]
+        shift = float(eta.max())
+        sums = risk_sums(data, np.exp(eta - shift))
+        return log_likelihood(data, eta, sums, shift), sums
 
-
-def _maximise(data: FollowUp, columns: tuple[Column, ...]) -> _Maximum:
-    """Climb by Newton's steps from 0, halving a step that would go down."""
-    coefficients = np.zeros(len(columns))
-    value, sums = _evaluate(data, coefficients)
-    start = value, score(data, sums), information(data, sums)
-    slope, curvature = start[1], start[2]
-    for iteration in range(1, MOST_STEPS + 1):
-        step = _newton_step(curvature, slope, coefficients, columns)
-        decrement = float(slope @ step)
-        better, coefficients, sums = _climb(data, coefficients, step, value, sums)
-        slope, curvature = score(data, sums), information(data, sums)
-        _check_runaway(coefficients, columns)
-        # The likelihood is known to about 1e-16 of its size; below that no step can be judged.
-        settled = decrement <= max(CLOSE_ENOUGH, 1e-15 * abs(better))
-        value = better
-        if settled:
-            return _Maximum(coefficients, value, *start, curvature, sums, iteration)
-    raise Refusal("no_convergence", steps=MOST_STEPS)
-
-
-def _evaluate(data: FollowUp, coefficients: np.ndarray) -> tuple[float, RiskSums]:
-    eta = coefficients @ data.x[1:]
-    shift = float(eta.max())
-    sums = risk_sums(data, np.exp(eta - shift))
-    return log_likelihood(data, eta, sums, shift), sums
-
-
-def _newton_step(
-    curvature: np.ndarray, slope: np.ndarray, coefficients: np.ndarray, columns: tuple[Column, ...]
-) -> np.ndarray:
-    try:
-        return np.linalg.solve(curvature, slope)
-    except np.linalg.LinAlgError:
-        raise _separation(coefficients, columns) from None
-
-
-def _climb(
-    data: FollowUp, here: np.ndarray, step: np.ndarray, value: float, sums: RiskSums
-) -> tuple[float, np.ndarray, RiskSums]:
-    for _ in range(MOST_HALVINGS):
-        there = here + step
-        found, found_sums = _evaluate(data, there)
-        if np.isfinite(found) and found >= value - 1e-12 * abs(value):
-            return found, there, found_sums
-        step = step / 2
-    return value, here, sums
-
-
-def _check_runaway(coefficients: np.ndarray, columns: tuple[Column, ...]) -> None:
-    if not np.isfinite(coefficients).all() or np.abs(coefficients).max() > RUNAWAY:
-        raise _separation(coefficients, columns)
-
-
-def _separation(coefficients: np.ndarray, columns: tuple[Column, ...]) -> Refusal:
-    column = columns[int(np.nanargmax(np.abs(np.nan_to_num(coefficients, nan=np.inf, posinf=np.inf))))]
-    return Refusal("separation", covariate=column.id, level=column.level)
+    return maximise(evaluate, lambda sums: (score(data, sums), information(data, sums)), columns)
 
 
 def _term(column: Column, coefficient: float, error: float, confidence: float) -> Term:
@@ -289,7 +222,7 @@ def _term(column: Column, coefficient: float, error: float, confidence: float) -
     )
 
 
-def _tests(fit: _Maximum, parameters: int) -> dict[str, Chi2Test]:
+def _tests(fit: Maximum[RiskSums], parameters: int) -> dict[str, Chi2Test]:
     statistics = {
         "likelihood_ratio": 2 * (fit.log_likelihood - fit.null_log_likelihood),
         "wald": float(fit.coefficients @ fit.information @ fit.coefficients),
