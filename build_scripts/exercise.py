@@ -79,6 +79,7 @@ def _comparisons(ask: Any, group: str) -> None:
     ask("compare.intervals", **pair)
     ask("compare.rank_test", group=group)
     ask("compare.cox", covariates=[{"id": group, "reference": "Mild"}, {"id": "age", "per": 10}])
+    ask("compare.subdistribution", covariates=[{"id": group}], interest=["died_of_disease"])
 
 
 def _counts(ask: Any) -> None:

@@ -127,6 +127,10 @@ def _compare(page: Page, native: Callable) -> None:
     for row, term in zip(rows, expected["terms"], strict=True):
         assert numbers(row[2])[0] == pytest.approx(term["coefficient"], abs=0.00051)
         assert numbers(row[4])[0] == pytest.approx(term["hazard_ratio"]["value"], rel=0.006)
+    competing = native("compare.subdistribution", {"interest": DEATHS, "covariates": covariates})
+    rows = table_rows(page, "Ratios with 95% limits")
+    for row, term in zip(rows, competing["fit"]["terms"], strict=True):
+        assert numbers(row[1])[0] == pytest.approx(term["hazard_ratio"]["value"], rel=0.006)
     pooled = native(
         "compare.intervals",
         {"interest": DEATHS, "group": native.group, "exposed": "Severe", "reference": "Mild"},

@@ -26,7 +26,7 @@ export function beginnings(language) {
     cohort: null,
     question: { interest: ['died_of_disease', 'died_of_other_cause', 'died_cause_unknown'], group: null },
     outcomes: { interval: 'log-log', step: 'year' },
-    compare: { exposed: null, reference: null, step: 'year', intervals: 5, weight: 'log_rank', covariates: [], ties: 'efron' },
+    compare: { exposed: null, reference: null, step: 'year', intervals: 5, weight: 'log_rank', covariates: [], ties: 'efron', competing: null },
     caseload: {
       years: 5, basis: 'history', perYear: null,
       resources: { visits: 0, medicine_units: 0, cost: 0 },

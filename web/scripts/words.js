@@ -77,7 +77,6 @@ function formats(language, say) {
     written({ style: 'percent', minimumFractionDigits: digits, maximumFractionDigits: digits }),
   );
   const decimals = [0, 1, 2, 3, 4].map(fixed);
-  const significant = written({ maximumSignificantDigits: 3 });
   const dayFormat = new Intl.DateTimeFormat(language, { dateStyle: 'long', timeZone: 'UTC' });
 
   const count = decimals[0];
@@ -86,8 +85,10 @@ function formats(language, say) {
   const signed = written({ minimumFractionDigits: 1, maximumFractionDigits: 1, signDisplay: 'exceptZero' });
   /** A difference of shares, in percentage points, with its sign. */
   const points = (difference) => (difference === null || difference === undefined ? '–' : signed(difference * 100));
-  /** A ratio keeps three significant digits, so that 0.043 and 12.6 are both readable. */
-  const ratio = (number) => significant(number);
+  /** A ratio has three significant digits, so that 0.043 and 12.6 are both readable, and 1.70 stands beside 5.46. */
+  const ratio = written({ minimumSignificantDigits: 3, maximumSignificantDigits: 3 });
+  /** An amount that somebody chose, as it was chosen. */
+  const amount = written({ maximumSignificantDigits: 6 });
   const day = (iso) => (iso ? dayFormat.format(new Date(`${iso}T00:00:00Z`)) : '–');
   const pValue = (p) => {
     if (p === null || p === undefined) return '–';
@@ -105,5 +106,5 @@ function formats(language, say) {
     return say('estimate', { value: write(value), lower: write(lower), upper: write(upper) });
   };
   const bytes = (size) => say('megabytes', { size: decimals[1](size / 1e6) });
-  return { count, decimal, percent, points, ratio, day, pValue, estimate, bytes };
+  return { count, decimal, percent, points, ratio, amount, day, pValue, estimate, bytes };
 }

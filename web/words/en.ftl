@@ -630,10 +630,6 @@ test-wald = Wald
 test-score = Score
 proportional = The hazard ratios may be taken as constant over time (score test of proportional hazards: chi-squared { $chi }, degrees of freedom { $df }, p { $p }).
 not-proportional = The hazard ratios change over time (score test of proportional hazards: chi-squared { $chi }, degrees of freedom { $df }, p { $p }): each is only an average, and the difference in survival above says more.
-cox-incomplete = { $incomplete ->
-    [one] One patient was left out because a covariate is missing.
-   *[other] { $incomplete } patients were left out because a covariate is missing.
-  }
 cox-left-out = Left out because they do not vary or repeat what others already say: { $covariates }.
 cox-method-efron = Cox (1972), ties by Efron (1977), Wald limits; proportional hazards by the score test of Grambsch & Therneau (1994).
 cox-method-breslow = Cox (1972), ties by Breslow (1974), Wald limits; proportional hazards by the score test of Grambsch & Therneau (1994).
@@ -673,6 +669,23 @@ refusal-too_few_events = { $events } outcomes are too few for { $parameters } co
 refusal-level_without_events = Nobody in “{ $level }” of { $covariate } met the outcome, so its hazard ratio has no end. Merge that category with another in the register, or leave the covariate out.
 refusal-separation = { $covariate } separates those with the outcome from the others completely, so its hazard ratio has no end. Merge categories, or leave it out.
 refusal-no_convergence = The estimates did not settle after { $steps } steps. Take fewer covariates into account, or look for one that nearly repeats another.
+
+subdistribution-title = When other endings come first
+subdistribution-competing = These rule the outcome out
+subdistribution-competing-hint = Endings after which it cannot come any more. The others only end observation.
+subdistribution-sentence-higher = { $term }: more had the outcome. The ratio of subdistribution hazards is { $ratio } (95% interval { $interval }), from { $events } outcomes among { $n } patients, of whom { $competing } left in a way that ruled it out.
+subdistribution-sentence-lower = { $term }: fewer had the outcome. The ratio of subdistribution hazards is { $ratio } (95% interval { $interval }), from { $events } outcomes among { $n } patients, of whom { $competing } left in a way that ruled it out.
+subdistribution-sentence-unclear = { $term }: no clear difference in how many had the outcome. The ratio of subdistribution hazards is { $ratio }, but anything in { $interval } fits these data ({ $events } outcomes among { $n } patients, of whom { $competing } left in a way that ruled it out).
+subdistribution-does-not-mean = This ratio tells in which direction the chance of the outcome moves, counting what comes first; it is not a ratio of chances. The cause-specific ratios tell what happens among those still under care. A group can seem safer here only because its patients leave in another way sooner: read the three columns together.
+subdistribution-caption = Ratios with 95% limits
+subdistribution-ratio = Subdistribution hazard ratio
+subdistribution-of-interest = Cause-specific hazard ratio
+subdistribution-of-competing = Cause-specific hazard ratio of what rules it out
+subdistribution-too-few-competing = Too few left in a way that rules the outcome out for a model of their own.
+subdistribution-method = Fine & Gray (1999), ties by Breslow, sandwich variance; weights for delayed entry by Geskus (2011). Cause-specific: Cox (1972), ties by Efron.
+caution-no_competing = Nobody left in a way that rules the outcome out, so the subdistribution hazard is the plain hazard.
+refusal-competing_is_interest = “{ $meaning }” cannot be the outcome and rule it out as well.
+refusal-weights_undefined = At some time nobody was under observation who could stand for those who came later, so the weights of this model are not defined. Leave out the delayed entries, or look at the cause-specific results.
 
 ## Caseload
 

@@ -630,10 +630,6 @@ test-wald = Wald
 test-score = Score
 proportional = Les rapports peuvent être tenus pour constants dans le temps (test du score des risques proportionnels : khi-deux { $chi }, degrés de liberté { $df }, p { $p }).
 not-proportional = Les rapports changent au cours du temps (test du score des risques proportionnels : khi-deux { $chi }, degrés de liberté { $df }, p { $p }) : chacun n’est qu’une moyenne, et la différence de survie ci-dessus en dit plus.
-cox-incomplete = { $incomplete ->
-    [one] Un patient a été laissé de côté car une covariable manque.
-   *[other] { $incomplete } patients ont été laissés de côté car une covariable manque.
-  }
 cox-left-out = Laissées de côté car elles ne varient pas ou répètent ce que d’autres disent déjà : { $covariates }.
 cox-method-efron = Cox (1972), ex æquo selon Efron (1977), limites de Wald ; risques proportionnels par le test du score de Grambsch & Therneau (1994).
 cox-method-breslow = Cox (1972), ex æquo selon Breslow (1974), limites de Wald ; risques proportionnels par le test du score de Grambsch & Therneau (1994).
@@ -673,6 +669,23 @@ refusal-too_few_events = { $events } événements ne suffisent pas pour { $param
 refusal-level_without_events = Personne dans « { $level } » de { $covariate } n’a connu l’événement : son rapport n’a pas de fin. Fusionnez cette catégorie avec une autre dans le registre, ou laissez la covariable de côté.
 refusal-separation = { $covariate } sépare complètement ceux qui ont connu l’événement des autres : son rapport n’a pas de fin. Fusionnez des catégories ou laissez-la de côté.
 refusal-no_convergence = Les estimations ne se sont pas stabilisées après { $steps } étapes. Prenez moins de covariables en compte, ou cherchez celle qui en répète presque une autre.
+
+subdistribution-title = Quand d’autres issues surviennent avant
+subdistribution-competing = Ces issues excluent l’événement
+subdistribution-competing-hint = Issues après lesquelles il ne peut plus survenir. Les autres mettent seulement fin à l’observation.
+subdistribution-sentence-higher = { $term } : davantage ont eu l’événement. Le rapport des risques instantanés de sous-distribution est de { $ratio } (intervalle à 95 % : { $interval }), d’après { $events } événements chez { $n } patients, dont { $competing } sont sortis d’une façon qui l’excluait.
+subdistribution-sentence-lower = { $term } : moins ont eu l’événement. Le rapport des risques instantanés de sous-distribution est de { $ratio } (intervalle à 95 % : { $interval }), d’après { $events } événements chez { $n } patients, dont { $competing } sont sortis d’une façon qui l’excluait.
+subdistribution-sentence-unclear = { $term } : pas de différence nette du nombre de ceux qui ont eu l’événement. Le rapport des risques instantanés de sous-distribution est de { $ratio }, mais toute valeur dans { $interval } est compatible avec ces données ({ $events } événements chez { $n } patients, dont { $competing } sont sortis d’une façon qui l’excluait).
+subdistribution-does-not-mean = Ce rapport indique dans quel sens évolue la probabilité de l’événement, compte tenu de ce qui survient avant ; ce n’est pas un rapport de probabilités. Les rapports propres à la cause disent ce qui arrive parmi ceux encore suivis. Un groupe peut sembler ici mieux protégé seulement parce que ses patients sortent plus tôt d’une autre façon : lisez les trois colonnes ensemble.
+subdistribution-caption = Rapports avec limites à 95 %
+subdistribution-ratio = Rapport des risques de sous-distribution
+subdistribution-of-interest = Rapport des risques propre à la cause
+subdistribution-of-competing = Rapport des risques propre à ce qui l’exclut
+subdistribution-too-few-competing = Trop peu sont sortis d’une façon qui exclut l’événement pour un modèle à part.
+subdistribution-method = Fine et Gray (1999), ex æquo selon Breslow, variance « sandwich » ; pondération des entrées tardives selon Geskus (2011). Propre à la cause : Cox (1972), ex æquo selon Efron.
+caution-no_competing = Personne n’est sorti d’une façon qui exclut l’événement : le risque de sous-distribution est le risque ordinaire.
+refusal-competing_is_interest = « { $meaning } » ne peut pas être à la fois l’événement et ce qui l’exclut.
+refusal-weights_undefined = À un certain moment, personne n’était observé qui puisse représenter ceux venus plus tard : les poids de ce modèle ne sont pas définis. Écartez les entrées tardives, ou regardez les résultats propres à la cause.
 
 ## Caseload
 

@@ -126,7 +126,7 @@ def cox(
     values = plan.values[order]
     events = int(event.sum())
     parameters = len(plan.columns)
-    _check_events(plan.columns, values, event, parameters)
+    check_events(plan.columns, values, event, parameters)
     scale = values.std(axis=0)
     x = ((values - values.mean(axis=0)) / scale).T
     data = follow_up(entry, exit, event, x, ties)
@@ -143,7 +143,7 @@ def cox(
         incomplete=incomplete,
         ties=ties,
         terms=tuple(
-            _term(
+            fitted_term(
                 column,
                 fit.coefficients[i] / scale[i],
                 float(np.sqrt(covariance[i, i])) / scale[i],
@@ -171,9 +171,8 @@ def _cautions(events: int, parameters: int, whole: Chi2Test, incomplete: int) ->
         yield Caution("covariate_missing", {"n": incomplete})
 
 
-def _check_events(
-    columns: tuple[Column, ...], values: np.ndarray, event: np.ndarray, parameters: int
-) -> None:
+def check_events(columns: tuple[Column, ...], values: np.ndarray, event: np.ndarray, parameters: int) -> None:
+    """Refuse what has too few outcomes, or a category without any, by the name of the column."""
     events = int(event.sum())
     if events == 0:
         raise Refusal("no_events_to_compare")
@@ -199,7 +198,8 @@ def _maximise(data: FollowUp, columns: tuple[Column, ...]) -> Maximum[RiskSums]:
     return maximise(evaluate, lambda sums: (score(data, sums), information(data, sums)), columns)
 
 
-def _term(column: Column, coefficient: float, error: float, confidence: float) -> Term:
+def fitted_term(column: Column, coefficient: float, error: float, confidence: float) -> Term:
+    """Return a coefficient with its test and its ratio."""
     z = coefficient / error
     margin = two_sided_z(confidence) * error
     ratio = Estimate(

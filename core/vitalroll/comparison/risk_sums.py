@@ -93,7 +93,7 @@ def follow_up(
         part=part,
         days=days,
         late=late[np.argsort(enters[late], kind="stable")],
-        own=_segment_sums(at, x[:, who], len(days)),
+        own=segment_sums(at, x[:, who], len(days)),
     )
 
 
@@ -119,10 +119,10 @@ def risk_sums(data: FollowUp, r: np.ndarray) -> RiskSums:
     """Sum r and r x over the risk set of each day."""
     weighted = data.x * r
     m = len(data.days)
-    at_risk = _from_day_on(data.leaves, weighted, m)
+    at_risk = from_day_on(data.leaves, weighted, m)
     if len(data.late):
-        at_risk = at_risk - _from_day_on(data.enters[data.late], weighted[:, data.late], m)
-    falling = _segment_sums(data.at, weighted[:, data.who], m)
+        at_risk = at_risk - from_day_on(data.enters[data.late], weighted[:, data.late], m)
+    falling = segment_sums(data.at, weighted[:, data.who], m)
     total = at_risk[0, data.at] - data.part * falling[0, data.at]
     w = 1 / total
     w_efron = w * data.part
@@ -136,13 +136,13 @@ def risk_sums(data: FollowUp, r: np.ndarray) -> RiskSums:
     )
 
 
-def _from_day_on(position: np.ndarray, columns: np.ndarray, m: int) -> np.ndarray:
+def from_day_on(position: np.ndarray, columns: np.ndarray, m: int) -> np.ndarray:
     """Return, for each day j of m, the sum of the columns whose (ascending) position is above j."""
-    per_position = _segment_sums(position, columns, m + 1)
+    per_position = segment_sums(position, columns, m + 1)
     return np.cumsum(per_position[:, ::-1], axis=1)[:, ::-1][:, 1:]
 
 
-def _segment_sums(sorted_position: np.ndarray, columns: np.ndarray, length: int) -> np.ndarray:
+def segment_sums(sorted_position: np.ndarray, columns: np.ndarray, length: int) -> np.ndarray:
     """Sum columns that share a position; positions ascend."""
     sums = np.zeros((len(columns), length))
     if len(sorted_position):

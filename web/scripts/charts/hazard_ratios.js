@@ -32,7 +32,7 @@ export function hazardRatios(terms, { width, words }) {
         y: 'row', text: 'label', frameAnchor: 'left', textAnchor: 'start', dy: -TEXT_SIZE - 4, fill: INK, fontWeight: 600,
         stroke: 'white', strokeWidth: 6,
       }),
-      Plot.axisX({ ticks: ratioTicks(least, greatest), tickFormat: (value) => words.ratio(value), tickSize: 4 }),
+      Plot.axisX({ ticks: ratioTicks(least, greatest), tickFormat: (value) => words.amount(value), tickSize: 4 }),
       Plot.text([words.say('axis-hazard-ratio')], { frameAnchor: 'bottom', dy: 38, fill: SOFT_INK }),
     ],
   });

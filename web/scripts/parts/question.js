@@ -5,7 +5,7 @@ import { live } from './live.js';
 import { covariateName } from './said.js';
 
 /** Endings a person can be interested in: all but being under care. */
-const ENDINGS = ['died_of_disease', 'died_of_other_cause', 'died_cause_unknown', 'recovered', 'moved_away', 'lost', 'stopped'];
+export const ENDINGS = ['died_of_disease', 'died_of_other_cause', 'died_cause_unknown', 'recovered', 'moved_away', 'lost', 'stopped'];
 
 /**
  * @param {import('../app.js').App} app

@@ -4,6 +4,7 @@ import { h } from '../parts/element.js';
 import { live } from '../parts/live.js';
 import { noRegister, questionChoices } from '../parts/question.js';
 import { levelName } from '../parts/said.js';
+import { competingBlock } from './compare/competing.js';
 import { coxBlock } from './compare/cox.js';
 import { differenceBlock } from './compare/difference.js';
 import { intervalsBlock } from './compare/intervals.js';
@@ -24,6 +25,7 @@ export function comparePlace(app) {
       rankTestBlock(app),
       intervalsBlock(app),
       coxBlock(app),
+      competingBlock(app),
     ];
   });
 }

@@ -33,7 +33,6 @@ function drawCox(app, answer) {
     termsTable(app, terms),
     fitTable(app, answer),
     proportionalNote(app, answer),
-    answer.incomplete > 0 ? h('p', { class: 'note' }, say('cox-incomplete', { incomplete: answer.incomplete })) : null,
     answer.left_out.length
       ? h('p', { class: 'note' }, say('cox-left-out', { covariates: answer.left_out.map(({ id }) => covariateName(app, id)) }))
       : null,
@@ -43,11 +42,11 @@ function drawCox(app, answer) {
 }
 
 /** "Severity: severe against mild" or "Age at start, per 10". */
-function termLabel(app, { id, level, reference, per }) {
-  const { say, ratio } = app.words;
+export function termLabel(app, { id, level, reference, per }) {
+  const { say, amount } = app.words;
   const covariate = covariateName(app, id);
   return level === null
-    ? say('cox-term-number', { covariate, per: ratio(per) })
+    ? say('cox-term-number', { covariate, per: amount(per) })
     : say('cox-term-level', { covariate, level: levelName(app, id, level), reference: levelName(app, id, reference) });
 }
 
