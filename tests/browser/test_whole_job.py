@@ -7,7 +7,7 @@ from collections.abc import Callable
 from pathlib import Path
 
 import pytest
-from playwright.sync_api import Download, Page
+from playwright.sync_api import Download, Page, expect
 
 from demo_register import demo_register
 from exercise import BY_HEADING as GROUP
@@ -226,4 +226,4 @@ def test_undo_takes_back_the_last_choice(page: Page) -> None:
     go(page, "Outcomes")
     page.locator("#outcomes-step").select_option("quarter")
     page.locator("#undo").click()
-    assert page.locator("#outcomes-step").input_value() == "year"
+    expect(page.locator("#outcomes-step")).to_have_value("year")
