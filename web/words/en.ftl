@@ -175,7 +175,7 @@ rows = Rows
 columns-title = Which column is what
 columns-lead = The choices below are proposals. Correct what is wrong; everything after follows.
 columns-caption = Columns and their use
-columns-dropped = Columns marked “not used” are dropped before anything is worked out, and so is the patient number.
+columns-dropped = Columns marked “not used” are dropped before anything is worked out, and so are patient numbers and names, once they have been compared.
 column-heading = Column
 column-looks = What stands in it
 column-role = Use
@@ -245,6 +245,165 @@ changed-caption = Changes, by reason
 changed-lines-caption = Rows changed, with their line in the file
 dropped-columns = Dropped before analysis: { $columns }.
 next = Now:
+findings-title = What may be wrong
+findings-empty = Findings are shown once the register is understood.
+findings-none = None of the checks found anything.
+findings-sentence = The checks found { $n ->
+    [one] one thing
+   *[other] { $n } things
+  } to look at; a repair is proposed for { $repairs }.
+findings-sentence-untouched = Nothing has been repaired: every result uses the register as it was read.
+findings-sentence-accepted = With { $accepted ->
+    [one] one repair
+   *[other] { $accepted } repairs
+  } accepted ({ $cells ->
+    [one] one change
+   *[other] { $cells } changes
+  }), there are { $n } patients instead of { $before }, { $deaths } deaths instead of { $deathsBefore }, and survival at { $years } years is { $survival } instead of { $survivalBefore }.
+findings-caption = What the checks found, and the repairs that could be made
+findings-method = Each check looks at the register as it was written; a repair is made only when it is accepted, in the order of this table, and what one has changed no later one changes again. The effect is worked out by building the cohort twice, with and without the repair, all other accepted repairs kept: patients, deaths of any cause, patients lost, and product-limit survival (Kaplan & Meier 1958) at { $years } years. Names are compared by the number of slips between them (Damerau 1964), neighbours in alphabetical order with the same birth date or start (Hernández & Stolfo 1995), and are then dropped.
+finding = Finding
+finding-lines = { $n ->
+    [one] Line { $lines }
+   *[other] Lines { $lines }
+  }
+repair = Proposed repair
+decision = Decision
+change = Change
+severity-grave = (grave)
+severity-doubtful = (doubtful)
+severity-slight = (slight)
+repair-accept = make this repair
+repair-accept-of = Accept the repair: { $finding }
+repair-accept-row = Repair line { $line }
+repair-accepted = accepted
+repair-not-accepted = not accepted
+repair-none = none: look it up in the records
+effect-n = Patients { $before } → { $after }.
+effect-events = Deaths { $before } → { $after }.
+effect-lost = Lost { $before } → { $after }.
+effect-survival = Survival at { $years } years { $before } → { $after }.
+effect-nothing = It changes neither the number of patients, deaths or losses, nor survival at five years.
+effect-overruled = { $n ->
+    [one] One row was
+   *[other] { $n } rows were
+  } already changed by a repair above.
+effects-summary = The figures with and without each repair
+effects-caption = The headline result with and without each repair
+effects-n-without = Patients without it
+effects-n-with = Patients with it
+effects-events-without = Deaths without it
+effects-events-with = Deaths with it
+effects-lost-without = Lost without it
+effects-lost-with = Lost with it
+effects-survival-without = Survival at { $years } years without it
+effects-survival-with = Survival at { $years } years with it
+row-by-row = Row by row: { $finding } ({ $n })
+row-by-row-hint = Accept the repair above first; then rows can be left as they are one by one.
+row-by-row-caption = { $finding }: each row
+row-by-row-first = The first { $listed } of { $n } rows are listed; the decision above counts for all.
+corrections-caption = Corrections made, to be taken back to the record room
+corrections-none = No correction was made.
+correction-what = What
+correction-before = Written
+correction-after = Read as
+change-of-start = start
+change-of-end = end of follow-up
+change-of-outcome = how it ended
+change-of-birth = birth date
+change-of-same_as = patient
+change-of-number = patient number
+change-to = { $what }: { $before } → { $after }
+change-same_as = line { $line } is the patient of line { $after }
+change-number = counts as a patient of its own
+change-on-line = line { $line }: { $change }
+on-line = line { $line }
+nothing-written = (not recorded)
+caution-corrections_shortened = { $listed } of { $n } corrections are listed; all are made.
+
+finding-slipped_sideways-short = Cells slipped sideways
+finding-slipped_sideways = The cells stand one column beside their own.
+repair-read_beside = read the row from where its cells stand
+finding-day_and_month_changed_over-short = Day and month changed over
+finding-day_and_month_changed_over = The dates contradict each other as they stand, and fit when day and month are changed over in one of them.
+repair-change_over = change day and month over
+finding-ends_before_start-short = Ends before it starts
+finding-ends_before_start = The end lies before the start, so the row is set aside.
+repair-year_later = where the end is early in a year, take the year after: the old year was perhaps written on
+finding-far_after_closing-short = Far after the closing date
+finding-far_after_closing = A date lies more than a year after the closing date: a mistyped year, or another calendar.
+finding-born_in_wrong_century-short = Born in the wrong century
+finding-born_in_wrong_century = A birth year with two digits was read as lying after the start.
+repair-century_back = take a hundred years off the birth date
+finding-no_such_day-short = No such day
+finding-no_such_day = The calendar has no such day, so the row is set aside.
+repair-last_of_month = take the last day of that month
+finding-death_date_but_alive-short = A date of death, but not “died”
+finding-death_date_but_alive = A date of death is written, and how it ended is something else.
+repair-count_as_died = count as died, cause unknown, on that date
+finding-contact_after_death-short = Contact after death
+finding-contact_after_death = The last contact is later than the date of death; follow-up runs to the later of the two.
+repair-end_at_death = end follow-up on the date of death
+finding-died_without_date-short = Died, with no date
+finding-died_without_date = Somebody died and no date is written, so the row is set aside and a death is not counted: survival looks better than it is.
+finding-death_dated_by_contact-short = Death dated by the last contact
+finding-death_dated_by_contact = The date of death is blank, and the death counts on the day of the last contact, which came before it.
+repair-midway = place the death midway between last contact and closing date
+finding-transfer_as_lost-short = Transfers among the lost
+finding-transfer_as_lost = What is written speaks of a transfer, and was taken for lost.
+repair-count_as_moved = count as moved away
+finding-unseen_for_long-short = Under care, but long unseen
+finding-unseen_for_long = Counted as under care, and not seen for more than { $months } months before the closing date.
+repair-count_as_lost = count as lost to follow-up on the day last seen
+finding-closing_date_as_contact-short = Closing date copied as last contact
+finding-closing_date_as_contact = { $share } of those who did not die were last seen on the very closing date. A list was perhaps filled in from a desk, and losses are hidden.
+finding-same_number-short = One patient in several rows
+finding-same_number = { $patients ->
+    [one] One patient number stands
+   *[other] { $patients } patient numbers stand
+  } on several rows; the first that can be used counts, the others are set aside.
+repair-make_one = make one row: the earliest start, and the latest end with how it ended; a death goes before all else
+finding-one_number_two_people-short = One number, two people
+finding-one_number_two_people = { $numbers ->
+    [one] One patient number stands
+   *[other] { $numbers } patient numbers stand
+  } on rows with different sex or birth date; only the first of them counts.
+repair-count_each = count each row as a patient of its own
+finding-likely_same_person-short = Probably one person
+finding-likely_same_person = { $patients ->
+    [one] One person seems
+   *[other] { $patients } persons seem
+  } to stand here under different numbers: name, birth date, sex or start agree as far as they are known.
+finding-more_cells_than_columns-short = More cells than columns
+finding-more_cells_than_columns = A separator stands inside a cell, so nobody can say which cell is which; the rows are set aside.
+finding-age_against_birth-short = Age against birth date
+finding-age_against_birth = The written age and the date of birth are more than a year apart; age is worked out from the date of birth.
+repair-written_age = let the written age count
+finding-months_without_start-short = Months without newcomers
+finding-months_without_start = In { $n ->
+    [one] one month
+   *[other] { $n } months
+  } nobody starts ({ $months }). Were pages lost, or was the clinic closed?
+finding-sex_not_recorded-short = Sex not recorded
+finding-sex_not_recorded = The sex is blank, or a value that was given no meaning.
+finding-died_on_first_day-short = Died on the first day
+finding-died_on_first_day = The death is on the day of the start: perhaps the disease was only found at death.
+finding-heaped_starts-short = Starts heaped on two days
+finding-heaped_starts = { $share } of starts are on the 1st or the 15th of a month, where 7 % would be expected: the day was often not known.
+finding-heaped_ends-short = Ends heaped on two days
+finding-heaped_ends = { $share } of ends are on the 1st or the 15th of a month, where 7 % would be expected: the day was often not known.
+finding-two_digit_years-short = Years with two digits
+finding-two_digit_years = Each was taken as lying between { $first } and { $last }.
+finding-totals_among_rows-short = Totals among the patients
+finding-totals_among_rows = Rows with totals are no patients and are set aside.
+finding-headings_repeated-short = Headings repeated
+finding-headings_repeated = The headings stand again among the patients and are set aside.
+
+set-aside-same_patient = The same patient stands on line { $first_line }; the rows were made one.
+set-aside-same_patient-short = Made one with another row
+role-name = name: only to find patients twice
+role-death_date = date of death
+
 register-other-title = Another register
 forget = Forget everything
 forget-meaning = Drops the register and every choice made about it from memory.

@@ -175,7 +175,7 @@ rows = Lignes
 columns-title = À quoi sert chaque colonne
 columns-lead = Les choix ci-dessous sont des propositions. Corrigez ce qui est faux ; tout le reste en découle.
 columns-caption = Les colonnes et leur usage
-columns-dropped = Les colonnes « non utilisées » sont abandonnées avant tout calcul, de même que le numéro de patient.
+columns-dropped = Les colonnes « non utilisées » sont abandonnées avant tout calcul, de même que les numéros et les noms des patients, une fois comparés.
 column-heading = Colonne
 column-looks = Ce qu’elle contient
 column-role = Usage
@@ -245,6 +245,165 @@ changed-caption = Modifications, par raison
 changed-lines-caption = Lignes modifiées, avec leur numéro dans le fichier
 dropped-columns = Abandonnées avant l’analyse : { $columns }.
 next = Ensuite :
+findings-title = Ce qui peut être faux
+findings-empty = Les constats s’affichent dès que le registre est compris.
+findings-none = Aucun contrôle n’a rien trouvé.
+findings-sentence = Les contrôles ont trouvé { $n ->
+    [one] un point
+   *[other] { $n } points
+  } à examiner ; une correction est proposée pour { $repairs }.
+findings-sentence-untouched = Rien n’a été corrigé : tous les résultats utilisent le registre tel qu’il a été lu.
+findings-sentence-accepted = Avec { $accepted ->
+    [one] une correction acceptée
+   *[other] { $accepted } corrections acceptées
+  } ({ $cells ->
+    [one] un changement
+   *[other] { $cells } changements
+  }), il y a { $n } patients au lieu de { $before }, { $deaths } décès au lieu de { $deathsBefore }, et la survie à { $years } ans est de { $survival } au lieu de { $survivalBefore }.
+findings-caption = Ce que les contrôles ont trouvé, et les corrections possibles
+findings-method = Chaque contrôle examine le registre tel qu’il est écrit ; une correction n’est faite que si elle est acceptée, dans l’ordre de ce tableau, et ce que l’une a changé, aucune autre ne le change plus. L’effet se calcule en construisant la cohorte deux fois, avec et sans la correction, toutes les autres corrections acceptées étant gardées : patients, décès de toute cause, perdus de vue et survie à { $years } ans par la méthode produit-limite (Kaplan & Meier 1958). Les noms sont comparés par le nombre de fautes qui les séparent (Damerau 1964), entre voisins dans l’ordre alphabétique de même date de naissance ou de même début (Hernández & Stolfo 1995), puis abandonnés.
+finding = Constat
+finding-lines = { $n ->
+    [one] Ligne { $lines }
+   *[other] Lignes { $lines }
+  }
+repair = Correction proposée
+decision = Décision
+change = Changement
+severity-grave = (grave)
+severity-doubtful = (douteux)
+severity-slight = (léger)
+repair-accept = faire cette correction
+repair-accept-of = Accepter la correction : { $finding }
+repair-accept-row = Corriger la ligne { $line }
+repair-accepted = acceptée
+repair-not-accepted = non acceptée
+repair-none = aucune : à vérifier dans les dossiers
+effect-n = Patients { $before } → { $after }.
+effect-events = Décès { $before } → { $after }.
+effect-lost = Perdus de vue { $before } → { $after }.
+effect-survival = Survie à { $years } ans { $before } → { $after }.
+effect-nothing = Elle ne change ni le nombre de patients, de décès ou de perdus de vue, ni la survie à cinq ans.
+effect-overruled = { $n ->
+    [one] Une ligne avait
+   *[other] { $n } lignes avaient
+  } déjà été changées par une correction plus haut.
+effects-summary = Les chiffres avec et sans chaque correction
+effects-caption = Le résultat principal avec et sans chaque correction
+effects-n-without = Patients sans elle
+effects-n-with = Patients avec elle
+effects-events-without = Décès sans elle
+effects-events-with = Décès avec elle
+effects-lost-without = Perdus de vue sans elle
+effects-lost-with = Perdus de vue avec elle
+effects-survival-without = Survie à { $years } ans sans elle
+effects-survival-with = Survie à { $years } ans avec elle
+row-by-row = Ligne par ligne : { $finding } ({ $n })
+row-by-row-hint = Acceptez d’abord la correction ci-dessus ; chaque ligne pourra ensuite être laissée telle quelle.
+row-by-row-caption = { $finding } : chaque ligne
+row-by-row-first = Les { $listed } premières lignes sur { $n } sont données ; la décision ci-dessus vaut pour toutes.
+corrections-caption = Corrections faites, à rapporter aux archives
+corrections-none = Aucune correction n’a été faite.
+correction-what = Quoi
+correction-before = Écrit
+correction-after = Lu comme
+change-of-start = début
+change-of-end = fin du suivi
+change-of-outcome = issue
+change-of-birth = date de naissance
+change-of-same_as = patient
+change-of-number = numéro de patient
+change-to = { $what } : { $before } → { $after }
+change-same_as = la ligne { $line } est le patient de la ligne { $after }
+change-number = compte comme un patient à part
+change-on-line = ligne { $line } : { $change }
+on-line = ligne { $line }
+nothing-written = (non renseigné)
+caution-corrections_shortened = { $listed } corrections sur { $n } sont données ; toutes sont faites.
+
+finding-slipped_sideways-short = Cellules décalées
+finding-slipped_sideways = Les cellules se trouvent une colonne à côté de la leur.
+repair-read_beside = lire la ligne là où ses cellules se trouvent
+finding-day_and_month_changed_over-short = Jour et mois intervertis
+finding-day_and_month_changed_over = Les dates se contredisent telles quelles, et s’accordent si le jour et le mois de l’une sont intervertis.
+repair-change_over = intervertir le jour et le mois
+finding-ends_before_start-short = Fin avant le début
+finding-ends_before_start = La fin précède le début ; la ligne est mise de côté.
+repair-year_later = si la fin tombe en début d’année, prendre l’année suivante : on a peut-être continué d’écrire l’ancienne
+finding-far_after_closing-short = Loin après la date de clôture
+finding-far_after_closing = Une date tombe plus d’un an après la date de clôture : année mal écrite, ou autre calendrier.
+finding-born_in_wrong_century-short = Siècle de naissance faux
+finding-born_in_wrong_century = Une année de naissance à deux chiffres a été lue comme postérieure au début.
+repair-century_back = reculer la date de naissance de cent ans
+finding-no_such_day-short = Jour inexistant
+finding-no_such_day = Ce jour n’existe pas dans le calendrier ; la ligne est mise de côté.
+repair-last_of_month = prendre le dernier jour de ce mois
+finding-death_date_but_alive-short = Une date de décès, mais pas « décédé »
+finding-death_date_but_alive = Une date de décès est écrite, et l’issue dit autre chose.
+repair-count_as_died = compter comme décédé, cause inconnue, à cette date
+finding-contact_after_death-short = Contact après le décès
+finding-contact_after_death = Le dernier contact est postérieur à la date de décès ; le suivi va jusqu’à la plus tardive des deux.
+repair-end_at_death = terminer le suivi à la date de décès
+finding-died_without_date-short = Décès sans date
+finding-died_without_date = Un décès est noté sans aucune date ; la ligne est mise de côté et le décès n’est pas compté : la survie paraît meilleure qu’elle n’est.
+finding-death_dated_by_contact-short = Décès daté du dernier contact
+finding-death_dated_by_contact = La date de décès est vide, et le décès compte au jour du dernier contact, qui l’a précédé.
+repair-midway = placer le décès à mi-chemin entre le dernier contact et la date de clôture
+finding-transfer_as_lost-short = Transferts parmi les perdus de vue
+finding-transfer_as_lost = Ce qui est écrit parle d’un transfert, et a été pris pour une perte de vue.
+repair-count_as_moved = compter comme transféré
+finding-unseen_for_long-short = En suivi, mais pas vu depuis longtemps
+finding-unseen_for_long = Compté comme en suivi, et pas vu pendant plus de { $months } mois avant la date de clôture.
+repair-count_as_lost = compter comme perdu de vue au jour du dernier contact
+finding-closing_date_as_contact-short = Date de clôture recopiée comme dernier contact
+finding-closing_date_as_contact = { $share } de ceux qui ne sont pas décédés ont été vus pour la dernière fois le jour même de la clôture. Une liste a peut-être été remplie au bureau, et des pertes sont cachées.
+finding-same_number-short = Un patient sur plusieurs lignes
+finding-same_number = { $patients ->
+    [one] Un numéro de patient figure
+   *[other] { $patients } numéros de patient figurent
+  } sur plusieurs lignes ; la première utilisable compte, les autres sont mises de côté.
+repair-make_one = en faire une ligne : le début le plus précoce, et la fin la plus tardive avec son issue ; un décès prime sur tout
+finding-one_number_two_people-short = Un numéro, deux personnes
+finding-one_number_two_people = { $numbers ->
+    [one] Un numéro de patient figure
+   *[other] { $numbers } numéros de patient figurent
+  } sur des lignes de sexe ou de date de naissance différents ; seule la première compte.
+repair-count_each = compter chaque ligne comme un patient à part
+finding-likely_same_person-short = Probablement une seule personne
+finding-likely_same_person = { $patients ->
+    [one] Une personne semble
+   *[other] { $patients } personnes semblent
+  } figurer sous des numéros différents : nom, date de naissance, sexe ou début s’accordent pour autant qu’on les connaisse.
+finding-more_cells_than_columns-short = Plus de cellules que de colonnes
+finding-more_cells_than_columns = Un séparateur se trouve dans une cellule, et nul ne sait quelle cellule est laquelle ; les lignes sont mises de côté.
+finding-age_against_birth-short = Âge contre date de naissance
+finding-age_against_birth = L’âge écrit et la date de naissance diffèrent de plus d’un an ; l’âge est calculé d’après la date de naissance.
+repair-written_age = faire compter l’âge écrit
+finding-months_without_start-short = Mois sans nouveaux patients
+finding-months_without_start = Pendant { $n ->
+    [one] un mois
+   *[other] { $n } mois
+  }, personne ne commence ({ $months }). Des pages sont-elles perdues, ou la consultation était-elle fermée ?
+finding-sex_not_recorded-short = Sexe non renseigné
+finding-sex_not_recorded = Le sexe est vide, ou une valeur à laquelle aucun sens n’a été donné.
+finding-died_on_first_day-short = Décédé le premier jour
+finding-died_on_first_day = Le décès tombe le jour du début : la maladie n’a peut-être été trouvée qu’au décès.
+finding-heaped_starts-short = Débuts entassés sur deux jours
+finding-heaped_starts = { $share } des débuts tombent le 1er ou le 15 d’un mois, alors qu’on attendrait 7 % : le jour était souvent inconnu.
+finding-heaped_ends-short = Fins entassées sur deux jours
+finding-heaped_ends = { $share } des fins tombent le 1er ou le 15 d’un mois, alors qu’on attendrait 7 % : le jour était souvent inconnu.
+finding-two_digit_years-short = Années à deux chiffres
+finding-two_digit_years = Chacune a été prise entre { $first } et { $last }.
+finding-totals_among_rows-short = Totaux parmi les patients
+finding-totals_among_rows = Les lignes de totaux ne sont pas des patients et sont mises de côté.
+finding-headings_repeated-short = En-têtes répétés
+finding-headings_repeated = Les en-têtes figurent à nouveau parmi les patients et sont mis de côté.
+
+set-aside-same_patient = Le même patient figure à la ligne { $first_line } ; les lignes n’en font plus qu’une.
+set-aside-same_patient-short = Réunie avec une autre ligne
+role-name = nom : seulement pour trouver les doublons
+role-death_date = date de décès
+
 register-other-title = Un autre registre
 forget = Tout oublier
 forget-meaning = Retire de la mémoire le registre et tous les choix faits à son sujet.

@@ -55,7 +55,10 @@ class ValuesRequest:
 
 @dataclass(frozen=True)
 class BuildRequest:
-    """Fields of ``register.build``."""
+    """Fields of ``register.build``, ``register.findings`` and all tasks that look at rows once more.
+
+    ``repairs`` names the findings whose repair is accepted, each with the lines for which it is not.
+    """
 
     roles: dict[str, str]
     meanings: dict[str, str]
@@ -63,6 +66,8 @@ class BuildRequest:
     blank_meaning: str | None = None
     sexes: dict[str, str] = field(default_factory=dict)
     date_orders: dict[str, str] = field(default_factory=dict)
+    repairs: dict[str, tuple[int, ...]] = field(default_factory=dict)
+    unseen_months: Annotated[float, Between(1, 120)] = 12
 
 
 @dataclass(frozen=True)
@@ -122,7 +127,7 @@ def values(memory: Memory, request: ValuesRequest, report: Report) -> dict[str, 
 
     Refusals: ``no_register``, ``unknown_column``.
     """
-    register = _opened(memory)
+    register = opened_register(memory)
     found = register.profile(request.column, "column").values
     order = np.argsort(-found.counts, kind="stable")[:MOST_VALUES].tolist()
     sexes = propose_sexes(found.spelt[:MOST_VALUES])
@@ -157,16 +162,9 @@ def build_cohort(memory: Memory, request: BuildRequest, report: Report) -> dict[
     Refusals and cautions: those of ``build.build``; ``no_register``, ``not_a_date``; cautions
     ``list_shortened`` (``listed``, ``n``) and ``levels_not_listed`` (``covariate``, ``listed``, ``levels``).
     """
-    register = _opened(memory)
+    register = opened_register(memory)
     memory.built = None
-    choices = Choices(
-        roles=request.roles,
-        meanings=request.meanings,
-        closing_date=_day(request.closing_date, "closing_date"),
-        blank_meaning=request.blank_meaning,
-        sexes=request.sexes,
-        date_orders=request.date_orders,
-    )
+    choices = choices_of(request)
     built = build(register, choices, report)
     memory.built = built.cohort
     return _understood(built, choices.closing_date)
@@ -186,7 +184,22 @@ TASKS = {
 }
 
 
-def _opened(memory: Memory) -> Register:
+def choices_of(request: BuildRequest) -> Choices:
+    """Return what a request says about a register; refuse (``not_a_date``) a closing date that is none."""
+    return Choices(
+        roles=request.roles,
+        meanings=request.meanings,
+        closing_date=_day(request.closing_date, "closing_date"),
+        blank_meaning=request.blank_meaning,
+        sexes=request.sexes,
+        date_orders=request.date_orders,
+        repairs=request.repairs,
+        unseen_months=request.unseen_months,
+    )
+
+
+def opened_register(memory: Memory) -> Register:
+    """Return the opened register; refuse (``no_register``) when there is none."""
     if memory.source is None:
         raise Refusal("no_register")
     return memory.source

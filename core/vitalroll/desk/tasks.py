@@ -12,6 +12,7 @@ from vitalroll.desk import (
     comparison_tasks,
     competing_tasks,
     counts_tasks,
+    findings_tasks,
     outcome_tasks,
     register_tasks,
 )
@@ -22,6 +23,7 @@ TASKS = {
     **comparison_tasks.TASKS,
     **competing_tasks.TASKS,
     **counts_tasks.TASKS,
+    **findings_tasks.TASKS,
     **outcome_tasks.TASKS,
     **register_tasks.TASKS,
 }

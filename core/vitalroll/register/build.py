@@ -11,6 +11,7 @@ Conventions, each recorded row by row where it changes something:
 - A first visit here before the start, or none, means observation from the start
   (``observed_before_start``).
 - Of several rows with one patient number, the first that can be used is kept.
+- Only the repairs that were accepted are made (``findings.mending``), before anything else is done.
 - A year of two digits is the latest such year that is not after the year of the closing date.
 """
 
@@ -27,11 +28,17 @@ from vitalroll.errors import Caution
 from vitalroll.register.checks import CHECKS, Days, Rows, later_duplicates
 from vitalroll.register.cohort import DEATHS, Cohort, meaning_code
 from vitalroll.register.dates import Fault
+from vitalroll.register.findings.finding import Seen
+from vitalroll.register.findings.mending import Correction, Mended, find, look, mend
 from vitalroll.register.plan import FEW_LINES, Choices, Plan
 from vitalroll.register.profile import Register
 
-LONG_UNSEEN_DAYS = 365
-"""A patient under care who was not seen for longer than this is perhaps lost: it is said, not changed."""
+CLOSING_LONG_AFTER_DAYS = 365
+"""A closing date so much later than anything in the file is perhaps wrong."""
+
+
+Notes = dict[int, tuple[str, dict[str, Any]]]
+"""A code and its parameters for some rows."""
 
 
 @dataclass(frozen=True)
@@ -58,6 +65,27 @@ class Built:
     kept: tuple[str, ...]
     dropped: tuple[str, ...]
     cautions: tuple[Caution, ...]
+    corrections: tuple[Correction, ...] = ()
+
+
+@dataclass(frozen=True)
+class Followed:
+    """Who is followed for how long: rows within the closing date, which are kept, why the others are not.
+
+    ``entry``, ``exit`` and ``outcome`` are those of the kept rows.
+    """
+
+    rows: Rows
+    keep: np.ndarray
+    aside: Notes
+    changes: Notes
+    entry: np.ndarray
+    exit: np.ndarray
+
+    @property
+    def outcome(self) -> np.ndarray:
+        """Return how follow-up ended in each kept row."""
+        return self.rows.outcome[self.keep]
 
 
 def build(
@@ -85,27 +113,37 @@ def build(
     """
     plan = Plan(register, choices)
     report("dates", 0, 3)
-    rows, changes = _within_closing(plan.rows())
+    seen = look(plan)
+    mended = mend(seen, find(seen, choices.repairs) if choices.repairs else [], choices.repairs)
     report("checks", 1, 3)
-    keep, aside = _checked(plan, rows)
+    followed = follow(plan, mended)
     report("covariates", 2, 3)
-    cohort, cautions = _cohort(plan, rows, keep)
+    cohort, cautions = _cohort(plan, followed)
     report("covariates", 3, 3)
     line = register.source.table.line
-    kept = plan.kept()
+    kept, keep = plan.kept(), followed.keep
     return Built(
         cohort=cohort,
         rows=len(line),
-        set_aside=tuple(Noted(int(line[row]), *aside[row]) for row in sorted(aside)),
-        changed=tuple(Noted(int(line[row]), *changes[row]) for row in sorted(changes) if keep[row]),
+        set_aside=tuple(Noted(int(line[row]), *followed.aside[row]) for row in sorted(followed.aside)),
+        changed=tuple(
+            Noted(int(line[row]), *followed.changes[row]) for row in sorted(followed.changes) if keep[row]
+        ),
         kept=kept,
         dropped=tuple(c.identifier for c in register.source.table.columns if c.identifier not in kept),
-        cautions=(*plan.cautions(), *_cautions(rows, keep, line), *cautions),
+        cautions=(*plan.cautions(), *_cautions(followed.rows, keep, line, seen), *cautions),
+        corrections=mended.corrections,
     )
 
 
-Notes = dict[int, tuple[str, dict[str, Any]]]
-"""A code and its parameters for some rows."""
+def follow(plan: Plan, mended: Mended) -> Followed:
+    """Return who is followed, and for how long, once repairs are made and the closing date is kept to."""
+    rows, changes = _within_closing(mended.rows)
+    keep, aside = _checked(plan, rows, mended)
+    start, end = rows.start.day[keep], rows.end.day[keep]
+    late = rows.observed_from.given & (rows.observed_from.day > rows.start.day)
+    entry = np.where(late, rows.observed_from.day - rows.start.day, 0)[keep]
+    return Followed(rows, keep, aside, changes, entry, end - start)
 
 
 def _within_closing(rows: Rows) -> tuple[Rows, Notes]:
@@ -132,10 +170,14 @@ def _within_closing(rows: Rows) -> tuple[Rows, Notes]:
     return replace(rows, end=end, outcome=outcome), changes
 
 
-def _checked(plan: Plan, rows: Rows) -> tuple[np.ndarray, Notes]:
+def _checked(plan: Plan, rows: Rows, mended: Mended) -> tuple[np.ndarray, Notes]:
     """Return which rows are kept (bool), and why the others are not."""
     aside: Notes = dict(plan.register.source.table.not_patients)
     keep = plan.register.source.patients()
+    line = plan.register.source.table.line
+    for row, first in mended.same_as.items():
+        aside[row] = ("same_patient", {"first_line": int(line[first])})
+        keep[row] = False
     for check in CHECKS:
         found = check(rows)
         for row in np.flatnonzero(found.rows & keep).tolist():
@@ -143,24 +185,21 @@ def _checked(plan: Plan, rows: Rows) -> tuple[np.ndarray, Notes]:
         keep &= ~found.rows
     numbers = plan.one("patient_number")
     if numbers is not None:
-        line = plan.register.source.table.line
-        for row, first in later_duplicates(numbers.values.codes, keep).items():
+        for row, first in later_duplicates(np.where(mended.own, -1, numbers.values.codes), keep).items():
             aside[row] = ("duplicate_number", {"first_line": int(line[first])})
             keep[row] = False
     return keep, aside
 
 
-def _cohort(plan: Plan, rows: Rows, keep: np.ndarray) -> tuple[Cohort, list[Caution]]:
+def _cohort(plan: Plan, followed: Followed) -> tuple[Cohort, list[Caution]]:
     """Return the cohort of the kept rows with all its covariates."""
-    start, end = rows.start.day[keep], rows.end.day[keep]
-    late = rows.observed_from.given & (rows.observed_from.day > rows.start.day)
-    entry = np.where(late, rows.observed_from.day - rows.start.day, 0)[keep]
+    rows, keep = followed.rows, followed.keep
     found, cautions = plan.covariates(rows, keep)
     cohort = Cohort(
-        entry=entry,
-        exit=end - start,
-        outcome=rows.outcome[keep],
-        start=start,
+        entry=followed.entry,
+        exit=followed.exit,
+        outcome=followed.outcome,
+        start=rows.start.day[keep],
         line=plan.register.source.table.line[keep],
         closing=rows.closing,
         covariates=found,
@@ -168,7 +207,7 @@ def _cohort(plan: Plan, rows: Rows, keep: np.ndarray) -> tuple[Cohort, list[Caut
     return cohort, cautions
 
 
-def _cautions(rows: Rows, keep: np.ndarray, line: np.ndarray) -> list[Caution]:
+def _cautions(rows: Rows, keep: np.ndarray, line: np.ndarray, seen: Seen) -> list[Caution]:
     n = int(keep.sum())
     if not n:
         return [Caution("all_set_aside", {"rows": len(line)})]
@@ -181,13 +220,13 @@ def _cautions(rows: Rows, keep: np.ndarray, line: np.ndarray) -> list[Caution]:
     day_zero = keep & (rows.end.day == rows.start.day)
     if day_zero.any():
         found.append(Caution("day_zero", _lines(day_zero, line)))
-    unseen = keep & (rows.outcome == rows.under_care) & (rows.closing - rows.end.day > LONG_UNSEEN_DAYS)
+    unseen = keep & (rows.outcome == rows.under_care) & (rows.closing - rows.end.day > seen.unseen_days)
     if unseen.any():
-        found.append(Caution("unseen_for_long", _lines(unseen, line) | {"days": LONG_UNSEEN_DAYS}))
+        found.append(Caution("unseen_for_long", _lines(unseen, line) | {"days": seen.unseen_days}))
     to_closing = keep & (rows.end.day == rows.closing) & (rows.outcome == rows.under_care)
     dated = keep & ~to_closing
     last = int(max(rows.start.day[keep].max(), rows.end.day[dated].max(initial=0)))
-    if rows.closing - last > LONG_UNSEEN_DAYS:
+    if rows.closing - last > CLOSING_LONG_AFTER_DAYS:
         days = rows.closing - last
         found.append(
             Caution("closing_long_after_last", {"last": date.fromordinal(last).isoformat(), "days": days})

@@ -286,17 +286,8 @@ def read_dates(texts: DateTexts, order: str, *, last_year: int, epoch: str = "se
         Years above 2400 are counted from the Buddhist era: 543 is taken off. Years outside
         1850 to 2200 are faults: other calendars are not converted.
     """
-    year, month, day = (part.copy() for part in texts.parts.T)
-    in_parts = texts.form == Form.PARTS
-    first, second, third = texts.parts[in_parts].T
-    if order == "month_day_year":
-        year[in_parts], month[in_parts], day[in_parts] = third, first, second
-    elif order == "year_month_day":
-        year[in_parts], month[in_parts], day[in_parts] = first, second, third
-    else:
-        year[in_parts], month[in_parts], day[in_parts] = third, second, first
-    short = texts.short_year
-    year[short] = last_year - (last_year - year[short]) % 100
+    year, month, day = year_month_day(texts, order, last_year=last_year)
+    in_parts, short = texts.form == Form.PARTS, texts.short_year
     buddhist = (year > _BUDDHIST_FROM) & ~short & (year <= _BUDDHIST_FROM + 400)
     year[buddhist] -= BUDDHIST_OFFSET
     written = in_parts | (texts.form == Form.FIXED)
@@ -318,6 +309,24 @@ def read_dates(texts: DateTexts, order: str, *, last_year: int, epoch: str = "se
     fault[texts.form == Form.UNREAD] = Fault.UNREADABLE
     fault[texts.form == Form.PARTIAL] = Fault.PARTIAL
     return Dates(ordinal, fault, buddhist & possible)
+
+
+def year_month_day(
+    texts: DateTexts, order: str, *, last_year: int
+) -> tuple[np.ndarray, np.ndarray, np.ndarray]:
+    """Return the year, month and day that each text names in an order, whether or not there is such a day."""
+    year, month, day = (part.copy() for part in texts.parts.T)
+    in_parts = texts.form == Form.PARTS
+    first, second, third = texts.parts[in_parts].T
+    if order == "month_day_year":
+        year[in_parts], month[in_parts], day[in_parts] = third, first, second
+    elif order == "year_month_day":
+        year[in_parts], month[in_parts], day[in_parts] = first, second, third
+    else:
+        year[in_parts], month[in_parts], day[in_parts] = third, second, first
+    short = texts.short_year
+    year[short] = last_year - (last_year - year[short]) % 100
+    return year, month, day
 
 
 def last_written_year(texts: DateTexts) -> int | None:

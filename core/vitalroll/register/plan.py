@@ -2,7 +2,7 @@
 
 from __future__ import annotations
 
-from collections.abc import Callable, Mapping
+from collections.abc import Callable, Collection, Mapping
 from dataclasses import dataclass, field
 from datetime import date
 
@@ -15,7 +15,7 @@ from vitalroll.register.covariates import Derived, age_of, calendar_of, group_of
 from vitalroll.register.dates import ORDERS, Dates, Fault, read_dates
 from vitalroll.register.meanings import SEXES
 from vitalroll.register.profile import DateProfile, Profile, Register, dates_anyhow, numbers_anyhow
-from vitalroll.register.roles import MANY_ROLES, ROLES
+from vitalroll.register.roles import MANY_ROLES, ONLY_TO_COMPARE, ROLES
 from vitalroll.register.spelling import excerpt, same
 
 FEW_LINES = 20
@@ -36,6 +36,10 @@ class Choices:
         What a blank outcome means.
     sexes : mapping of value to female, male or other
     date_orders : mapping of column identifier to a name from dates.ORDERS
+    repairs : mapping of the code of a finding to lines
+        The findings whose repair is accepted, each with the lines for which it is declined.
+    unseen_months : float
+        Somebody under care who was not seen for longer than this before the closing date is perhaps lost.
     """
 
     roles: Mapping[str, str]
@@ -44,6 +48,8 @@ class Choices:
     blank_meaning: str | None = None
     sexes: Mapping[str, str] = field(default_factory=dict)
     date_orders: Mapping[str, str] = field(default_factory=dict)
+    repairs: Mapping[str, Collection[int]] = field(default_factory=dict)
+    unseen_months: float = 12
 
 
 class Plan:
@@ -61,6 +67,7 @@ class Plan:
         self._by_role: dict[str, list[Profile]] = {role: [] for role in ROLES}
         self._cautions: list[Caution] = []
         self._short_years: list[tuple[str, int]] = []
+        self._dates_read: dict[str, Dates] = {}
         for identifier, role in choices.roles.items():
             where = f"roles.{identifier}"
             if role not in ROLES:
@@ -81,9 +88,13 @@ class Plan:
         """Return the column with a role, or None."""
         return next(iter(self._by_role[role]), None)
 
+    def having(self, role: str) -> tuple[Profile, ...]:
+        """Return the columns with a role."""
+        return tuple(self._by_role[role])
+
     def kept(self) -> tuple[str, ...]:
-        """Return the columns that the cohort is made from, in their order; the number is not one."""
-        using = [role for role in ROLES if role not in ("patient_number", "none")]
+        """Return the columns that the cohort is made from, in their order; numbers and names are none."""
+        using = [role for role in ROLES if role not in (*ONLY_TO_COMPARE, "none")]
         kept = [profile.column for role in using for profile in self._by_role[role]]
         return tuple(column.identifier for column in sorted(kept, key=lambda column: column.position))
 
@@ -91,20 +102,20 @@ class Plan:
         """Return what is to be said of how the columns were read."""
         if not self._short_years:
             return self._cautions
-        last = self._last_year("end")
+        last = self.last_year("end")
         headings, counts = zip(*self._short_years, strict=True)
         found = {"n": sum(counts), "headings": list(headings), "first": last - 99, "last": last}
         return [*self._cautions, Caution("two_digit_years", found)]
 
     def rows(self) -> Rows:
         """Return the rows as dates and meanings."""
-        start = self._days("start")
+        start = self.days("start")
         outcome, blank = self._outcomes()
         rows = Rows(
             start=start,
-            observed_from=self._days("observed_from"),
-            end=self._days("end"),
-            birth=self._days("birth_date"),
+            observed_from=self.days("observed_from"),
+            end=self.days("end", "death_date"),
+            birth=self.days("birth_date"),
             outcome=outcome,
             outcome_blank=blank,
             outcome_text=_writer(self._by_role["outcome"][0]),
@@ -114,6 +125,21 @@ class Plan:
         self._refuse_without_dates(start)
         return rows
 
+    def written_ages(self) -> np.ndarray:
+        """Return the age written in each row, in years; NaN where none is."""
+        age = self.one("age")
+        if age is None:
+            return np.full(len(self.register.source.table), np.nan)
+        return numbers_anyhow(age, self.register.source).value[age.column.codes]
+
+    def sex_codes(self) -> np.ndarray:
+        """Return the position in SEXES of each row's sex, -1 where it is not recorded."""
+        sex = self.one("sex")
+        if sex is None:
+            return np.full(len(self.register.source.table), -1)
+        said = {same(value): SEXES.index(meaning) for value, meaning in self.choices.sexes.items()}
+        return np.array([said.get(key, -1) for key in sex.values.keys] + [-1])[sex.values.codes]
+
     def covariates(self, rows: Rows, kept: np.ndarray) -> tuple[dict[str, Covariate], list[Caution]]:
         """Return sex, age and the chosen columns for the kept rows, and what to say of them."""
         parts = []
@@ -121,9 +147,7 @@ class Plan:
         if sex is not None:
             parts.append(sex_of(sex.values, self.choices.sexes, kept))
         if age is not None or birth is not None:
-            written = None
-            if age is not None:
-                written = numbers_anyhow(age, self.register.source).value[age.column.codes]
+            written = self.written_ages() if age is not None else None
             parts.append(age_of(rows.start, rows.birth if birth is not None else None, written, kept))
         if kept.any():
             parts.append(Derived(calendar_of(rows.start.day[kept]), ()))
@@ -143,19 +167,19 @@ class Plan:
                 raise Refusal("role_given_twice", field="roles", role=role, columns=columns)
         if not self._by_role["start"]:
             raise Refusal("no_start_column", field="roles")
-        if not self._by_role["end"]:
+        if not self._by_role["end"] and not self._by_role["death_date"]:
             raise Refusal("no_end_column", field="roles")
         if not self._by_role["outcome"]:
             raise Refusal("no_outcome_column", field="roles")
 
-    def _days(self, role: str) -> Days:
-        """Return the dates of a role; the latest of several columns, if all that is filled can be read."""
+    def days(self, *roles: str) -> Days:
+        """Return the dates of roles; the latest of several columns, if all that is filled can be read."""
         n = len(self.register.source.table)
-        profiles = self._by_role[role]
+        columns = [(role, profile) for role in roles for profile in self._by_role[role]]
         day, fault = np.zeros(n, np.int64), np.full(n, np.int8(Fault.BLANK))
         worst = np.zeros(n, np.int64)
-        for place, profile in enumerate(profiles):
-            read = self._read(profile, role)
+        for place, (role, profile) in enumerate(columns):
+            read = self.read(profile, role)
             codes = profile.column.codes
             new_day, new_fault = read.day[codes], read.fault[codes]
             given = new_fault == Fault.NONE
@@ -166,7 +190,19 @@ class Plan:
             # What is written and cannot be read may be the true end: no other column stands in for it.
             spoilt = (fault != Fault.NONE) & (fault != Fault.BLANK)
             fault = np.where(spoilt, fault, np.where(given | unreadable, new_fault, fault)).astype(np.int8)
-        return Days(day, fault, _writer_of_many(profiles, worst))
+        return Days(day, fault, _writer_of_many([profile for _, profile in columns], worst))
+
+    def read(self, profile: Profile, role: str) -> Dates:
+        """Return the distinct texts of a column as dates, in the order that is chosen for it."""
+        identifier = profile.column.identifier
+        if identifier not in self._dates_read:
+            self._dates_read[identifier] = self._read(profile, role)
+        return self._dates_read[identifier]
+
+    def order_of(self, profile: Profile) -> str:
+        """Return the order in which a column of dates is read."""
+        chosen = self.choices.date_orders.get(profile.column.identifier)
+        return chosen or dates_anyhow(profile, self.register.source).settling.order
 
     def _read(self, profile: Profile, role: str) -> Dates:
         source = self.register.source
@@ -182,12 +218,12 @@ class Plan:
             order = dates.settling.order
         elif order not in dates.settling.choices and dates.settling.settled:
             self._cautions.append(Caution("order_against_evidence", about | {"order": order}))
-        last_year = self._last_year(role)
+        last_year = self.last_year(role)
         read = read_dates(dates.texts, order, last_year=last_year, epoch=source.epoch or "serial_1900")
         self._note_dates(dates, read.fault, profile.counts, about, role)
         return read
 
-    def _last_year(self, role: str) -> int:
+    def last_year(self, role: str) -> int:
         """Return the latest year that two digits can mean; contacts go on after closing, births not."""
         return self.choices.closing_date.year + (0 if role == "birth_date" else 1)
 
@@ -211,13 +247,15 @@ class Plan:
             if unread:
                 self._cautions.append(Caution("birth_dates_unreadable", about | {"n": unread}))
 
+    def meanings(self) -> dict[str, int]:
+        """Return the position of the meaning of each value of the outcome, by what it is matched by."""
+        said = self.choices.meanings.items()
+        return {same(value): _meaning(meaning, f"meanings.{value}") for value, meaning in said}
+
     def _outcomes(self) -> tuple[np.ndarray, np.ndarray]:
         """Return the meaning of each row's outcome, -1 for none, and where it is blank without one."""
-        profile = self._by_role["outcome"][0]
-        values = profile.values
-        meant = {}
-        for value, meaning in self.choices.meanings.items():
-            meant[same(value)] = _meaning(meaning, f"meanings.{value}")
+        values = self._by_role["outcome"][0].values
+        meant = self.meanings()
         codes = np.array([meant.get(key, -1) for key in values.keys] + [-1])
         outcome = codes[values.codes]
         blank = values.codes < 0

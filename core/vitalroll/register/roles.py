@@ -16,12 +16,16 @@ from vitalroll.register.recognition import longest_match, words
 from vitalroll.register.spelling import bare
 
 Role = Literal[
-    "patient_number", "start", "observed_from", "end", "outcome", "sex", "age", "birth_date", "group", "none"
-]
+    "patient_number", "name", "start", "observed_from", "end", "death_date", "outcome",
+    "sex", "age", "birth_date", "group", "none",
+]  # fmt: skip
 ROLES: tuple[str, ...] = get_args(Role)
-DATE_ROLES = ("start", "observed_from", "end", "birth_date")
-MANY_ROLES = ("end", "group", "none")
+DATE_ROLES = ("start", "observed_from", "end", "death_date", "birth_date")
+MANY_ROLES = ("end", "name", "group", "none")
 """Roles that any number of columns may have."""
+
+ONLY_TO_COMPARE = ("patient_number", "name")
+"""Roles of columns that find the same patient twice and are dropped right after."""
 
 MOST_LEVELS_PROPOSED = 20
 _RECOGNISED = 0.5
@@ -62,6 +66,9 @@ def propose_roles(register: Register) -> list[Proposal]:
         (best, evidence), profile = max(scored, key=lambda item: item[0][0], default=((0.0, []), None))
         if profile is not None and best > 0:
             chosen[profile.column.position] = (role, evidence)
+    for profile in profiles:
+        if profile.column.position not in chosen and (evidence := _name(profile)):
+            chosen[profile.column.position] = ("name", evidence)
     return [_proposal(profile, chosen.get(profile.column.position)) for profile in profiles]
 
 
@@ -149,6 +156,14 @@ def _number(profile: Profile) -> tuple[float, list[Evidence]]:
     return 0.0, []
 
 
+def _name(profile: Profile) -> list[Evidence]:
+    """Return the evidence that a column holds names of patients: nothing but its heading can say so."""
+    if profile.kind not in ("text", "category", "identifier"):
+        return []
+    clear, evidence = _said(profile, "name")
+    return evidence if clear >= 1.0 else []
+
+
 def _take_dates(register: Register, chosen: dict[int, tuple[str, list[Evidence]]]) -> None:
     """Give the columns of dates their roles: each by its heading first, then by which come first and last."""
     dated = [profile for profile in register.profiles if profile.kind == "date"]
@@ -164,7 +179,7 @@ def _take_dates(register: Register, chosen: dict[int, tuple[str, list[Evidence]]
     if not said["start"] and said["observed_from"]:
         # The only beginning that is written down is the first visit here.
         said["start"], said["observed_from"] = said["observed_from"], []
-    for role in ("birth_date", "start", "observed_from"):
+    for role in ("birth_date", "start", "observed_from", "death_date"):
         if said[role]:
             _, profile, evidence = max(said[role], key=lambda item: item[0])
             chosen[profile.column.position] = (role, evidence)

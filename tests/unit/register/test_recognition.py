@@ -182,7 +182,7 @@ def register_with(*headings):
 )
 def test_roles_are_recognised_in_several_languages(headings):
     found = [proposal.role for _, proposal in proposed(register_with(*headings)).values()]
-    assert found[:8] == ["patient_number", "none", "sex", "age", "start", "end", "outcome", "group"]
+    assert found[:8] == ["patient_number", "name", "sex", "age", "start", "end", "outcome", "group"]
     assert found[8] == "none"
 
 
@@ -205,7 +205,14 @@ def test_evidence_says_what_was_seen():
         "reads_as_dates": {"read": 4, "filled": 4},
         "order_settled": {"order": "day_month_year", "n": 3},
     }
-    assert found["Name"][1].evidence[0].code == "heading_identifies"
+    assert (found["Name"][1].role, found["Name"][1].evidence[0].code) == ("name", "heading_says")
+
+
+def test_a_heading_that_only_holds_the_word_name_is_not_the_name_of_a_patient():
+    found = proposed(
+        "No,Village name,Phone,Diagnosed,Last visit,Status\n" + "1,A,7,14/03/2016,20/05/2020,Alive\n" * 3
+    )
+    assert [found[heading][1].role for heading in ("Village name", "Phone")] == ["none", "none"]
 
 
 def test_two_beginnings_are_the_start_and_the_first_visit_here():

@@ -27,10 +27,12 @@ function askOnce(app, question, key, id) {
  * @param {(state: import('../store.js').State) => ({task: string, request: object}|null)} block.ask
  *   null while there is nothing to ask
  * @param {(answer: any, state: import('../store.js').State) => Array<Node|null|false>} block.draw
+ * @param {(answer: any, state: import('../store.js').State) => Array<Node|null|false>} [block.paper] draws it
+ *   for the report, where the page's drawing holds controls
  * @param {string} [block.empty] key of the sentence shown while there is nothing to ask
  * @param {Node} [block.choices] what can be chosen about this answer alone
  */
-export function answerBlock(app, { id, title, ask, draw, empty, choices }) {
+export function answerBlock(app, { id, title, ask, draw, paper = draw, empty, choices }) {
   const heading = h('h2', { id: `${id}-heading` });
   const body = h('div', { class: 'answer', 'aria-live': 'polite', 'aria-busy': 'false' });
   const box = h('section', { id, 'aria-labelledby': `${id}-heading` }, heading, choices, body);
@@ -55,7 +57,7 @@ export function answerBlock(app, { id, title, ask, draw, empty, choices }) {
     } else {
       const { answer, state } = latest;
       show(draw(answer, state));
-      app.report.show({ id, title, draw: () => draw(answer, state) });
+      app.report.show({ id, title, draw: () => paper(answer, state) });
     }
   }
 

@@ -4,6 +4,7 @@ import { h } from '../parts/element.js';
 import { live } from '../parts/live.js';
 import { closingBlock } from './register/closing.js';
 import { columnsBlock } from './register/columns.js';
+import { findingsBlock } from './register/findings.js';
 import { meaningsBlock, sexesBlock } from './register/meanings.js';
 import { openingBlock } from './register/opening.js';
 import { makeReader } from './register/reader.js';
@@ -25,6 +26,7 @@ export function registerPlace(app) {
       sexesBlock(app),
       closingBlock(app),
       understoodBlock(app),
+      findingsBlock(app),
       h('section', { 'aria-labelledby': 'register-other' },
         h('h2', { id: 'register-other' }, say('register-other-title')),
         openingBlock(app, reader),

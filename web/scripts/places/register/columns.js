@@ -4,9 +4,9 @@ import { live } from '../../parts/live.js';
 import { named } from '../../parts/said.js';
 import { DATE_ROLES } from './reader.js';
 
-const ROLES = ['none', 'patient_number', 'start', 'observed_from', 'end', 'outcome', 'sex', 'birth_date', 'age', 'group'];
+const ROLES = ['none', 'patient_number', 'name', 'start', 'observed_from', 'end', 'death_date', 'outcome', 'sex', 'birth_date', 'age', 'group'];
 /** Roles that only one column can have. */
-const SINGLE = ROLES.filter((role) => !['none', 'group', 'end'].includes(role));
+const SINGLE = ROLES.filter((role) => !['none', 'name', 'group', 'end'].includes(role));
 
 /** @param {import('../../app.js').App} app */
 export function columnsBlock(app) {

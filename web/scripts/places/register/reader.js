@@ -92,7 +92,7 @@ export function makeReader(app) {
       const cohort = await app.engine.ask('register.build', requestOf(reading), { key: 'register-build' });
       if (key !== built) return;
       serial += 1;
-      app.store.settle({ cohort: { ...cohort, serial }, building: null });
+      app.store.settle({ cohort: { ...cohort, serial, reading }, building: null });
     } catch (refusal) {
       if (!refusal.code) throw refusal;
       if (key === built && refusal.code !== 'superseded') app.store.settle({ cohort: null, building: plain(refusal) });
@@ -130,7 +130,7 @@ function addProposals(reading, role, { values }) {
 }
 
 /** The request of register.build: only what is chosen, and only the values of chosen columns. */
-function requestOf(reading) {
+export function requestOf(reading) {
   const roles = Object.fromEntries(Object.entries(reading.roles).filter(([, role]) => role !== 'none'));
   const orders = Object.fromEntries(Object.entries(reading.date_orders).filter(([id]) => id in roles));
   return { ...reading, roles, date_orders: orders };
@@ -140,7 +140,7 @@ function requestOf(reading) {
 export function whatIsMissing({ source, reading }) {
   const roles = Object.values(reading.roles);
   const missing = ['start', 'outcome'].filter((role) => !roles.includes(role)).map((role) => `missing-${role}`);
-  if (!roles.includes('end')) missing.push('missing-end');
+  if (!roles.includes('end') && !roles.includes('death_date')) missing.push('missing-end');
   if (!reading.closing_date) missing.push('missing-closing');
   const unsettled = source.columns.some((column) =>
     DATE_ROLES.includes(reading.roles[column.id]) && column.dates && !reading.date_orders[column.id]);
@@ -149,7 +149,7 @@ export function whatIsMissing({ source, reading }) {
   return missing;
 }
 
-export const DATE_ROLES = ['start', 'end', 'observed_from', 'birth_date'];
+export const DATE_ROLES = ['start', 'end', 'observed_from', 'death_date', 'birth_date'];
 
 function plain({ code, parameters, field, line }) {
   return { code, parameters, field, line };
