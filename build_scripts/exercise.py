@@ -77,6 +77,7 @@ def _outcomes(ask: Any, group: str) -> None:
 
 def _comparisons(ask: Any, group: str) -> None:
     pair = {"group": group, "exposed": "Severe", "reference": "Mild"}
+    ask("compare.alike", **pair, timing={"known": "later", "landmark_days": 180})
     ask("compare.difference", **pair)
     ask("compare.intervals", **pair)
     ask("compare.rank_test", group=group)
@@ -92,6 +93,10 @@ def _counts(ask: Any) -> None:
     }  # fmt: skip
     ask("counts.strata", strata=[stratum, stratum])
     ask("counts.balance", prevalent=100, new_per_year=20, leaving=[{"label": "", "per_year": 15}])
+    ask("counts.survival_size", hazard_ratio=2, survival=0.7, at_years=5, accrual_years=3, follow_up_years=2)
+    ask("counts.proportions_size", exposed=0.1, reference=0.25, available=150)
+    ask("counts.survey_size", proportion=0.5, margin=0.05, population=2000)
+    ask("counts.accuracy_size", sensitivity=0.9, specificity=0.85, margin=0.05, prevalence=0.2)
 
 
 def small_workbook(text: str) -> bytes:

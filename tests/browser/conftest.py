@@ -10,8 +10,11 @@ import pytest
 from playwright.sync_api import Browser, Page, sync_playwright
 
 from browsers import chromium
+from demo_register import demo_register
+from exercise import BY_HEADING, CLOSING, proposed_reading
 from make_dist import DIST
 from site_server import SiteServer
+from vitalroll.desk import Desk
 
 START_MS = 90_000
 """A slow machine may take long to start the engine; this only ends what hangs."""
@@ -80,3 +83,21 @@ def opened(browser: Browser) -> Iterator[Callable[..., Watched]]:
 def _note(watched: Watched, message: object) -> None:
     if message.type in ("error", "warning") and not any(known in message.text for known in EXPECTED_CONSOLE):
         watched.complaints.append(message.text)
+
+
+@pytest.fixture(scope="session")
+def native() -> Callable[[str, dict], dict]:
+    """The engine outside the browser, with the demo register read as the page proposes to read it."""
+    desk = Desk()
+
+    def ask(task: str, request: dict) -> dict:
+        said = desk.answer(task, request)
+        assert "answer" in said, said
+        return said["answer"]
+
+    source = ask("register.open", {"name": "demo-register.csv", "content": demo_register().encode()})
+    reading = proposed_reading(lambda task, **request: ask(task, request), source, CLOSING)
+    cohort = ask("register.build", reading)
+    ask.cohort = cohort
+    ask.group = next(each["id"] for each in cohort["covariates"] if each["heading"] == BY_HEADING)
+    return ask

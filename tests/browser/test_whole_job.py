@@ -7,35 +7,11 @@ from collections.abc import Callable
 from pathlib import Path
 
 import pytest
+from page_reading import ANSWER_MS, DEATHS, GROUP, go, numbers, table_rows
 from playwright.sync_api import Download, Page, expect
 
-from demo_register import demo_register
-from exercise import BY_HEADING as GROUP
-from exercise import CLOSING, proposed_reading
 from make_dist import DIST
 from site_server import SiteServer
-from vitalroll.desk import Desk
-
-ANSWER_MS = 30_000
-DEATHS = ["died_of_disease", "died_of_other_cause", "died_cause_unknown"]
-
-
-def go(page: Page, place: str) -> None:
-    page.get_by_role("navigation").get_by_role("link", name=place, exact=True).click()
-
-
-def numbers(text: str) -> list[float]:
-    """Numbers as they are written on the English page."""
-    plain = text.replace("\u2212", "-").replace(",", "")
-    return [float(number) for number in re.findall(r"-?\d+(?:\.\d+)?", plain)]
-
-
-def table_rows(page: Page, caption: str) -> list[list[str]]:
-    table = page.locator("table:visible", has=page.locator("caption", has_text=caption)).first
-    table.wait_for(timeout=ANSWER_MS)
-    return [
-        [cell.inner_text() for cell in row.locator("th, td").all()] for row in table.locator("tbody tr").all()
-    ]
 
 
 @pytest.fixture(params=["site", "one-file copy"])
@@ -45,24 +21,6 @@ def page(request: pytest.FixtureRequest, site: SiteServer, opened: Callable) -> 
     page.locator("#open-demo").click()
     page.get_by_text("person-years.").first.wait_for(timeout=ANSWER_MS)
     return page
-
-
-@pytest.fixture(scope="module")
-def native() -> Callable[[str, dict], dict]:
-    """The engine outside the browser, with the demo register read as the page proposes to read it."""
-    desk = Desk()
-
-    def ask(task: str, request: dict) -> dict:
-        said = desk.answer(task, request)
-        assert "answer" in said, said
-        return said["answer"]
-
-    source = ask("register.open", {"name": "demo-register.csv", "content": demo_register().encode()})
-    reading = proposed_reading(lambda task, **request: ask(task, request), source, CLOSING)
-    cohort = ask("register.build", reading)
-    ask.cohort = cohort
-    ask.group = next(each["id"] for each in cohort["covariates"] if each["heading"] == GROUP)
-    return ask
 
 
 def test_from_the_demo_to_a_saved_report(page: Page, native: Callable, tmp_path: Path) -> None:

@@ -26,7 +26,7 @@ export function beginnings(language) {
     cohort: null,
     question: { interest: ['died_of_disease', 'died_of_other_cause', 'died_cause_unknown'], group: null },
     outcomes: { interval: 'log-log', step: 'year' },
-    compare: { exposed: null, reference: null, step: 'year', intervals: 5, weight: 'log_rank', covariates: [], ties: 'efron', competing: null },
+    compare: { exposed: null, reference: null, step: 'year', intervals: 5, weight: 'log_rank', covariates: [], ties: 'efron', competing: null, known: null, landmarkMonths: null },
     caseload: {
       years: 5, basis: 'history', perYear: null,
       resources: { visits: 0, medicine_units: 0, cost: 0 },
@@ -36,6 +36,7 @@ export function beginnings(language) {
       lifeTable: { entering: null, rows: [] },
       strata: [],
       balance: { prevalent: null, new_per_year: null, leaving: [], years: 5, population: null },
+      planning: { question: 'survival_size', typed: {} },
     },
     report: { title: '', hospital: '', author: '', date: '', leftOut: [] },
     /** Changes whenever a piece of the report does. */

@@ -846,6 +846,44 @@ caution-no_competing = Nobody left in a way that rules the outcome out, so the s
 refusal-competing_is_interest = “{ $meaning }” cannot be the outcome and rule it out as well.
 refusal-weights_undefined = At some time nobody was under observation who could stand for those who came later, so the weights of this model are not defined. Leave out the delayed entries, or look at the cause-specific results.
 
+compare-known = When was it known who belongs to which group?
+compare-known-hint = A group that is made by something after the start (a treatment begun, a visit kept) had to be lived into.
+compare-known-start = at the start of follow-up
+compare-known-later = only later
+compare-landmark = Count from so many months after the start
+compare-landmark-hint = Only those still followed then are compared, in the groups known by then.
+alike-title = Are the groups alike?
+alike-sentence = { $exposed } ({ $exposedPatients } patients) and { $reference } ({ $referencePatients }) differ noticeably in { $unlike } of { $of } characteristics.
+alike-sides-caption = How the groups were followed
+alike-start = Half had started by
+alike-follow-up = Median follow-up, years
+alike-lost = Lost to follow-up
+alike-caption = Characteristics of the groups
+alike-method = Means with standard deviations, counts with shares; standardised differences (Austin 2009), above 0.1 worth taking into account (common practice). Follow-up by the reversed product limit.
+characteristic = Characteristic
+mean-of = { $covariate }, mean (standard deviation)
+level-of = { $covariate }: { $level }
+mean-and-spread = { $mean } ({ $spread })
+count-and-share = { $n } ({ $percent })
+standardised-difference = Standardised difference
+e-value = To explain this away, something not in the register would have to go along with both the group and the outcome by risk ratios of { $estimate } each, over and above what was taken into account; to make the difference unclear, by { $limit } each{ $scale ->
+    [common]  (the outcome is common, so the ratio was first brought to the scale of risks)
+   *[other] {""}
+  }. E-value: VanderWeele & Ding (2017).
+e-value-of-unclear = The difference is unclear already, so nothing hidden is needed to explain it away (E-value of the limit { $limit }, of the estimate { $estimate }{ $scale ->
+    [common] , on the scale of risks
+   *[other] {""}
+  }; VanderWeele & Ding 2017).
+caution-group_timing_not_said = It was not said when the groups became known. If they were made by something after the start, those in the group had to live until then, and the comparison flatters it.
+caution-counted_from_landmark = Counted from { $days } days after the start, among those still followed then. A group entered after that day must not be used here.
+caution-groups_unlike = The groups differ in { $covariates } (standardised difference up to { NUMBER($most, maximumFractionDigits: 2) }). Take these into account before believing a difference in outcome.
+caution-periods_differ = Half of { $level } started { NUMBER($years, maximumFractionDigits: 1) } years before the other group: care may have changed in between. Take the period of the start into account.
+caution-follow_up_differs = { $level } was followed { NUMBER($times, maximumFractionDigits: 1) } times as long: compare only as far as both were followed.
+caution-losses_differ = More were lost from { $level } ({ $share } against { $other_share }). If the lost fared otherwise than the rest, the comparison leans.
+refusal-group_known_later = Groups that became known only after the start cannot be compared from the start: those in the group had to live until then. Choose from how many months after the start to count.
+refusal-nobody_at_landmark = Nobody was followed for longer than { $days } days. Choose an earlier landmark.
+refusal-empty_group = Nobody is in “{ $level }”. Choose another group.
+
 ## Caseload
 
 
@@ -1064,6 +1102,57 @@ caution-not_in_steady_state = { $new_per_year } come and { $leaving_per_year } l
 caution-utilisation_at_or_above_one = { $places } places are too few: { $needed } would be taken on average.
 
 refusal-utilisation_at_or_above_one = { $places } places are too few: { $needed } would be taken on average.
+
+planning-title = How many the next audit needs
+planning-lead = Before the next round: how many patients, or people to ask, are needed for an answer worth having.
+planning-empty = Fill in every field; the number at the bottom may stay empty.
+planning-question = What is to be found out
+planning-survival_size = whether survival differs between two groups
+planning-proportions_size = whether a share differs between two groups
+planning-survey_size = how large a share is, by asking people
+planning-accuracy_size = how good a test is
+planning-hazard_ratio = Hazard ratio that must not be missed
+planning-survival = Without the outcome, group compared with
+planning-at_years = After so many years
+planning-accrual_years = Years in which patients come
+planning-follow_up_years = Years of follow-up after the last
+planning-share_exposed = In the group in question
+planning-lost = Lost before anything is known
+planning-power = Power
+planning-significance = Significance, two-sided
+planning-available = Patients there are, if known (in question)
+planning-exposed = Share, group in question
+planning-reference = Share, group compared with
+planning-reference_for_each = Compared with, for each in question
+planning-proportion = Share expected
+planning-margin = To within (percentage points)
+planning-design_effect = Design effect
+planning-response = Expected to answer
+planning-confidence = Confidence
+planning-population = Population, if small
+planning-sensitivity = Sensitivity expected
+planning-specificity = Specificity expected
+planning-prevalence = With the disease, among those tested
+planning-events = Outcomes
+planning-survival-sentence = { $events } outcomes are needed to notice a hazard ratio of { $ratio } with a power of { $power }. About { $share } of the patients will have had the outcome by the close, so { $patients } patients have to be followed, those who will be lost included.
+planning-survival-caption = What other ratios and powers would need
+planning-power-sentence = With { $available } patients the power is { $power }.
+planning-proportions-sentence = { $exposed } patients in the group in question and { $reference } in the other are needed for a power of { $power }.
+planning-proportions-caption = Patients needed for other powers
+planning-survey-sentence = Ask { $people } people. ({ $answers } answers would do from a population without limit.)
+planning-accuracy-sentence = Test { $people } people: among them are the { $diseased } with the disease for the sensitivity ({ $sensitivity } to be tested) and the { $others } without it for the specificity ({ $specificity } to be tested).
+planning-guess = The result is only as good as the guesses above it. Ask a statistician before patients are asked to take part in anything.
+planning-survival-method = Schoenfeld (1981, 1983); patients come evenly, hazards are constant.
+planning-proportions-method = Fleiss, Levin & Paik (2003), without continuity correction.
+planning-survey-method = Cochran (1977), with the design effect and the finite population.
+planning-accuracy-method = Buderer (1996).
+fault-not-between = Between { $least } and { $greatest }.
+fault-not-from-to = From { $least } to { $greatest }.
+caution-few_planned_events = So small a number ({ $events } in the smallest cell or in all) is beyond what the formula is good for.
+caution-margin_wider_than_proportion = The margin is as wide as the share itself: such a survey would say nothing.
+refusal-not_a_share = { $field }: { $value } is not a share between 0 and 1.
+refusal-nothing_to_notice = The two groups are supposed to be the same, so there is nothing to notice.
+refusal-no_follow_up_planned = With neither accrual nor follow-up nothing can be seen.
 
 ## Report
 

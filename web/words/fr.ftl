@@ -846,6 +846,44 @@ caution-no_competing = Personne n’est sorti d’une façon qui exclut l’év�
 refusal-competing_is_interest = « { $meaning } » ne peut pas être à la fois l’événement et ce qui l’exclut.
 refusal-weights_undefined = À un certain moment, personne n’était observé qui puisse représenter ceux venus plus tard : les poids de ce modèle ne sont pas définis. Écartez les entrées tardives, ou regardez les résultats propres à la cause.
 
+compare-known = Quand a-t-on su qui appartient à quel groupe ?
+compare-known-hint = Un groupe formé par quelque chose de postérieur au début (traitement commencé, visite faite) suppose d’avoir vécu jusque-là.
+compare-known-start = au début du suivi
+compare-known-later = seulement plus tard
+compare-landmark = Compter à partir de tant de mois après le début
+compare-landmark-hint = Seuls ceux encore suivis à ce moment sont comparés, dans les groupes connus à ce moment.
+alike-title = Les groupes se ressemblent-ils ?
+alike-sentence = { $exposed } ({ $exposedPatients } patients) et { $reference } ({ $referencePatients }) diffèrent nettement pour { $unlike } caractéristiques sur { $of }.
+alike-sides-caption = Comment les groupes ont été suivis
+alike-start = La moitié avait commencé avant le
+alike-follow-up = Suivi médian, années
+alike-lost = Perdus de vue
+alike-caption = Caractéristiques des groupes
+alike-method = Moyennes avec écarts types, effectifs avec proportions ; différences standardisées (Austin 2009), à prendre en compte au-delà de 0,1 (usage courant). Suivi par la méthode produit-limite inversée.
+characteristic = Caractéristique
+mean-of = { $covariate }, moyenne (écart type)
+level-of = { $covariate } : { $level }
+mean-and-spread = { $mean } ({ $spread })
+count-and-share = { $n } ({ $percent })
+standardised-difference = Différence standardisée
+e-value = Pour expliquer entièrement cet écart, il faudrait un facteur absent du registre lié à la fois au groupe et à l’événement par des rapports de risques de { $estimate } chacun, en plus de ce qui a été pris en compte ; pour le rendre incertain, de { $limit } chacun{ $scale ->
+    [common]  (l’événement est fréquent : le rapport a d’abord été ramené à l’échelle des risques)
+   *[other] {""}
+  }. Valeur E : VanderWeele et Ding (2017).
+e-value-of-unclear = L’écart est déjà incertain : aucun facteur caché n’est nécessaire pour l’expliquer (valeur E de la limite { $limit }, de l’estimation { $estimate }{ $scale ->
+    [common] , à l’échelle des risques
+   *[other] {""}
+  } ; VanderWeele et Ding 2017).
+caution-group_timing_not_said = Il n’a pas été dit quand les groupes ont été connus. S’ils résultent de quelque chose de postérieur au début, ceux du groupe ont dû vivre jusque-là, et la comparaison le flatte.
+caution-counted_from_landmark = Compté à partir de { $days } jours après le début, parmi ceux encore suivis alors. Un groupe formé après ce jour ne doit pas servir ici.
+caution-groups_unlike = Les groupes diffèrent par { $covariates } (différence standardisée jusqu’à { NUMBER($most, maximumFractionDigits: 2) }). Prenez-les en compte avant de croire à un écart de résultats.
+caution-periods_differ = La moitié de { $level } a commencé { NUMBER($years, maximumFractionDigits: 1) } ans avant l’autre groupe : les soins ont pu changer entre-temps. Prenez en compte la période du début.
+caution-follow_up_differs = { $level } a été suivi { NUMBER($times, maximumFractionDigits: 1) } fois plus longtemps : comparez seulement aussi loin que les deux ont été suivis.
+caution-losses_differ = Davantage ont été perdus de vue dans { $level } ({ $share } contre { $other_share }). Si leur sort diffère de celui des autres, la comparaison penche.
+refusal-group_known_later = Des groupes connus seulement après le début ne peuvent pas être comparés depuis le début : ceux du groupe ont dû vivre jusque-là. Choisissez à partir de combien de mois après le début compter.
+refusal-nobody_at_landmark = Personne n’a été suivi plus de { $days } jours. Choisissez un repère plus précoce.
+refusal-empty_group = Personne n’est dans « { $level } ». Choisissez un autre groupe.
+
 ## Caseload
 
 
@@ -1064,6 +1102,57 @@ caution-not_in_steady_state = { $new_per_year } arrivent et { $leaving_per_year 
 caution-utilisation_at_or_above_one = { $places } places ne suffisent pas : { $needed } seraient occupées en moyenne.
 
 refusal-utilisation_at_or_above_one = { $places } places ne suffisent pas : { $needed } seraient occupées en moyenne.
+
+planning-title = Combien en faut-il pour le prochain bilan
+planning-lead = Avant le prochain bilan : combien de patients, ou de personnes à interroger, faut-il pour une réponse utile.
+planning-empty = Remplissez tous les champs ; le nombre en bas peut rester vide.
+planning-question = Ce qu’il faut établir
+planning-survival_size = si la survie diffère entre deux groupes
+planning-proportions_size = si une proportion diffère entre deux groupes
+planning-survey_size = la taille d’une proportion, en interrogeant des personnes
+planning-accuracy_size = la qualité d’un test
+planning-hazard_ratio = Rapport des risques à ne pas manquer
+planning-survival = Sans l’événement, groupe de comparaison
+planning-at_years = Après tant d’années
+planning-accrual_years = Années d’arrivée des patients
+planning-follow_up_years = Années de suivi après le dernier
+planning-share_exposed = Dans le groupe étudié
+planning-lost = Perdus avant toute information
+planning-power = Puissance
+planning-significance = Seuil, bilatéral
+planning-available = Patients disponibles, si connu (groupe étudié)
+planning-exposed = Proportion, groupe étudié
+planning-reference = Proportion, groupe de comparaison
+planning-reference_for_each = Comparés, pour chaque patient étudié
+planning-proportion = Proportion attendue
+planning-margin = À (points de pourcentage) près
+planning-design_effect = Effet de plan
+planning-response = Réponses attendues
+planning-confidence = Confiance
+planning-population = Population, si elle est petite
+planning-sensitivity = Sensibilité attendue
+planning-specificity = Spécificité attendue
+planning-prevalence = Malades parmi les personnes testées
+planning-events = Événements
+planning-survival-sentence = Il faut { $events } événements pour remarquer un rapport des risques de { $ratio } avec une puissance de { $power }. Environ { $share } des patients auront eu l’événement à la clôture : il faut donc suivre { $patients } patients, y compris ceux qui seront perdus.
+planning-survival-caption = Ce que demanderaient d’autres rapports et d’autres puissances
+planning-power-sentence = Avec { $available } patients, la puissance est de { $power }.
+planning-proportions-sentence = Il faut { $exposed } patients dans le groupe étudié et { $reference } dans l’autre pour une puissance de { $power }.
+planning-proportions-caption = Patients nécessaires pour d’autres puissances
+planning-survey-sentence = Interrogez { $people } personnes. ({ $answers } réponses suffiraient dans une population sans limite.)
+planning-accuracy-sentence = Testez { $people } personnes : parmi elles se trouvent les { $diseased } malades pour la sensibilité ({ $sensitivity } à tester) et les { $others } non-malades pour la spécificité ({ $specificity } à tester).
+planning-guess = Le résultat ne vaut que ce que valent les suppositions ci-dessus. Consultez un statisticien avant de demander à des patients de participer à quoi que ce soit.
+planning-survival-method = Schoenfeld (1981, 1983) ; arrivées régulières, risques constants.
+planning-proportions-method = Fleiss, Levin et Paik (2003), sans correction de continuité.
+planning-survey-method = Cochran (1977), avec l’effet de plan et la population finie.
+planning-accuracy-method = Buderer (1996).
+fault-not-between = Entre { $least } et { $greatest }.
+fault-not-from-to = De { $least } à { $greatest }.
+caution-few_planned_events = Un si petit nombre ({ $events } dans la plus petite case ou en tout) dépasse ce que permet la formule.
+caution-margin_wider_than_proportion = La marge est aussi large que la proportion elle-même : une telle enquête ne dirait rien.
+refusal-not_a_share = { $field } : { $value } n’est pas une proportion entre 0 et 1.
+refusal-nothing_to_notice = Les deux groupes sont supposés identiques : il n’y a rien à remarquer.
+refusal-no_follow_up_planned = Sans arrivées ni suivi, rien ne peut être observé.
 
 ## Report
 

@@ -4,9 +4,11 @@ from __future__ import annotations
 
 import dataclasses
 from dataclasses import dataclass
-from typing import Annotated, Any
+from typing import Annotated, Any, Literal
 
-from vitalroll.comparison.cox import CoxFit, cox
+from vitalroll.comparison.alike import alike
+from vitalroll.comparison.bias import e_value
+from vitalroll.comparison.cox import cox
 from vitalroll.comparison.design import Choice
 from vitalroll.comparison.intervals import compare_intervals
 from vitalroll.comparison.milestone import milestone_difference
@@ -17,6 +19,7 @@ from vitalroll.desk.memory import Memory
 from vitalroll.errors import Caution, Refusal
 from vitalroll.outcomes.actuarial import Step, interval_edges
 from vitalroll.outcomes.groups import Groups, groups_of
+from vitalroll.outcomes.landmark import from_landmark
 from vitalroll.outcomes.product_limit import product_limit
 from vitalroll.outcomes.risk_table import RiskTable
 from vitalroll.register.cohort import DEATHS, Cohort
@@ -25,6 +28,31 @@ FEW_EVENTS_IN_GROUP = 5
 """With fewer outcomes in a group a comparison hangs on one or two patients."""
 
 Confidence = Annotated[float, Between(0.5, 0.9999)]
+
+
+@dataclass(frozen=True)
+class GroupTiming:
+    """When it was known who belongs to which group: at the ``start``, only ``later``, or not said (None).
+
+    ``landmark_days``, for groups known later: the day after the start from which time is counted.
+    """
+
+    known: Literal["start", "later"] | None = None
+    landmark_days: Annotated[int, Between(1, 20_000)] | None = None
+
+
+NOT_SAID = GroupTiming()
+
+
+@dataclass(frozen=True)
+class AlikeRequest:
+    """Fields of ``compare.alike``."""
+
+    group: str
+    exposed: str
+    reference: str
+    interest: tuple[str, ...] = DEATHS
+    timing: GroupTiming = NOT_SAID
 
 
 @dataclass(frozen=True)
@@ -37,6 +65,7 @@ class DifferenceRequest:
     interest: tuple[str, ...] = DEATHS
     years: tuple[Annotated[float, Between(0, 150)], ...] = (1.0, 3.0, 5.0)
     confidence: Confidence = 0.95
+    timing: GroupTiming = NOT_SAID
 
 
 @dataclass(frozen=True)
@@ -50,6 +79,7 @@ class IntervalsRequest:
     step: Step = "year"
     intervals: Annotated[int, Between(1, 240)] = 5
     confidence: Confidence = 0.95
+    timing: GroupTiming = NOT_SAID
 
 
 @dataclass(frozen=True)
@@ -59,6 +89,7 @@ class RankTestRequest:
     group: str
     interest: tuple[str, ...] = DEATHS
     weight: Weight = "log_rank"
+    timing: GroupTiming = NOT_SAID
 
 
 @dataclass(frozen=True)
@@ -78,6 +109,41 @@ class CoxRequest:
     interest: tuple[str, ...] = DEATHS
     ties: Ties = "efron"
     confidence: Confidence = 0.95
+    timing: GroupTiming = NOT_SAID
+
+
+def compared(memory: Memory, timing: GroupTiming) -> Cohort:
+    """Return the cohort to compare groups in, counted from a landmark when the group was known only later.
+
+    Raises
+    ------
+    Refusal
+        ``group_known_later`` without a landmark; those of ``landmark.from_landmark``.
+    """
+    if timing.known != "later":
+        return memory.cohort()
+    if timing.landmark_days is None:
+        raise Refusal("group_known_later", field="timing.landmark_days")
+    return from_landmark(memory.cohort(), timing.landmark_days)
+
+
+def timing_cautions(timing: GroupTiming) -> list[Caution]:
+    """Return what has to be said of a comparison because of when its groups became known."""
+    if timing.known is None:
+        return [Caution("group_timing_not_said")]
+    if timing.known == "later":
+        return [Caution("counted_from_landmark", {"days": timing.landmark_days})]
+    return []
+
+
+def alike_groups(memory: Memory, request: AlikeRequest, report: Any) -> dict[str, Any]:
+    """Answer ``compare.alike``: an ``alike.Alike``."""
+    cohort = compared(memory, request.timing)
+    found = alike(cohort, request.group, request.exposed, request.reference, request.interest)
+    return {
+        **{field.name: getattr(found, field.name) for field in dataclasses.fields(found)},
+        "cautions": [*timing_cautions(request.timing), *found.cautions],
+    }
 
 
 def difference(memory: Memory, request: DifferenceRequest, report: Any) -> dict[str, Any]:
@@ -88,7 +154,9 @@ def difference(memory: Memory, request: DifferenceRequest, report: Any) -> dict[
     dict
         ``rows``, each a ``milestone.Milestone``; ``cautions``.
     """
-    exposed, reference = _pair(memory.cohort(), request.group, request.exposed, request.reference)
+    exposed, reference = _pair(
+        compared(memory, request.timing), request.group, request.exposed, request.reference
+    )
     curves = [
         product_limit(table, request.interest, confidence=request.confidence)
         for table in (exposed, reference)
@@ -97,7 +165,10 @@ def difference(memory: Memory, request: DifferenceRequest, report: Any) -> dict[
         "rows": [
             milestone_difference(*curves, years, confidence=request.confidence) for years in request.years
         ],
-        "cautions": _few_events({request.exposed: exposed, request.reference: reference}, request.interest),
+        "cautions": [
+            *timing_cautions(request.timing),
+            *_few_events({request.exposed: exposed, request.reference: reference}, request.interest),
+        ],
     }
 
 
@@ -111,8 +182,10 @@ def intervals(memory: Memory, request: IntervalsRequest, report: Any) -> dict[st
         effective, risk, odds}), risk_ratio, odds_ratio, risk_difference, number_needed}; ``pooled``
         and ``homogeneity`` as in ``stratified``; ``left_out`` [{from_days, to_days, code}]; ``cautions``.
     """
-    exposed, reference = _pair(memory.cohort(), request.group, request.exposed, request.reference)
-    compared = compare_intervals(
+    exposed, reference = _pair(
+        compared(memory, request.timing), request.group, request.exposed, request.reference
+    )
+    found = compare_intervals(
         exposed,
         reference,
         request.interest,
@@ -135,17 +208,18 @@ def intervals(memory: Memory, request: IntervalsRequest, report: Any) -> dict[st
                 "risk_difference": row.measures.risk_difference,
                 "number_needed": row.measures.number_needed,
             }
-            for row in compared.rows
+            for row in found.rows
         ],
-        "pooled": compared.pooled.pooled,
-        "homogeneity": compared.pooled.homogeneity,
+        "pooled": found.pooled.pooled,
+        "homogeneity": found.pooled.homogeneity,
         "left_out": [
             {"from_days": left.stratum * width, "to_days": (left.stratum + 1) * width, "code": left.code}
-            for left in compared.left_out
+            for left in found.left_out
         ],
         "cautions": [
+            *timing_cautions(request.timing),
             *_few_events({request.exposed: exposed, request.reference: reference}, request.interest),
-            *compared.cautions,
+            *found.cautions,
         ],
     }
 
@@ -159,20 +233,30 @@ def rank_tests(memory: Memory, request: RankTestRequest, report: Any) -> dict[st
         ``weight``, ``groups``, ``chi_squared``, ``df``, ``p`` as in ``rank_tests.RankTest``;
         ``left_out``; ``cautions``.
     """
-    groups = groups_of(memory.cohort(), request.group)
+    groups = groups_of(compared(memory, request.timing), request.group)
     tables = _named(groups)
     result = rank_test([tables], request.interest, weight=request.weight)
     return {
         **{field.name: getattr(result, field.name) for field in dataclasses.fields(result)},
         "left_out": groups.left_out,
-        "cautions": [*groups.cautions, *_few_events(tables, request.interest)],
+        "cautions": [
+            *timing_cautions(request.timing),
+            *groups.cautions,
+            *_few_events(tables, request.interest),
+        ],
     }
 
 
-def regression(memory: Memory, request: CoxRequest, report: Any) -> CoxFit:
-    """Answer ``compare.cox``: a ``cox.CoxFit``."""
+def regression(memory: Memory, request: CoxRequest, report: Any) -> dict[str, Any]:
+    """Answer ``compare.cox``: the fields of a ``cox.CoxFit``, and ``e_value`` of its first term."""
     choices = [Choice(choice.id, choice.reference, choice.per) for choice in request.covariates]
-    return cox(memory.cohort(), request.interest, choices, ties=request.ties, confidence=request.confidence)
+    cohort = compared(memory, request.timing)
+    fit = cox(cohort, request.interest, choices, ties=request.ties, confidence=request.confidence)
+    return {
+        **{field.name: getattr(fit, field.name) for field in dataclasses.fields(fit)},
+        "e_value": e_value(fit.terms[0].hazard_ratio, fit.events / fit.n),
+        "cautions": [*timing_cautions(request.timing), *fit.cautions],
+    }
 
 
 def _pair(cohort: Cohort, group: str, exposed: str, reference: str) -> tuple[RiskTable, RiskTable]:
@@ -200,6 +284,7 @@ def _few_events(tables: dict[str, RiskTable], interest: tuple[str, ...]) -> list
 
 
 TASKS = {
+    "compare.alike": (AlikeRequest, alike_groups),
     "compare.difference": (DifferenceRequest, difference),
     "compare.intervals": (IntervalsRequest, intervals),
     "compare.rank_test": (RankTestRequest, rank_tests),

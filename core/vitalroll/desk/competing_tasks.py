@@ -8,7 +8,14 @@ from typing import Any
 from vitalroll.comparison.cox import Term, cox
 from vitalroll.comparison.design import Choice
 from vitalroll.comparison.subdistribution import fine_gray
-from vitalroll.desk.comparison_tasks import Confidence, CovariateChoice
+from vitalroll.desk.comparison_tasks import (
+    NOT_SAID,
+    Confidence,
+    CovariateChoice,
+    GroupTiming,
+    compared,
+    timing_cautions,
+)
 from vitalroll.desk.memory import Memory
 from vitalroll.errors import Refusal
 from vitalroll.register.cohort import DEATHS, Cohort
@@ -19,12 +26,13 @@ RULED_OUT_BY = (*DEATHS, "recovered")
 
 @dataclass(frozen=True)
 class SubdistributionRequest:
-    """Fields of ``compare.subdistribution``; ``competing`` None: every death, and recovery, not of interest."""
+    """Fields of ``compare.subdistribution``; ``competing`` None: deaths and recovery not of interest."""
 
     covariates: tuple[CovariateChoice, ...]
     interest: tuple[str, ...] = DEATHS
     competing: tuple[str, ...] | None = None
     confidence: Confidence = 0.95
+    timing: GroupTiming = NOT_SAID
 
 
 def subdistribution(memory: Memory, request: SubdistributionRequest, report: Any) -> dict[str, Any]:
@@ -37,7 +45,7 @@ def subdistribution(memory: Memory, request: SubdistributionRequest, report: Any
         ``of_interest`` and ``of_competing``, the terms of the cause-specific models, empty where such a
         model was refused; ``cautions``.
     """
-    cohort = memory.cohort()
+    cohort = compared(memory, request.timing)
     choices = [Choice(choice.id, choice.reference, choice.per) for choice in request.covariates]
     competing = request.competing
     if competing is None:
@@ -48,7 +56,7 @@ def subdistribution(memory: Memory, request: SubdistributionRequest, report: Any
         "competing": competing,
         "of_interest": _cause_specific(cohort, request.interest, choices, request.confidence),
         "of_competing": _cause_specific(cohort, competing, choices, request.confidence),
-        "cautions": fit.cautions,
+        "cautions": [*timing_cautions(request.timing), *fit.cautions],
     }
 
 

@@ -3,6 +3,7 @@
 from __future__ import annotations
 
 import dataclasses
+import datetime
 import math
 from collections.abc import Mapping
 from typing import Any
@@ -32,6 +33,8 @@ def _plain(value: Any, path: str, nulls: list[dict[str, Any]]) -> Any:
             return number
         nulls.append({"path": path, "at": None, "reason": _reason(number)})
         return None
+    if isinstance(value, datetime.date):
+        return value.isoformat()
     if isinstance(value, np.ndarray):
         if value.ndim == 0:
             return _plain(value.item(), path, nulls)

@@ -14,6 +14,7 @@ from vitalroll.desk import (
     counts_tasks,
     findings_tasks,
     outcome_tasks,
+    planning_tasks,
     register_tasks,
 )
 
@@ -25,5 +26,6 @@ TASKS = {
     **counts_tasks.TASKS,
     **findings_tasks.TASKS,
     **outcome_tasks.TASKS,
+    **planning_tasks.TASKS,
     **register_tasks.TASKS,
 }

@@ -46,12 +46,15 @@ export function named(app, parameters = {}) {
   for (const name of ['start', 'end', 'birth', 'observed_from', 'last']) {
     if (/^\d{4}-\d{2}-\d{2}$/.test(values[name])) values[name] = app.words.day(values[name]);
   }
-  if (typeof values.share === 'number') values.share = app.words.percent(values.share, 0);
+  for (const name of ['share', 'other_share']) {
+    if (typeof values[name] === 'number') values[name] = app.words.percent(values[name], 0);
+  }
   // A caution about everybody carries level null.
   if ('level' in values) values.level = levelName(app, app.store.state.question.group, values.level);
   for (const name of ['covariate', 'column', 'group', 'id']) {
     if (typeof values[name] === 'string') values[name] = covariateName(app, values[name]);
   }
+  if (Array.isArray(values.covariates)) values.covariates = values.covariates.map((id) => covariateName(app, id)).join(', ');
   return values;
 }
 

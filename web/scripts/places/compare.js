@@ -4,11 +4,13 @@ import { h } from '../parts/element.js';
 import { live } from '../parts/live.js';
 import { noRegister, questionChoices } from '../parts/question.js';
 import { levelName } from '../parts/said.js';
+import { alikeBlock } from './compare/alike.js';
 import { competingBlock } from './compare/competing.js';
 import { coxBlock } from './compare/cox.js';
 import { differenceBlock } from './compare/difference.js';
 import { intervalsBlock } from './compare/intervals.js';
 import { pairOf } from './compare/pair.js';
+import { timingChoices } from './compare/timing.js';
 import { rankTestBlock } from './compare/rank_test.js';
 
 /** @param {import('../app.js').App} app */
@@ -21,6 +23,8 @@ export function comparePlace(app) {
       h('p', {}, app.words.say('compare-lead')),
       questionChoices(app, { place: 'compare', groupRequired: true }),
       pairChoices(app),
+      timingChoices(app),
+      alikeBlock(app),
       differenceBlock(app),
       rankTestBlock(app),
       intervalsBlock(app),

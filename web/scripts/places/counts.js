@@ -3,6 +3,7 @@ import { h } from '../parts/element.js';
 import { live } from '../parts/live.js';
 import { balancePart } from './counts/balance.js';
 import { lifeTablePart } from './counts/life_table.js';
+import { planningPart } from './counts/planning.js';
 import { strataPart } from './counts/strata.js';
 
 /** @param {import('../app.js').App} app */
@@ -13,5 +14,6 @@ export function countsPlace(app) {
     lifeTablePart(app),
     strataPart(app),
     balancePart(app),
+    planningPart(app),
   ]);
 }

@@ -22,8 +22,8 @@ export function competingBlock(app) {
     ask: (state) => {
       const cox = coxRequest(state);
       if (!cox) return null;
-      const { covariates, interest } = cox.request;
-      return { task: 'compare.subdistribution', request: { covariates, interest, competing: competing(state) } };
+      const { covariates, interest, timing } = cox.request;
+      return { task: 'compare.subdistribution', request: { covariates, interest, timing, competing: competing(state) } };
     },
     draw: (answer) => draw(app, answer),
   });

@@ -2,7 +2,7 @@
 import { choiceRow, numberField, selectOne, tickSeveral } from '../../parts/choices.js';
 import { live } from '../../parts/live.js';
 import { covariateName, levelName } from '../../parts/said.js';
-import { pairOf } from './pair.js';
+import { pairOf, timingOf } from './pair.js';
 
 const MOST_LEVELS = 20;
 const YEARS_OF_AGE = 10;
@@ -38,7 +38,7 @@ export function coxRequest(state) {
   if (!state.cohort || covariates.length === 0) return null;
   // The compared group comes first: it is what the question is about.
   const ordered = [...covariates].sort((one, other) => Number(other.id === state.question.group) - Number(one.id === state.question.group));
-  return { task: 'compare.cox', request: { interest: state.question.interest, covariates: ordered, ties: state.compare.ties } };
+  return { task: 'compare.cox', request: { interest: state.question.interest, covariates: ordered, ties: state.compare.ties, timing: timingOf(state) } };
 }
 
 /** @param {import('../../app.js').App} app */

@@ -26,6 +26,7 @@ function drawCox(app, answer) {
   return [
     ...terms.slice(0, 1).map((term) => mainSentence(app, term, answer)),
     h('p', {}, say('cox-does-not-mean')),
+    h('p', {}, hiddenCause(app, answer.e_value)),
     figure(app, {
       name: 'hazard-ratios', title: say('cox-figure'), described: say('cox-figure-described', { terms: terms.length }),
       draw: (width) => hazardRatios(terms, { width, words }),
@@ -58,6 +59,13 @@ function mainSentence(app, term, answer) {
     term: term.label, ratio: ratio(value), interval: say('from-to', { lower: ratio(lower), upper: ratio(upper) }),
     p: pValue(term.p), others: new Set(answer.terms.map(({ id }) => id)).size - 1, n: answer.n, events: answer.events,
   }));
+}
+
+/** How strong something unmeasured would have to be to explain the first ratio away. */
+function hiddenCause(app, { estimate, limit, common }) {
+  const { say, ratio } = app.words;
+  const key = limit > 1 ? 'e-value' : 'e-value-of-unclear';
+  return say(key, { estimate: ratio(estimate), limit: ratio(limit), scale: common ? 'common' : 'rare' });
 }
 
 function termsTable(app, terms) {

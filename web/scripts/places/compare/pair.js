@@ -1,4 +1,5 @@
 /** The two groups that are compared, chosen or, until then, the two with the most patients. */
+import { DAYS_PER_YEAR } from '../../units.js';
 
 /**
  * @param {import('../../store.js').State} state
@@ -17,5 +18,13 @@ export function pairOf({ question, cohort, compare }) {
 /** The part of a request that names the two groups, or null. */
 export function pairRequest(state) {
   const pair = pairOf(state);
-  return pair && { interest: state.question.interest, group: pair.group, exposed: pair.exposed, reference: pair.reference };
+  return pair && {
+    interest: state.question.interest, group: pair.group, exposed: pair.exposed, reference: pair.reference, timing: timingOf(state),
+  };
+}
+
+/** When the groups became known, as the engine asks for it. @param {import('../../store.js').State} state */
+export function timingOf({ compare: { known, landmarkMonths } }) {
+  const landmark = known === 'later' && landmarkMonths > 0;
+  return { known, landmark_days: landmark ? Math.max(1, Math.round(landmarkMonths * DAYS_PER_YEAR / 12)) : null };
 }

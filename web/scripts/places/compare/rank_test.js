@@ -5,6 +5,7 @@ import { h } from '../../parts/element.js';
 import { live } from '../../parts/live.js';
 import { cautionList, levelName } from '../../parts/said.js';
 import { table } from '../../parts/table.js';
+import { timingOf } from './pair.js';
 
 const WEIGHTS = ['log_rank', 'gehan', 'tarone_ware', 'fleming_harrington'];
 
@@ -15,9 +16,11 @@ export function rankTestBlock(app) {
     title: 'rank-test-title',
     empty: 'compare-choose-group',
     choices: weightChoice(app),
-    ask: ({ cohort, question, compare }) => cohort && question.group && {
+    ask: (state) => state.cohort && state.question.group && {
       task: 'compare.rank_test',
-      request: { interest: question.interest, group: question.group, weight: compare.weight },
+      request: {
+        interest: state.question.interest, group: state.question.group, weight: state.compare.weight, timing: timingOf(state),
+      },
     },
     draw: (answer, state) => drawRankTest(app, answer, state.question.group),
   });
