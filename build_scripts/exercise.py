@@ -42,9 +42,7 @@ def everything() -> None:
     group = next(each["id"] for each in cohort["covariates"] if each["heading"] == BY_HEADING)
     _outcomes(ask, group)
     _comparisons(ask, group)
-    change = {"fewer_lost": 50, "from_year": 1}
-    ask("caseload.history")
-    ask("caseload.project", years=3, what_if=change, resources={"visits": 12}, draws=100)
+    _caseload(ask)
     _counts(ask)
     ask("register.forget")
     left_out = set(desk.tasks()) - asked
@@ -83,6 +81,15 @@ def _comparisons(ask: Any, group: str) -> None:
     ask("compare.rank_test", group=group)
     ask("compare.cox", covariates=[{"id": group, "reference": "Mild"}, {"id": "age", "per": 10}])
     ask("compare.subdistribution", covariates=[{"id": group}], interest=["died_of_disease"])
+
+
+def _caseload(ask: Any) -> None:
+    setting = {"years": 3, "draws": 100}
+    items = [{"name": "Visits", "at_start": 2, "first_year": 1, "later": 0.5, "unit_cost": 8}]
+    lines = [{"kind": "amount", "item": 0, "limit": 900}, {"kind": "beds", "item": 0, "limit": 90}]
+    ask("caseload.history")
+    ask("caseload.project", **setting)
+    ask("caseload.resources", **setting, items=items, lines=lines)
 
 
 def _counts(ask: Any) -> None:

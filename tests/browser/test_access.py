@@ -27,6 +27,8 @@ def with_demo(opened: Callable, site: SiteServer, **options: object) -> Page:
     show(page, "counts")
     for part in ("lifeTable", "strata", "balance"):
         page.locator(f"#{part}-example").click()
+    show(page, "caseload")
+    page.locator("#items-example").click()
     for place in PLACES:
         show(page, place)
     return page

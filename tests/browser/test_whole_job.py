@@ -99,11 +99,13 @@ def _compare(page: Page, native: Callable) -> None:
 
 def _caseload(page: Page, native: Callable) -> None:
     go(page, "Caseload")
-    page.locator("#resources-visits").fill("12")
-    page.locator("#resources-visits").press("Tab")
-    change = {"fewer_newcomers": 0, "fewer_lost": 50, "fewer_deaths": 0, "from_year": 1}
-    expected = native("caseload.project", {"years": 5, "what_if": change, "resources": {"visits": 12}})
-    page.locator("#resources .sentence").wait_for(timeout=ANSWER_MS)
+    page.locator("#items-0-name").fill("Visits")
+    page.locator("#items-0-first_year").fill("1")
+    page.locator("#items-0-later").fill("1")
+    page.locator("#items-0-later").press("Tab")
+    items = [{"name": "Visits", "first_year": 1, "later": 1}]
+    expected = native("caseload.project", {"years": 5})
+    page.locator("#resources table").first.wait_for(timeout=ANSWER_MS)
     rows = table_rows(page, "Patients under care at the end of each year")
     assert len(rows) == 6
     for row, band in zip(rows, expected["baseline"]["under_care"], strict=True):
@@ -111,7 +113,8 @@ def _caseload(page: Page, native: Callable) -> None:
     # The redrawn bands come from the same seed in both places.
     assert numbers(rows[-1][3]) == [round(limit) for limit in expected["baseline"]["under_care"][-1]["p95"]]
     visits = table_rows(page, "Visits in each year")
-    assert numbers(visits[-1][1])[0] == round(expected["baseline"]["resources"]["visits"][-1]["value"])
+    taken = native("caseload.resources", {"years": 5, "items": items})["items"][0]["amount"][-1]
+    assert numbers(visits[-1][1])[0] == round(taken["value"])
 
 
 def _report(page: Page, folder: Path) -> None:

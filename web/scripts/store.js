@@ -29,8 +29,7 @@ export function beginnings(language) {
     compare: { exposed: null, reference: null, step: 'year', intervals: 5, weight: 'log_rank', covariates: [], ties: 'efron', competing: null, known: null, landmarkMonths: null },
     caseload: {
       years: 5, basis: 'history', perYear: null,
-      resources: { visits: 0, medicine_units: 0, cost: 0 },
-      whatIf: { on: true, fewer_newcomers: 0, fewer_lost: 50, fewer_deaths: 0, from_year: 1 },
+      items: [], lines: [], discount: 3,
     },
     counts: {
       lifeTable: { entering: null, rows: [] },

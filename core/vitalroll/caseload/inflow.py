@@ -60,6 +60,8 @@ class Inflow:
         those who started here, more for those who came later from elsewhere. A single 0 when
         the history has no newcomers.
     cautions : tuple of Caution
+    growth_percent : float
+        By how much each year after the first brings more newcomers than the year before.
     """
 
     years: tuple[YearCount, ...]
@@ -70,6 +72,15 @@ class Inflow:
     history_years: float
     days_at_arrival: np.ndarray = field(default_factory=lambda: np.zeros(1, dtype=np.int64))
     cautions: tuple[Caution, ...] = ()
+    growth_percent: float = 0.0
+
+    def growth(self, years: int) -> np.ndarray:
+        """Return what the yearly number is multiplied by in each year ahead, shape (years,)."""
+        return (1 + self.growth_percent / 100) ** np.arange(years)
+
+    def per_year_ahead(self, years: int) -> np.ndarray:
+        """Return the newcomers expected in each year ahead, shape (years,)."""
+        return self.per_year.value * self.growth(years)
 
     @property
     def spread(self) -> float:

@@ -13,7 +13,7 @@ from dataclasses import dataclass
 import numpy as np
 
 from vitalroll.caseload.retention import Retention
-from vitalroll.caseload.scenario import WhatIf
+from vitalroll.caseload.scenario import Scenario, as_it_is
 from vitalroll.errors import Refusal
 from vitalroll.numbers import DAYS_PER_MONTH
 from vitalroll.outcomes.competing import WAYS_OF_LEAVING
@@ -89,6 +89,8 @@ class Path:
     ----------
     under_care : float array, shape (months + 1,)
         Patients under care at the end of each month; the first entry is today.
+    first_year : float array, shape (months + 1,)
+        Those of ``under_care`` whose start lies less than a year back.
     newcomers : float array, shape (months,)
     leaving : float array, shape (months, len(WAYS_OF_LEAVING))
     beyond_support : float array, shape (months + 1,)
@@ -96,13 +98,17 @@ class Path:
     """
 
     under_care: np.ndarray
+    first_year: np.ndarray
     newcomers: np.ndarray
     leaving: np.ndarray
     beyond_support: np.ndarray
 
 
-def ageing(edges: np.ndarray) -> Ageing:
-    """Lay out the slots for stretches with the given edges (whole years, from 0)."""
+def ageing(edges: np.ndarray, *, cuts: tuple[int, ...] = ()) -> Ageing:
+    """Lay out the slots for stretches with the given edges (whole years, from 0).
+
+    ``cuts`` are slots at which a run begins besides, without changing any hazard.
+    """
     stretch = np.eye(len(edges) - 1)
     ends = np.asarray(edges[1:] * MONTHS_PER_YEAR, dtype=np.int64)
     begins, mixing = [0], [stretch[0]]
@@ -110,7 +116,13 @@ def ageing(edges: np.ndarray) -> Ageing:
         begins += [int(end), int(end) + 1]
         mixing += [(stretch[this] + stretch[this + 1]) / 2, stretch[this + 1]]
     # The hazard of the last stretch is held beyond its end: nothing to cross there.
-    return Ageing(slots=int(ends[-1]) + 2, begins=np.array(begins), mixing=np.array(mixing))
+    slots = int(ends[-1]) + 2
+    for cut in cuts:
+        if cut not in begins and cut < slots:
+            position = int(np.searchsorted(begins, cut))
+            begins.insert(position, cut)
+            mixing.insert(position, mixing[position - 1])
+    return Ageing(slots=slots, begins=np.array(begins), mixing=np.array(mixing))
 
 
 def months_here_today(cohort: Cohort) -> np.ndarray:
@@ -140,11 +152,11 @@ def shares_by_way(monthly: np.ndarray) -> np.ndarray:
 def project(
     today: np.ndarray,
     hazards: Retention,
-    newcomers_per_year: float,
+    newcomers_per_year: float | np.ndarray,
     *,
     years: int,
     days_at_arrival: np.ndarray | None = None,
-    what_if: WhatIf | None = None,
+    scenario: Scenario | None = None,
 ) -> Path:
     """Run the caseload forward and return what is expected.
 
@@ -153,13 +165,12 @@ def project(
     today : int array, shape (n,)
         Whole months since start of each patient under care today.
     hazards : Retention
-    newcomers_per_year : float
-        Arriving evenly through the year.
+    newcomers_per_year : float or float array, shape (at least ``years``,)
+        Arriving evenly through each year; the last one holds for later years.
     years : int
     days_at_arrival : int array, optional
         Days since start of newcomers as they arrive, a sample; by default all start here.
-    what_if : WhatIf, optional
-        Holds from the first month of its ``from_year``.
+    scenario : Scenario, optional
 
     Returns
     -------
@@ -179,31 +190,45 @@ def project(
     """
     if years < 1:
         raise Refusal("out_of_range", field="years", given=years, least=1)
-    if newcomers_per_year < 0:
-        raise Refusal("out_of_range", field="newcomers.per_year", given=newcomers_per_year, least=0.0)
+    rate = np.atleast_1d(np.asarray(newcomers_per_year, dtype=float))
+    if np.any(rate < 0):
+        raise Refusal("out_of_range", field="newcomers.per_year", given=float(rate.min()), least=0.0)
+    steps = MONTHS_PER_YEAR * years
     axis = ageing(hazards.edges)
     monthly = axis.hazards(hazards.hazards)
-    staying, shares = axis.staying(monthly), shares_by_way(monthly)
-    arriving = newcomers_per_year / MONTHS_PER_YEAR
+    kept = scenario.over(steps) if scenario else as_it_is(steps)
+    lead = kept.lead_months
+    due = rate[np.minimum(np.arange(steps + lead) // MONTHS_PER_YEAR, len(rate) - 1)] / MONTHS_PER_YEAR
+    early = kept.found_early * due[lead : steps + lead]
+    arriving = (due[:steps] - np.concatenate((np.zeros(lead), early))[:steps]) * kept.newcomers
+    early = early * kept.newcomers
     into = axis.arriving(np.zeros(1) if days_at_arrival is None else days_at_arrival)
-    changed_from = MONTHS_PER_YEAR * (what_if.from_year - 1) if what_if else None
-    steps = MONTHS_PER_YEAR * years
-    here = axis.place(today).astype(float)
-    under_care, beyond = [here.sum()], [here[-1]]
-    newcomers, leaving = np.empty(steps), np.empty((steps, len(WAYS_OF_LEAVING)))
+    here, found = axis.place(today).astype(float), np.zeros(axis.slots)
+    under_care, first_year, beyond = ([of(here)] for of in (np.sum, _within_a_year, _last))
+    leaving = np.empty((steps, len(WAYS_OF_LEAVING)))
     for month in range(steps):
-        if month == changed_from:
-            monthly = monthly * what_if.hazards_kept
-            staying, shares = axis.staying(monthly), shares_by_way(monthly)
-            arriving = arriving * what_if.newcomers_kept
-        newcomers[month] = arriving
-        here = here + arriving * into
-        leavers = here * (1 - staying)
-        leaving[month] = np.add.reduceat(leavers, axis.begins) @ shares
-        here = moved_on(here - leavers)
-        under_care.append(here.sum())
-        beyond.append(here[-1])
-    return Path(np.array(under_care), newcomers, leaving, np.array(beyond))
+        here, left = _month(axis, here + arriving[month] * into, monthly * kept.hazards[month])
+        found[0] += early[month]
+        found, left_of_found = _month(axis, found, monthly * kept.hazards[month] * kept.hazards_early)
+        leaving[month] = left + left_of_found
+        under_care.append(here.sum() + found.sum())
+        first_year.append(_within_a_year(here) + _within_a_year(found))
+        beyond.append(here[-1] + found[-1])
+    return Path(np.array(under_care), np.array(first_year), arriving + early, leaving, np.array(beyond))
+
+
+def _month(axis: Ageing, here: np.ndarray, monthly: np.ndarray) -> tuple[np.ndarray, np.ndarray]:
+    """Return those here a month later and those who have left by way."""
+    leavers = here * (1 - axis.staying(monthly))
+    return moved_on(here - leavers), np.add.reduceat(leavers, axis.begins) @ shares_by_way(monthly)
+
+
+def _within_a_year(here: np.ndarray) -> float:
+    return float(here[: MONTHS_PER_YEAR + 1].sum())
+
+
+def _last(here: np.ndarray) -> float:
+    return float(here[-1])
 
 
 def moved_on(staying: np.ndarray) -> np.ndarray:

@@ -16,6 +16,7 @@ from vitalroll.desk import (
     outcome_tasks,
     planning_tasks,
     register_tasks,
+    resource_tasks,
 )
 
 TASKS = {
@@ -28,4 +29,5 @@ TASKS = {
     **outcome_tasks.TASKS,
     **planning_tasks.TASKS,
     **register_tasks.TASKS,
+    **resource_tasks.TASKS,
 }

@@ -6,10 +6,10 @@ import math
 
 import numpy as np
 
+from vitalroll.caseload.courses import redraw
 from vitalroll.caseload.inflow import inflow_from_history
 from vitalroll.caseload.projection import months_here_today
 from vitalroll.caseload.retention import retention
-from vitalroll.caseload.uncertainty import redraw
 from vitalroll.numbers import DAYS_PER_YEAR
 from vitalroll.outcomes.risk_table import risk_table
 from vitalroll.register.cohort import Cohort, meaning_code
@@ -68,7 +68,7 @@ def test_bands_hold_the_truth_as_often_as_they_say():
             draws=200,
             seed=trial,
         )
-        low95, low80, high80, high95 = np.quantile(drawn.baseline.under_care[:, -1], (0.025, 0.1, 0.9, 0.975))
+        low95, low80, high80, high95 = np.quantile(drawn[0].under_care[:, -1], (0.025, 0.1, 0.9, 0.975))
         truth = np.count_nonzero((arrival <= HORIZON) & (leaving > HORIZON))
         held80 += low80 <= truth <= high80
         held95 += low95 <= truth <= high95

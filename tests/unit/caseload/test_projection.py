@@ -17,7 +17,7 @@ from vitalroll.caseload.projection import (
     project,
     yearly_sums,
 )
-from vitalroll.caseload.scenario import WhatIf
+from vitalroll.caseload.scenario import Lever, Scenario
 from vitalroll.errors import Refusal
 from vitalroll.outcomes.competing import WAYS_OF_LEAVING
 
@@ -109,7 +109,20 @@ def test_every_month_since_start_has_its_place(months):
 yearly_hazards = st.lists(
     st.dictionaries(st.sampled_from(WAYS_OF_LEAVING), st.floats(0, 3), max_size=7), min_size=1, max_size=5
 )
-percentages = st.floats(0, 100)
+levers = st.builds(
+    Lever,
+    st.sampled_from(("fewer_newcomers", "fewer_lost", "fewer_deaths", "fewer_stopped", "more_completed")),
+    st.floats(0, 100),
+    from_month=st.integers(1, 48),
+    ramp_months=st.integers(0, 24),
+)
+found_earlier = st.builds(
+    Lever,
+    st.just("found_earlier"),
+    st.floats(0, 100),
+    months_earlier=st.integers(1, 24),
+    ramp_months=st.integers(0, 9),
+)
 
 
 @given(
@@ -117,22 +130,25 @@ percentages = st.floats(0, 100)
     st.lists(st.integers(0, 300), min_size=1, max_size=30),
     st.floats(0, 500),
     st.integers(1, 4),
-    st.builds(WhatIf, percentages, percentages, percentages, st.integers(1, 4)) | st.none(),
+    st.none() | st.builds(Scenario, st.just(""), st.tuples(levers, levers, found_earlier)),
 )
-def test_every_patient_is_somewhere_in_every_month(hazards, today, newcomers, years, what_if):
-    path = project(np.array(today), known_hazards(*hazards), newcomers, years=years, what_if=what_if)
+def test_every_patient_is_somewhere_in_every_month(hazards, today, newcomers, years, scenario):
+    path = project(np.array(today), known_hazards(*hazards), newcomers, years=years, scenario=scenario)
     flow = path.newcomers - path.leaving.sum(axis=1)
     np.testing.assert_allclose(np.diff(path.under_care), flow, rtol=1e-9, atol=1e-9)
     assert np.all(path.leaving >= 0)
     assert np.all(path.under_care >= 0)
+    assert np.all(path.first_year <= path.under_care * (1 + 1e-12))
     assert np.all(path.beyond_support <= path.under_care * (1 + 1e-12))
 
 
-def test_a_what_if_holds_from_its_year_on_and_multiplies_the_hazards():
+def test_a_scenario_holds_from_its_month_on_and_multiplies_the_hazards():
     hazards = known_hazards({"died_of_disease": 0.1, "lost": 0.3})
-    today, change = np.full(1000, 4), WhatIf(fewer_lost=50, fewer_newcomers=25, from_year=2)
+    today = np.full(1000, 4)
+    levers = (Lever("fewer_lost", 50, from_month=13), Lever("fewer_newcomers", 25, from_month=13))
+    change = Scenario("", levers)
     baseline = project(today, hazards, 120.0, years=3)
-    changed = project(today, hazards, 120.0, years=3, what_if=change)
+    changed = project(today, hazards, 120.0, years=3, scenario=change)
     np.testing.assert_array_equal(changed.under_care[:13], baseline.under_care[:13])
     assert yearly_sums(changed.newcomers).tolist() == pytest.approx([120, 90, 90])
     # From then on 90 newcomers a year, deaths 0.1 and losses 0.15 per person-year.
@@ -140,6 +156,24 @@ def test_a_what_if_holds_from_its_year_on_and_multiplies_the_hazards():
     expected = steady + (changed.under_care[12] - steady) * np.exp(-0.25 * np.arange(25) / 12)
     np.testing.assert_allclose(changed.under_care[12:], expected, rtol=1e-12)
     np.testing.assert_allclose(changed.leaving[12:, LOST], 1.5 * changed.leaving[12:, DEATH], rtol=1e-12)
+
+
+def test_patients_found_early_bring_their_arrival_forward_and_come_once():
+    # Nobody leaves. From month 3 on half of those due 4 months later come at once; from month 7 on
+    # half of those due have been there: 10 a month, then 15, then 10 again.
+    early = Scenario("", (Lever("found_earlier", 50, from_month=3, months_earlier=4),))
+    path = project(np.zeros(0, dtype=int), known_hazards({}), 120.0, years=1, scenario=early)
+    assert path.newcomers.tolist() == pytest.approx([10, 10, 15, 15, 15, 15, 10, 10, 10, 10, 10, 10])
+    assert path.first_year.tolist() == pytest.approx(path.under_care.tolist())
+
+
+def test_those_in_their_first_year_are_told_apart():
+    # 12 newcomers a year, nobody leaves: after 18 months one from each of the last 12 months.
+    path = project(np.array([3, 11, 12]), known_hazards({}), 12.0, years=2)
+    assert path.first_year[0] == 2
+    assert path.first_year[1] == 2  # the one of 11 months has passed the year, one has come
+    assert path.first_year[18] == 12
+    assert path.under_care[18] == 3 + 18
 
 
 def test_against_following_each_patient_on_his_own():

@@ -6,7 +6,8 @@ import { h } from './element.js';
  * @typedef {object} GridColumn
  * @property {string} name of the field in a row
  * @property {string} heading
- * @property {'text'|'number'} kind
+ * @property {'text'|'number'|'choice'} kind
+ * @property {Array<{value: string, label: string}>} [options] of a choice
  * @property {number} [least]
  * @property {number|'any'} [step]
  */
@@ -25,12 +26,15 @@ export function typedGrid(app, { id, caption, columns, rows, current, blank, fau
   function cell(row, position, column) {
     const fault = faults(row)[column.name];
     const field = `${id}-${position}-${column.name}`;
-    const input = h('input', {
-      id: field, type: column.kind, value: row[column.name] ?? '', min: column.least, step: column.step ?? (column.kind === 'number' ? 'any' : null),
-      inputmode: column.kind === 'number' ? 'decimal' : null, autocomplete: 'off',
-      'aria-label': say('grid-cell', { column: column.heading, row: position + 1 }),
+    const naming = {
+      id: field, 'aria-label': say('grid-cell', { column: column.heading, row: position + 1 }),
       'aria-invalid': fault ? 'true' : null, 'aria-describedby': fault ? `${field}-fault` : null,
       onchange: (event) => replace(position, { [column.name]: read(event.target.value, column) }),
+    };
+    const input = column.kind === 'choice' ? h('select', naming, column.options.map(({ value, label }) =>
+      h('option', { value, selected: value === row[column.name] }, label))) : h('input', {
+      ...naming, type: column.kind, value: row[column.name] ?? '', min: column.least, step: column.step ?? (column.kind === 'number' ? 'any' : null),
+      inputmode: column.kind === 'number' ? 'decimal' : null, autocomplete: 'off',
       onpaste: (event) => paste(event, position, column),
     });
     return h('td', {}, input, fault && h('p', { class: 'fault', id: `${field}-fault` }, fault));
@@ -70,7 +74,7 @@ export function typedGrid(app, { id, caption, columns, rows, current, blank, fau
 
 /** What was typed or pasted: numbers may have a decimal comma or spaces between thousands. */
 function read(text, column) {
-  if (column.kind === 'text') return text;
+  if (column.kind !== 'number') return text;
   const plain = text.replace(/[\s\u00a0\u202f]/g, '').replace(',', '.');
   const number = Number(plain);
   return plain === '' || Number.isNaN(number) ? null : number;

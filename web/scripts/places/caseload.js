@@ -5,13 +5,12 @@ import { noRegister } from '../parts/question.js';
 import { historyBlock } from './caseload/history.js';
 import { projectionBlock } from './caseload/projection.js';
 import { resourcesBlock } from './caseload/resources.js';
-import { whatIfBlock } from './caseload/what_if.js';
 
 /** @param {import('../app.js').App} app */
 export function caseloadPlace(app) {
   return live(app, (state) => Boolean(state.cohort), (state) => {
     const heading = h('h1', {}, app.words.say('caseload-title'));
     if (!state.cohort) return [heading, noRegister(app)];
-    return [heading, h('p', {}, app.words.say('caseload-lead')), historyBlock(app), projectionBlock(app), whatIfBlock(app), resourcesBlock(app)];
+    return [heading, h('p', {}, app.words.say('caseload-lead')), historyBlock(app), projectionBlock(app), resourcesBlock(app)];
   });
 }

@@ -8,9 +8,7 @@ import { live } from '../../parts/live.js';
 import { cautionList } from '../../parts/said.js';
 import { table } from '../../parts/table.js';
 import { bandColumns } from './bands.js';
-import { projectionRequest } from './request.js';
-
-const FARTHEST = 30;
+import { FARTHEST, projectionRequest, yearsAreFine } from './request.js';
 
 /** @param {import('../../app.js').App} app */
 export function projectionBlock(app) {
@@ -30,7 +28,8 @@ function choices(app) {
     return [choiceRow(
       numberField({
         id: 'caseload-years', label: say('years-ahead'), value: caseload.years, least: 1, greatest: FARTHEST, step: 1,
-        onchange: (years) => years >= 1 && years <= FARTHEST && app.store.amend('caseload', { years: Math.round(years) }),
+        fault: yearsAreFine(caseload.years) ? null : say('fault-whole-between', { least: 1, greatest: FARTHEST }),
+        onchange: (years) => app.store.amend('caseload', { years }),
       }),
       selectOne({
         id: 'caseload-basis', label: say('newcomers-basis'), value: caseload.basis,
@@ -39,6 +38,7 @@ function choices(app) {
       }),
       caseload.basis === 'typed' ? numberField({
         id: 'caseload-per-year', label: say('newcomers-per-year'), value: caseload.perYear, least: 0,
+        fault: caseload.perYear < 0 ? say('fault-negative') : null,
         onchange: (perYear) => app.store.amend('caseload', { perYear }),
       }) : null)];
   });
@@ -48,15 +48,11 @@ function drawProjection(app, answer) {
   const { words } = app;
   const { say, count, day } = words;
   const last = answer.baseline.under_care.at(-1);
-  const courses = [
-    { label: say('baseline'), bands: answer.baseline.under_care },
-    ...(answer.what_if ? [{ label: say('what-if'), bands: answer.what_if.under_care }] : []),
-  ];
+  const courses = [{ label: say('baseline'), bands: answer.baseline.under_care }];
   const rows = answer.baseline.under_care.map((band, year) => ({
     ends: year === 0 ? answer.closing_date : answer.years[year - 1].ends, band,
     newcomers: year === 0 ? null : answer.baseline.newcomers[year - 1],
     gone: year === 0 ? null : leftInYear(answer.baseline, year - 1),
-    other: answer.what_if?.under_care[year],
   }));
   return [
     h('p', { class: 'sentence' }, say('projection-sentence', {
@@ -74,7 +70,6 @@ function drawProjection(app, answer) {
         ...bandColumns(app, say('under-care'), (row) => row.band),
         { heading: say('newcomers'), show: (row) => count(row.newcomers?.value), full: (row) => row.newcomers?.value },
         { heading: say('left-in-all'), show: (row) => count(row.gone), full: (row) => row.gone },
-        ...(answer.what_if ? [{ heading: say('what-if'), show: (row) => count(row.other.value), full: (row) => row.other.value }] : []),
       ],
     }),
     cautionList(app, answer.cautions),

@@ -1,23 +1,26 @@
-/** The one question behind projection, what-if and resources: asked once, drawn three times. */
+/** What every question about the coming years is asked with. */
 
 const DRAWS = 1000;
 const SEED = 1;
+export const FARTHEST = 30;
+
+/**
+ * The setting that is chosen, or null while it cannot be asked with.
+ * @param {import('../../store.js').State} state
+ */
+export function setting({ cohort, caseload }) {
+  if (!cohort) return null;
+  const { years, basis, perYear } = caseload;
+  if (!yearsAreFine(years) || (basis === 'typed' && !(perYear >= 0 && perYear !== null))) return null;
+  return { years, newcomers: { basis, per_year: basis === 'typed' ? perYear : null }, draws: DRAWS, seed: SEED };
+}
 
 /** @param {import('../../store.js').State} state */
-export function projectionRequest({ cohort, caseload }) {
-  if (!cohort) return null;
-  const { years, basis, perYear, resources, whatIf } = caseload;
-  if (basis === 'typed' && perYear === null) return null;
-  const { on, ...change } = whatIf;
-  return {
-    task: 'caseload.project',
-    request: {
-      years,
-      newcomers: { basis, per_year: basis === 'typed' ? perYear : null },
-      resources,
-      what_if: on ? { ...change, from_year: Math.min(change.from_year, years) } : null,
-      draws: DRAWS,
-      seed: SEED,
-    },
-  };
+export function projectionRequest(state) {
+  const request = setting(state);
+  return request && { task: 'caseload.project', request };
+}
+
+export function yearsAreFine(years) {
+  return Number.isInteger(years) && years >= 1 && years <= FARTHEST;
 }
