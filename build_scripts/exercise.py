@@ -38,6 +38,8 @@ def everything() -> None:
     source = ask("register.open", name="demo-register.csv", content=text.encode())
     reading = proposed_reading(ask, source, CLOSING)
     cohort = ask("register.build", **reading)
+    ask("register.silent_losses", **reading)
+    ask("register.spellings", columns=[column["id"] for column in source["columns"]])
     ask("register.findings", **reading, repairs={"unseen_for_long": [], "same_number": []})
     group = next(each["id"] for each in cohort["covariates"] if each["heading"] == BY_HEADING)
     _outcomes(ask, group)

@@ -404,6 +404,29 @@ set-aside-same_patient-short = Made one with another row
 role-name = name: only to find patients twice
 role-death_date = date of death
 
+silent-title = Losses that nobody wrote down
+silent-months = Lost when not seen for more than this many months before the closing date
+silent-months-hint = Longer than the longest time between two visits that is usual in your clinic.
+silent-count = count them as lost
+silent-sentence = { $changed } of { $care } patients under care were not seen for more than { $months } months before the closing date. Counting them as lost would raise the lost from { $before } ({ $was }) to { $after } ({ $share }).
+silent-sentence-counted = { $changed } of { $care } patients under care were not seen for more than { $months } months before the closing date, and count as lost: { $after } lost ({ $share }) instead of { $before } ({ $was }).
+silent-caption = How many count as lost, by the months that the rule allows
+silent-unseen = Months unseen
+silent-changed = Under care, then lost
+silent-lost = Lost in all
+silent-method = Follow-up of those the rule counts as lost ends on the day they were last seen, as before; only its meaning changes. Survival is therefore the same, but the bounds for losses widen, and retention falls. A month is 365.25 / 12 days.
+caution-under_care_without_contact = { $n } of { $of } patients under care have no last contact at all: they are followed to the closing date on trust, and this rule cannot judge them.
+
+spellings-title = Spellings of groups
+spellings-none = No value of the columns to group by looks like another, misspelt.
+spellings-caption = { $heading }: values that are probably one
+spellings-method = Values are compared word by word with those that stand in more rows: one slip in words of 5 letters or more, two in words of 10 or more (Damerau 1964); numbers, short words and first letters must be the same. Nothing is made one unasked.
+spelling-into = Probably
+spelling-merge = make them one
+spelling-merge-of = Take { $value } for { $into }
+value-like = spelt like “{ $value }”
+refusal-merged_in_a_circle = “{ $value }” is taken for a value that is taken for it.
+
 register-other-title = Another register
 forget = Forget everything
 forget-meaning = Drops the register and every choice made about it from memory.

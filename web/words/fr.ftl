@@ -404,6 +404,29 @@ set-aside-same_patient-short = Réunie avec une autre ligne
 role-name = nom : seulement pour trouver les doublons
 role-death_date = date de décès
 
+silent-title = Pertes de vue que personne n’a notées
+silent-months = Perdu de vue si non vu pendant plus de ce nombre de mois avant la date de clôture
+silent-months-hint = Plus long que le plus long délai habituel entre deux visites dans votre consultation.
+silent-count = les compter comme perdus de vue
+silent-sentence = { $changed } des { $care } patients en suivi n’ont pas été vus pendant plus de { $months } mois avant la date de clôture. Les compter comme perdus de vue en porterait le nombre de { $before } ({ $was }) à { $after } ({ $share }).
+silent-sentence-counted = { $changed } des { $care } patients en suivi n’ont pas été vus pendant plus de { $months } mois avant la date de clôture et comptent comme perdus de vue : { $after } ({ $share }) au lieu de { $before } ({ $was }).
+silent-caption = Combien comptent comme perdus de vue, selon les mois que la règle admet
+silent-unseen = Mois sans être vu
+silent-changed = En suivi, puis perdus de vue
+silent-lost = Perdus de vue en tout
+silent-method = Le suivi de ceux que la règle compte comme perdus de vue s’arrête au jour du dernier contact, comme avant ; seul son sens change. La survie reste donc la même, mais les bornes dues aux pertes s’élargissent, et la rétention baisse. Un mois compte 365,25 / 12 jours.
+caution-under_care_without_contact = { $n } des { $of } patients en suivi n’ont aucun dernier contact : ils sont suivis jusqu’à la clôture sur parole, et cette règle ne peut les juger.
+
+spellings-title = Orthographe des groupes
+spellings-none = Aucune valeur des colonnes de groupe ne ressemble à une autre mal écrite.
+spellings-caption = { $heading } : valeurs qui n’en font probablement qu’une
+spellings-method = Les valeurs sont comparées mot à mot à celles qui figurent sur plus de lignes : une faute dans les mots de 5 lettres ou plus, deux dans ceux de 10 ou plus (Damerau 1964) ; les nombres, les mots courts et les premières lettres doivent être les mêmes. Rien n’est réuni sans demande.
+spelling-into = Probablement
+spelling-merge = les réunir
+spelling-merge-of = Prendre { $value } pour { $into }
+value-like = écrit comme « { $value } »
+refusal-merged_in_a_circle = « { $value } » est pris pour une valeur qui est prise pour elle.
+
 register-other-title = Un autre registre
 forget = Tout oublier
 forget-meaning = Retire de la mémoire le registre et tous les choix faits à son sujet.

@@ -23,6 +23,7 @@ from vitalroll.register.profile import Profile, Register, profile_columns
 from vitalroll.register.roles import Proposal, propose_roles
 from vitalroll.register.source import open_source
 from vitalroll.register.spelling import excerpt
+from vitalroll.register.variants import variants
 
 Report = Callable[[str, int, int], None]
 
@@ -57,7 +58,8 @@ class ValuesRequest:
 class BuildRequest:
     """Fields of ``register.build``, ``register.findings`` and all tasks that look at rows once more.
 
-    ``repairs`` names the findings whose repair is accepted, each with the lines for which it is not.
+    ``repairs`` names the findings whose repair is accepted, each with the lines for which it is not;
+    ``spellings`` holds, by column, values and the value that each is.
     """
 
     roles: dict[str, str]
@@ -68,6 +70,7 @@ class BuildRequest:
     date_orders: dict[str, str] = field(default_factory=dict)
     repairs: dict[str, tuple[int, ...]] = field(default_factory=dict)
     unseen_months: Annotated[float, Between(1, 120)] = 12
+    spellings: dict[str, dict[str, str]] = field(default_factory=dict)
 
 
 @dataclass(frozen=True)
@@ -122,7 +125,8 @@ def values(memory: Memory, request: ValuesRequest, report: Report) -> dict[str, 
     Returns
     -------
     dict
-        ``values``: {value, count, meaning, sex}, spellings of one value together; ``blank`` rows;
+        ``values``: {value, count, meaning, sex, like}, spellings of one value together; ``like`` is a
+        more frequent value that it probably is, whose meaning is then proposed; ``blank`` rows;
         ``distinct``; ``cautions``: ``values_not_listed`` (``listed``, ``distinct``).
 
     Refusals: ``no_register``, ``unknown_column``.
@@ -131,12 +135,14 @@ def values(memory: Memory, request: ValuesRequest, report: Report) -> dict[str, 
     found = register.profile(request.column, "column").values
     order = np.argsort(-found.counts, kind="stable")[:MOST_VALUES].tolist()
     sexes = propose_sexes(found.spelt[:MOST_VALUES])
+    like = {variant.value: found.spelt[variant.into] for variant in variants(found)}
     listed = [
         {
             "value": found.spelt[i],
             "count": int(found.counts[i]),
-            "meaning": propose_meaning(found.spelt[i]),
-            "sex": sexes.get(found.spelt[i]),
+            "meaning": propose_meaning(found.spelt[i]) or propose_meaning(like.get(i, "")),
+            "sex": sexes.get(found.spelt[i]) or sexes.get(like.get(i, "")),
+            "like": like.get(i),
         }
         for i in order
     ]
@@ -195,6 +201,7 @@ def choices_of(request: BuildRequest) -> Choices:
         date_orders=request.date_orders,
         repairs=request.repairs,
         unseen_months=request.unseen_months,
+        spellings=request.spellings,
     )
 
 

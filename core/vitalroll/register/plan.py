@@ -3,7 +3,7 @@
 from __future__ import annotations
 
 from collections.abc import Callable, Collection, Mapping
-from dataclasses import dataclass, field
+from dataclasses import dataclass, field, replace
 from datetime import date
 
 import numpy as np
@@ -17,6 +17,7 @@ from vitalroll.register.meanings import SEXES
 from vitalroll.register.profile import DateProfile, Profile, Register, dates_anyhow, numbers_anyhow
 from vitalroll.register.roles import MANY_ROLES, ONLY_TO_COMPARE, ROLES
 from vitalroll.register.spelling import excerpt, same
+from vitalroll.register.variants import merged
 
 FEW_LINES = 20
 """So many lines are named in a caution."""
@@ -40,6 +41,8 @@ class Choices:
         The findings whose repair is accepted, each with the lines for which it is declined.
     unseen_months : float
         Somebody under care who was not seen for longer than this before the closing date is perhaps lost.
+    spellings : mapping of column identifier to a mapping of value to the value that it is
+        Misspelt values of columns to group by.
     """
 
     roles: Mapping[str, str]
@@ -50,6 +53,7 @@ class Choices:
     date_orders: Mapping[str, str] = field(default_factory=dict)
     repairs: Mapping[str, Collection[int]] = field(default_factory=dict)
     unseen_months: float = 12
+    spellings: Mapping[str, Mapping[str, str]] = field(default_factory=dict)
 
 
 class Plan:
@@ -152,13 +156,21 @@ class Plan:
         if kept.any():
             parts.append(Derived(calendar_of(rows.start.day[kept]), ()))
         for profile in sorted(self._by_role["group"], key=lambda profile: profile.column.position):
-            parts.append(group_of(profile, kept))
+            parts.append(group_of(self._well_spelt(profile), kept))
         found: dict[str, Covariate] = {}
         cautions: list[Caution] = []
         for part in parts:
             found |= part.covariates
             cautions += part.cautions
         return found, cautions
+
+    def _well_spelt(self, profile: Profile) -> Profile:
+        """Return a column with the values that are another one taken for it."""
+        identifier = profile.column.identifier
+        said = self.choices.spellings.get(identifier)
+        if not said:
+            return profile
+        return replace(profile, values=merged(profile.values, said, f"spellings.{identifier}"))
 
     def _check_roles(self) -> None:
         for role, profiles in self._by_role.items():

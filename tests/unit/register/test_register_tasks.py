@@ -74,9 +74,9 @@ def test_values_are_listed_with_proposals_the_most_frequent_first(desk):
     opened(desk)
     assert ask(desk, "register.values", column="c4") == {
         "values": [
-            {"value": "Under care", "count": 2, "meaning": "under_care", "sex": None},
-            {"value": "lost", "count": 2, "meaning": "lost", "sex": None},
-            {"value": "Died RHD", "count": 1, "meaning": "died_of_disease", "sex": None},
+            {"value": "Under care", "count": 2, "meaning": "under_care", "sex": None, "like": None},
+            {"value": "lost", "count": 2, "meaning": "lost", "sex": None, "like": None},
+            {"value": "Died RHD", "count": 1, "meaning": "died_of_disease", "sex": None, "like": None},
         ],
         "blank": 0,
         "distinct": 3,
@@ -90,7 +90,7 @@ def test_of_very_many_values_the_most_frequent_are_listed(desk):
     opened(desk, "No,Zone\n" + "".join(f"{i},z{i}\n" for i in range(700)) + "x,z5\n")
     found = ask(desk, "register.values", column="c1")
     assert len(found["values"]) == 500
-    assert found["values"][0] == {"value": "z5", "count": 2, "meaning": None, "sex": None}
+    assert found["values"][0] == {"value": "z5", "count": 2, "meaning": None, "sex": None, "like": None}
     assert found["cautions"] == [
         {"code": "values_not_listed", "parameters": {"listed": 500, "distinct": 700}}
     ]

@@ -8,7 +8,9 @@ import { findingsBlock } from './register/findings.js';
 import { meaningsBlock, sexesBlock } from './register/meanings.js';
 import { openingBlock } from './register/opening.js';
 import { makeReader } from './register/reader.js';
+import { silentLossesBlock } from './register/silent_losses.js';
 import { sourceBlock } from './register/source.js';
+import { spellingsBlock } from './register/spellings.js';
 import { understoodBlock } from './register/understood.js';
 
 /** @param {import('../app.js').App} app */
@@ -26,6 +28,8 @@ export function registerPlace(app) {
       sexesBlock(app),
       closingBlock(app),
       understoodBlock(app),
+      silentLossesBlock(app),
+      spellingsBlock(app),
       findingsBlock(app),
       h('section', { 'aria-labelledby': 'register-other' },
         h('h2', { id: 'register-other' }, say('register-other-title')),

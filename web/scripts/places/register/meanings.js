@@ -41,7 +41,7 @@ function valuesBlock(app, { role, id, choices, word, field, blank }) {
     ];
     const line = (label, number, control) => h('tr', {},
       h('th', { scope: 'row', class: 'text' }, label), h('td', { class: 'number' }, count(number)), h('td', { class: 'text' }, control));
-    const rows = known.values.map(({ value, count: number }, i) => line(written(value), number,
+    const rows = known.values.map(({ value, count: number, like }, i) => line(spelt(app, value, like), number,
       h('select', {
         id: `${id}-${i}`, 'aria-label': say('meaning-of', { value }),
         onchange: (event) => app.store.amend('reading', { [field]: without(app.store.state.reading[field], value, event.target.value) }),
@@ -63,6 +63,11 @@ function valuesBlock(app, { role, id, choices, word, field, blank }) {
             h('th', { scope: 'col', class: 'text' }, say('means')))),
           h('tbody', {}, rows))))];
   });
+}
+
+/** A value, and the more frequent one that it is probably a misspelling of. */
+function spelt(app, value, like) {
+  return like ? h('div', {}, written(value), h('div', { class: 'hint' }, app.words.say('value-like', { value: like }))) : written(value);
 }
 
 /** The mapping with one value given a meaning, or none. */
