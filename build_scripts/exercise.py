@@ -39,6 +39,8 @@ def everything() -> None:
     reading = proposed_reading(ask, source, CLOSING)
     cohort = ask("register.build", **reading)
     ask("register.silent_losses", **reading)
+    saved = ask("register.settings", **reading)["settings"]
+    ask("register.apply_settings", text=json.dumps(saved))
     ask("register.spellings", columns=[column["id"] for column in source["columns"]])
     ask("register.findings", **reading, repairs={"unseen_for_long": [], "same_number": []})
     group = next(each["id"] for each in cohort["covariates"] if each["heading"] == BY_HEADING)

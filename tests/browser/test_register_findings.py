@@ -12,7 +12,7 @@ from typing import Any
 
 import pytest
 from hard_reading import CLOSING, request_as_proposed
-from playwright.sync_api import Page
+from playwright.sync_api import Page, expect
 
 from site_server import SiteServer
 from vitalroll.desk import Desk
@@ -66,10 +66,8 @@ def test_a_dozen_faults_end_to_end(site: SiteServer, opened: Callable) -> None:
         page.locator("#findings table", has=page.locator("caption", has_text="Corrections made")).wait_for(
             timeout=ANSWER_MS
         )
-        page.wait_for_function(
-            f"document.querySelector('#understood-heading ~ .sentence').innerText.startsWith('{repair['with']['n']} ')",
-            timeout=ANSWER_MS,
-        )
+        sentence = page.locator("#understood-heading ~ .sentence")
+        expect(sentence).to_contain_text(re.compile(rf"^{repair['with']['n']} patient"), timeout=ANSWER_MS)
         shown = page.locator("#findings .sentence").inner_text()
         accepted = native(name, repairs={name: []})
         assert f"{accepted['now']['events']} deaths instead of {accepted['untouched']['events']}" in shown
@@ -88,7 +86,7 @@ def test_by_keyboard_with_undo_and_the_log_to_take_away(
     page.keyboard.press("Space")
     log = page.locator("#findings table", has=page.locator("caption", has_text="Corrections made"))
     log.wait_for(timeout=ANSWER_MS)
-    page.wait_for_function("document.activeElement.id === 'repair-unseen_for_long'", timeout=ANSWER_MS)
+    page.locator("#repair-unseen_for_long:focus").wait_for(timeout=ANSWER_MS)
     expected = native("many_at_once", repairs={"unseen_for_long": []})
     assert log.locator("tbody tr").count() == len(expected["corrections"]) == 1
     with page.expect_download() as waiting:

@@ -20,6 +20,10 @@ export function beginnings(language) {
     reading: emptyReading(),
     /** How far opening a file has come, and why it was refused. @type {{busy: boolean, done: number, total: number, refusal: any}|null} */
     opening: null,
+    /** Answer of register.apply_settings, its refusal, or null when none were applied. @type {any} */
+    appliedSettings: null,
+    /** How many values the settings that were saved last leave out, or null. @type {{left: number}|null} */
+    savedSettings: null,
     /** Why no cohort could be built, or null. */
     building: null,
     /** Answer of register.build, or null. */

@@ -427,6 +427,31 @@ spelling-merge-of = Take { $value } for { $into }
 value-like = spelt like “{ $value }”
 refusal-merged_in_a_circle = “{ $value }” is taken for a value that is taken for it.
 
+settings-title = The same choices for the next list
+settings-lead = What is chosen on this page (columns, meanings, rules, closing date, kinds of repairs) can be kept in a small file. It holds headings and common values, and nothing of a patient.
+settings-apply = Apply choices kept earlier:
+settings-save = Save these choices
+settings-save-later = Possible once everything is chosen.
+settings-left-out = { $n ->
+    [one] One value is
+   *[other] { $n } values are
+  } not in the file, because fewer than three rows have it: it could speak of one patient.
+settings-applied = The kept choices were applied to { $matched } columns of this list.
+settings-absent = Columns that this list does not have:
+settings-added = Columns that are new in this list, and not used until chosen:
+settings-new-values = Endings that the kept choices do not know:
+settings-rows = { $n ->
+    [one] one row
+   *[other] { $n } rows
+  }
+settings-no-difference = Columns and endings are the same as then.
+caution-order_differs = The dates in “{ $heading }” are no longer written as { $order }; they were read as they show themselves.
+caution-not_dates_any_more = “{ $heading }” holds no dates in this list; it is not used.
+caution-closing_date_from_settings = The closing date, { $closing }, is that of the earlier list. Change it to the day on which this list was frozen.
+caution-dates_after_closing = { $n } dates lie after { $closing } and would not count.
+refusal-settings_not_read = This is not a file of choices kept by this page.
+refusal-settings_too_new = These choices were kept by a later version of this page (form { $version }; this page knows { $known }).
+
 register-other-title = Another register
 forget = Forget everything
 forget-meaning = Drops the register and every choice made about it from memory.

@@ -427,6 +427,31 @@ spelling-merge-of = Prendre { $value } pour { $into }
 value-like = écrit comme « { $value } »
 refusal-merged_in_a_circle = « { $value } » est pris pour une valeur qui est prise pour elle.
 
+settings-title = Les mêmes choix pour la prochaine liste
+settings-lead = Ce qui est choisi sur cette page (colonnes, significations, règles, date de clôture, genres de corrections) peut être gardé dans un petit fichier. Il contient des en-têtes et des valeurs courantes, et rien d’un patient.
+settings-apply = Appliquer des choix gardés :
+settings-save = Enregistrer ces choix
+settings-save-later = Possible dès que tout est choisi.
+settings-left-out = { $n ->
+    [one] Une valeur n’est
+   *[other] { $n } valeurs ne sont
+  } pas dans le fichier, parce que moins de trois lignes la portent : elle pourrait désigner un patient.
+settings-applied = Les choix gardés ont été appliqués à { $matched } colonnes de cette liste.
+settings-absent = Colonnes absentes de cette liste :
+settings-added = Colonnes nouvelles dans cette liste, inutilisées tant qu’on ne les choisit pas :
+settings-new-values = Issues que les choix gardés ne connaissent pas :
+settings-rows = { $n ->
+    [one] une ligne
+   *[other] { $n } lignes
+  }
+settings-no-difference = Colonnes et issues sont les mêmes qu’alors.
+caution-order_differs = Les dates de « { $heading } » ne sont plus écrites dans l’ordre { $order } ; elles ont été lues comme elles se montrent.
+caution-not_dates_any_more = « { $heading } » ne contient pas de dates dans cette liste ; la colonne n’est pas utilisée.
+caution-closing_date_from_settings = La date de clôture, le { $closing }, est celle de l’ancienne liste. Mettez le jour où cette liste a été arrêtée.
+caution-dates_after_closing = { $n } dates tombent après le { $closing } et ne compteraient pas.
+refusal-settings_not_read = Ce n’est pas un fichier de choix gardé par cette page.
+refusal-settings_too_new = Ces choix ont été gardés par une version plus récente de cette page (forme { $version } ; cette page connaît { $known }).
+
 register-other-title = Un autre registre
 forget = Tout oublier
 forget-meaning = Retire de la mémoire le registre et tous les choix faits à son sujet.

@@ -18,6 +18,7 @@ from vitalroll.desk import (
     planning_tasks,
     register_tasks,
     resource_tasks,
+    settings_tasks,
 )
 
 TASKS = {
@@ -32,4 +33,5 @@ TASKS = {
     **planning_tasks.TASKS,
     **register_tasks.TASKS,
     **resource_tasks.TASKS,
+    **settings_tasks.TASKS,
 }

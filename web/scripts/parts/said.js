@@ -43,7 +43,7 @@ export function named(app, parameters = {}) {
   for (const name of ['year', 'first', 'last']) {
     if (typeof values[name] === 'number') values[name] = String(values[name]);
   }
-  for (const name of ['start', 'end', 'birth', 'observed_from', 'last']) {
+  for (const name of ['start', 'end', 'birth', 'observed_from', 'last', 'closing']) {
     if (/^\d{4}-\d{2}-\d{2}$/.test(values[name])) values[name] = app.words.day(values[name]);
   }
   for (const name of ['share', 'other_share']) {

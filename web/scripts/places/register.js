@@ -8,6 +8,7 @@ import { findingsBlock } from './register/findings.js';
 import { meaningsBlock, sexesBlock } from './register/meanings.js';
 import { openingBlock } from './register/opening.js';
 import { makeReader } from './register/reader.js';
+import { settingsBlock } from './register/settings.js';
 import { silentLossesBlock } from './register/silent_losses.js';
 import { sourceBlock } from './register/source.js';
 import { spellingsBlock } from './register/spellings.js';
@@ -23,6 +24,7 @@ export function registerPlace(app) {
     return [
       heading,
       sourceBlock(app, reader),
+      settingsBlock(app),
       columnsBlock(app),
       meaningsBlock(app),
       sexesBlock(app),

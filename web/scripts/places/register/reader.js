@@ -25,7 +25,7 @@ export function makeReader(app) {
       const reading = await proposedReading(source, closing);
       kept = { name, content };
       app.store.change({
-        source, reading: reading.reading, values: reading.values, cohort: null, building: null,
+        source, reading: reading.reading, values: reading.values, cohort: null, building: null, appliedSettings: null, savedSettings: null,
         opening: { busy: false, done: 0, total: 0, refusal: null },
         question: { ...app.store.state.question, group: null },
         compare: { ...app.store.state.compare, exposed: null, reference: null, covariates: [] },
@@ -103,7 +103,7 @@ export function makeReader(app) {
     await app.engine.ask('register.forget', {});
     built = null;
     kept = null;
-    app.store.change({ source: null, cohort: null, building: null, values: {}, reading: emptyReading(), opening: null });
+    app.store.change({ source: null, cohort: null, building: null, values: {}, reading: emptyReading(), opening: null, appliedSettings: null, savedSettings: null });
     app.store.forgetPast();
   }
 
