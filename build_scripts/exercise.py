@@ -94,6 +94,10 @@ def _caseload(ask: Any) -> None:
     ask("caseload.history")
     ask("caseload.project", **setting)
     ask("caseload.resources", **setting, items=items, lines=lines)
+    early = {"kind": "found_earlier", "percent": 20, "months_earlier": 6, "cost_per_year": 9000}
+    scenarios = [{"name": "Both", "levers": [{"kind": "fewer_lost", "percent": 40}, early]}]
+    ask("caseload.levers", **setting, items=items, scenarios=scenarios)
+    ask("caseload.break_even", **setting, lever={"kind": "fewer_lost"}, goal="lost", target=80)
 
 
 def _counts(ask: Any) -> None:

@@ -29,6 +29,7 @@ def with_demo(opened: Callable, site: SiteServer, **options: object) -> Page:
         page.locator(f"#{part}-example").click()
     show(page, "caseload")
     page.locator("#items-example").click()
+    page.locator("#levers-example").click()
     for place in PLACES:
         show(page, place)
     return page

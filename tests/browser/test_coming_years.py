@@ -90,3 +90,55 @@ def test_what_is_typed_wrong_stays_and_is_said_beside_it(page: Page) -> None:
     put(page, "#items-0-later", -2)
     assert "0" in page.locator("#items-0-later-fault").inner_text()
     assert page.locator("#items-0-later").input_value() == "-2"
+
+
+def test_tracing_or_screening(page: Page, native: Callable) -> None:
+    put(page, "#items-0-later", 1)
+    put(page, "#items-0-unit_cost", 12)
+    page.locator("#levers-example").click()
+    tracing = {"kind": "fewer_lost", "percent": 40, "ramp_months": 6, "cost_per_year": 12000}
+    screening = {
+        "kind": "found_earlier", "percent": 30, "months_earlier": 6, "fewer_deaths_among": 25,
+        "ramp_months": 3, "cost_at_start": 5000, "cost_per_year": 20000,
+    }  # fmt: skip
+    scenarios = [
+        {"name": "Tracing", "levers": [tracing]},
+        {"name": "Screening", "levers": [screening]},
+        {"name": "Both", "levers": [tracing, screening]},
+    ]
+    told = native(
+        "caseload.levers", {"items": [{"name": "1", "later": 1, "unit_cost": 12}], "scenarios": scenarios}
+    )
+    for scenario in told["scenarios"]:
+        rows = table_rows(page, f"What “{scenario['name']}” changes over 5 years")
+        change = scenario["difference"]
+        assert numbers(rows[1][1]) == pytest.approx([change["patient_years"]["value"]], abs=0.51)
+        assert numbers(rows[1][3]) == pytest.approx(change["patient_years"]["p95"], abs=0.51)
+        assert numbers(rows[4][1]) == pytest.approx([change["lost"]["value"]], abs=0.51)
+        assert numbers(rows[7][1]) == pytest.approx([change["cost"]["value"]], abs=0.51)
+    best = max(told["scenarios"], key=lambda each: each["best_for_patient_years"])
+    first = table_rows(page, "What each scenario buys")[0]
+    assert first[0] == best["name"]
+    assert numbers(first[1])[0] == pytest.approx(best["per_patient_year"]["value"], abs=0.51)
+    swings = told["sensitivity"]["swings"]
+    rows = table_rows(page, "per patient-year gained as assumed")
+    assert numbers(rows[0][2]) == pytest.approx([swings[0]["at_low"]], abs=0.51)
+
+
+def test_how_much_losses_must_fall(page: Page, native: Callable) -> None:
+    put(page, "#break-even-target", 100)
+    told = native("caseload.break_even", {"lever": {"kind": "fewer_lost"}, "goal": "lost", "target": 100})
+    sentence = page.locator("#break-even .sentence")
+    sentence.wait_for(timeout=ANSWER_MS)
+    assert numbers(sentence.inner_text())[0] == pytest.approx(told["percent"], abs=0.051)
+
+
+def test_the_coming_years_reach_the_report(page: Page) -> None:
+    page.locator("#items-example").click()
+    page.locator("#levers-example").click()
+    page.locator("#levers .sentence").first.wait_for(timeout=ANSWER_MS)
+    page.locator("#resources .sentence").first.wait_for(timeout=ANSWER_MS)
+    page.get_by_role("navigation").get_by_role("link", name="Report", exact=True).click()
+    report = page.locator("#report-document")
+    for caption in ("When there is no longer enough", "Cost in each year", "What each scenario buys"):
+        report.locator("caption", has_text=caption).first.wait_for(timeout=ANSWER_MS)

@@ -34,6 +34,7 @@ export function beginnings(language) {
     caseload: {
       years: 5, basis: 'history', perYear: null,
       items: [], lines: [], discount: 3,
+      levers: [], budget: 100000, sensitivityOf: 0, breakEven: { kind: 'fewer_lost', goal: 'lost', target: null },
     },
     counts: {
       lifeTable: { entering: null, rows: [] },

@@ -1116,7 +1116,7 @@ levers-sentence = { $name }, after { $years ->
    *[other] { $years } years
   }: { $more } under care (95 of 100 runs: { $lower } to { $upper }); over the whole time { $patient_years } patient-years of care, { $lost } lost, { $deaths } deaths and { $cost } of discounted cost.
 levers-best-sentence = For { $budget }, “{ $name }” gains most patient-years of care in { $share } of the runs.
-levers-figure = Patients under care with each scenario, bands for 80 and 95 of 100 runs
+levers-figure = Patients under care with each scenario; the bands are those of no change, for 80 and 95 of 100 runs
 levers-figure-described = Lines over { $years ->
     [one] { $years } year
    *[other] { $years } years
@@ -1167,8 +1167,8 @@ levers-method = Each percentage multiplies its rate or the newcomers; a risk fac
 break-even-title = How much must change?
 break-even-type = Type a target to see how strong one lever must be.
 break-even-kind = Lever
-break-even-goal = So that
-break-even-target = is
+break-even-goal = What should change
+break-even-target = Target
 goal-under_care = patients under care at the end
 goal-lost = lost, in all
 goal-deaths = deaths, in all

@@ -1116,7 +1116,7 @@ levers-sentence = { $name }, après { $years ->
    *[other] { $years } ans
   } : { $more } suivis (95 tirages sur 100 : { $lower } à { $upper }) ; sur toute la période { $patient_years } patients-années de suivi, { $lost } perdus de vue, { $deaths } décès et { $cost } de coût actualisé.
 levers-best-sentence = Pour { $budget }, « { $name } » gagne le plus de patients-années de suivi dans { $share } des tirages.
-levers-figure = Patients suivis selon chaque scénario, bandes pour 80 et 95 tirages sur 100
+levers-figure = Patients suivis selon chaque scénario ; les bandes sont celles de la situation actuelle, pour 80 et 95 tirages sur 100
 levers-figure-described = Lignes sur { $years ->
     [one] { $years } an
    *[other] { $years } ans
@@ -1167,12 +1167,12 @@ levers-method = Chaque pourcentage multiplie son taux ou les arrivées ; un fac
 break-even-title = De combien faut-il changer ?
 break-even-type = Saisissez une cible pour voir quelle force un levier doit avoir.
 break-even-kind = Levier
-break-even-goal = Pour que
-break-even-target = vaille
-goal-under_care = le nombre de patients suivis à la fin
-goal-lost = le nombre total de perdus de vue
-goal-deaths = le nombre total de décès
-goal-cost = le coût total actualisé
+break-even-goal = Ce qui doit changer
+break-even-target = Cible
+goal-under_care = patients suivis à la fin
+goal-lost = perdus de vue, en tout
+goal-deaths = décès, en tout
+goal-cost = coût actualisé, en tout
 break-even-sentence = « { $lever } » de { $percent } % dès le premier mois donne { $target } ({ $goal }, jusqu’au { $ends }), si les taux sont ceux observés. Avec cela, { $share } des tirages atteignent la cible ou restent au-dessous.
 break-even-never = Aucun pourcentage ne donne { $target } ({ $goal }, jusqu’au { $ends }) : « { $lever } » de 0 % donne { $none }, de { $percent } % { $most }.
 break-even-caption = « { $lever } » et { $goal }

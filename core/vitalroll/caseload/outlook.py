@@ -127,9 +127,7 @@ def prospect(
         seed=seed,
         report=report,
     )
-    paths = [
-        _path(today, hazards, inflow, years=years, scenario=scenario) for scenario in (None, *scenarios)
-    ]
+    paths = [_path(today, hazards, inflow, years=years, scenario=scenario) for scenario in (None, *scenarios)]
     outlooks = [Outlook(_course(path), course) for path, course in zip(paths, drawn, strict=True)]
     return Prospect(
         baseline=outlooks[0],

@@ -1,9 +1,11 @@
-/** Patients under care year by year: bands for the baseline, a dashed line with its band for the what-if. */
+/** Patients under care year by year: bands for the first course, and a dashed line for each other. */
 import * as Plot from '@observablehq/plot';
 import { FAINT_RULE, INK, SOFT_INK, TEXT_SIZE, plateStyle, seriesStyle, spreadLabels } from './series.js';
 
 const LABEL_ROOM = 96;
 const MARGIN_LEFT = 52;
+/** More bands than this hide each other: then only the first course has its own. */
+const MOST_BANDS = 1;
 
 /** @typedef {{ value: number, p80: [number, number], p95: [number, number] }} Band */
 
@@ -36,7 +38,7 @@ export function caseloadFan({ courses }, { width, words }) {
       Plot.axisY({ tickSize: 0, ticks: 6, tickFormat: (n) => words.count(n) }),
       Plot.axisX({ ticks: points[0].map(({ year }) => year).filter((year) => year % Math.ceil(years / 10) === 0), tickFormat: (year) => words.count(year), tickSize: 4 }),
       Plot.text([words.say('axis-years-from-closing')], { frameAnchor: 'bottom', dy: 36, fill: SOFT_INK }),
-      points.flatMap((line, position) => courseMarks(line, position)),
+      points.flatMap((line, position) => courseMarks(line, position, position < MOST_BANDS)),
       courses.length > 1 ? ends.map((end) => Plot.text([end.label], {
         frameAnchor: 'top-right', dx: 8, dy: end.y - 16, textAnchor: 'start', lineAnchor: 'middle', lineWidth: (LABEL_ROOM - 10) / TEXT_SIZE,
         fill: seriesStyle(end.position).stroke, fontWeight: 600,
@@ -46,11 +48,11 @@ export function caseloadFan({ courses }, { width, words }) {
   });
 }
 
-function courseMarks(line, position) {
+function courseMarks(line, position, banded) {
   const { stroke, dash } = seriesStyle(position);
   return [
-    Plot.areaY(line, { x: 'year', y1: 'l95', y2: 'u95', fill: stroke, fillOpacity: 0.1 }),
-    Plot.areaY(line, { x: 'year', y1: 'l80', y2: 'u80', fill: stroke, fillOpacity: 0.16 }),
+    banded ? Plot.areaY(line, { x: 'year', y1: 'l95', y2: 'u95', fill: stroke, fillOpacity: 0.1 }) : null,
+    banded ? Plot.areaY(line, { x: 'year', y1: 'l80', y2: 'u80', fill: stroke, fillOpacity: 0.16 }) : null,
     Plot.lineY(line, { x: 'year', y: 'value', stroke, strokeWidth: 2, strokeDasharray: dash ?? 'none' }),
     Plot.dot(line, { x: 'year', y: 'value', r: 2.6, fill: stroke }),
   ];

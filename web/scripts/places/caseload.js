@@ -2,7 +2,9 @@
 import { h } from '../parts/element.js';
 import { live } from '../parts/live.js';
 import { noRegister } from '../parts/question.js';
+import { breakEvenBlock } from './caseload/break_even.js';
 import { historyBlock } from './caseload/history.js';
+import { leversBlock } from './caseload/levers.js';
 import { projectionBlock } from './caseload/projection.js';
 import { resourcesBlock } from './caseload/resources.js';
 
@@ -11,6 +13,9 @@ export function caseloadPlace(app) {
   return live(app, (state) => Boolean(state.cohort), (state) => {
     const heading = h('h1', {}, app.words.say('caseload-title'));
     if (!state.cohort) return [heading, noRegister(app)];
-    return [heading, h('p', {}, app.words.say('caseload-lead')), historyBlock(app), projectionBlock(app), resourcesBlock(app)];
+    return [
+      heading, h('p', {}, app.words.say('caseload-lead')),
+      historyBlock(app), projectionBlock(app), resourcesBlock(app), leversBlock(app), breakEvenBlock(app),
+    ];
   });
 }
