@@ -47,9 +47,13 @@ def main() -> None:
     )
     inflow = Inflow((), Estimate(120.0, 100.0, 140.0), 1.0, "poisson", 8, 8.0)
     today = random.integers(0, MONTHS_PER_YEAR * STRETCHES, PATIENTS)
-    change = Scenario("", (Lever("fewer_lost", 30, from_month=13, ramp_months=6), Lever("fewer_newcomers", 10)))
+    change = Scenario(
+        "", (Lever("fewer_lost", 30, from_month=13, ramp_months=6), Lever("fewer_newcomers", 10))
+    )
     slots = ageing(hazards.edges).slots
-    print(f"{PATIENTS} patients today, {slots} months of stay, {CAUSES} ways of leaving; the limit is {LIMIT}")
+    print(
+        f"{PATIENTS} patients today, {slots} months of stay, {CAUSES} ways of leaving; the limit is {LIMIT}"
+    )
     for years, draws in ((5, 1000), (10, 2000)):
         expected = best_of(lambda years=years: project(today, hazards, 120.0, years=years))
         # Every draw, month and month of stay: who stays and who leaves by each way.
