@@ -75,6 +75,8 @@ def _outcomes(ask: Any, group: str) -> None:
     ask("outcomes.survival", group=group)
     ask("outcomes.life_table", group=group)
     ask("outcomes.leaving", group=group)
+    for scale in ("year", "since_start", "age"):
+        ask("outcomes.rates", group=group, by=scale)
 
 
 def _comparisons(ask: Any, group: str) -> None:

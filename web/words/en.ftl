@@ -731,6 +731,40 @@ caution-group_not_recorded = { $n ->
    *[other] { $n } patients have nothing recorded in the grouping column and are in no group.
   }
 
+rates-title = How often
+rates-by = By
+rates-by-year = calendar year
+rates-by-since_start = years since start
+rates-by-age = age
+rates-sentence = { $group }: { $events } outcomes in { $years } person-years, { $rate } for each { $per } person-years (95% interval { $interval }).
+rates-sentence-compared = { $group }: { $events } outcomes in { $years } person-years, { $rate } for each { $per } person-years (95% interval { $interval }), { $ratio } times the rate of { $first } ({ $ratioInterval }).
+rates-do-not-mean = A rate counts outcomes for the time people were observed; it is not the share who will have had the outcome, and an average over years in which the risk changes can hide that.
+rates-figure = Outcomes for each { $per } person-years, with 95% limits
+rates-figure-described = Rates in { $bands ->
+    [one] one band
+   *[other] { $bands } bands
+  } for { $groups ->
+    [one] everyone together
+   *[other] { $groups } groups
+  }; the numbers are in the table.
+rates-caption = Outcomes for each { $per } person-years
+rates-band = In
+rate-per = Rate for each { $per } (95% limits)
+band-from = { $from } and over
+rates-standardised-caption = Age-standardised rates for each { $per } person-years
+rates-crude = Crude
+standard-who_world = WHO world standard 2000-2025
+standard-segi = Segi world standard
+rates-unknown-age = { $n ->
+    [one] One patient without an age is in none of the ages.
+   *[other] { $patients } patients without an age are in none of the ages.
+  }
+rates-method = Time is cut at each band (Lexis); limits of a rate Garwood (1936), of a ratio exact and conditional on all outcomes; standardised directly, limits Fay & Feuer (1997). Weights of the WHO standard: Ahmad and others (2001).
+caution-few_events_in_rate = { $level }: only { $events } outcomes, so one patient more or less moves the rate noticeably.
+caution-standard_cut_short = Ages that hold { $share } of the standard's weight were seen; the standard was cut to these, so the figure can only be compared with others cut in the same way.
+refusal-age_not_known = The register has no age. Choose a column with the age or the date of birth in Register.
+refusal-uneven_weights = A standard needs one weight for each age band.
+
 ## Compare
 
 compare-title = Compare

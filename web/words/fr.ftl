@@ -731,6 +731,40 @@ caution-group_not_recorded = { $n ->
    *[other] { $n } patients n’ont rien d’inscrit dans la colonne des groupes et ne sont dans aucun groupe.
   }
 
+rates-title = À quelle fréquence
+rates-by = Selon
+rates-by-year = l’année civile
+rates-by-since_start = les années depuis le début
+rates-by-age = l’âge
+rates-sentence = { $group } : { $events } événements en { $years } personnes-années, soit { $rate } pour { $per } personnes-années (intervalle à 95 % : { $interval }).
+rates-sentence-compared = { $group } : { $events } événements en { $years } personnes-années, soit { $rate } pour { $per } personnes-années (intervalle à 95 % : { $interval }), { $ratio } fois le taux de { $first } ({ $ratioInterval }).
+rates-do-not-mean = Un taux compte les événements par temps d’observation ; ce n’est pas la proportion de ceux qui auront eu l’événement, et une moyenne sur des années où le risque change peut le cacher.
+rates-figure = Événements pour { $per } personnes-années, avec limites à 95 %
+rates-figure-described = Taux dans { $bands ->
+    [one] une classe
+   *[other] { $bands } classes
+  } pour { $groups ->
+    [one] tous ensemble
+   *[other] { $groups } groupes
+  } ; les nombres sont dans le tableau.
+rates-caption = Événements pour { $per } personnes-années
+rates-band = Dans
+rate-per = Taux pour { $per } (limites à 95 %)
+band-from = { $from } et plus
+rates-standardised-caption = Taux standardisés sur l’âge pour { $per } personnes-années
+rates-crude = Brut
+standard-who_world = Population mondiale type de l’OMS 2000-2025
+standard-segi = Population mondiale type de Segi
+rates-unknown-age = { $n ->
+    [one] Un patient sans âge n’est dans aucune classe d’âge.
+   *[other] { $patients } patients sans âge ne sont dans aucune classe d’âge.
+  }
+rates-method = Le temps est découpé à chaque classe (Lexis) ; limites d’un taux Garwood (1936), d’un rapport exactes, conditionnelles à l’ensemble des événements ; standardisation directe, limites Fay et Feuer (1997). Poids de la population type de l’OMS : Ahmad et autres (2001).
+caution-few_events_in_rate = { $level } : seulement { $events } événements, un patient de plus ou de moins change nettement le taux.
+caution-standard_cut_short = Les âges observés portent { $share } du poids de la population type ; celle-ci a été réduite à ces âges, et le chiffre ne se compare qu’à d’autres réduits de même.
+refusal-age_not_known = Le registre n’a pas d’âge. Choisissez une colonne avec l’âge ou la date de naissance dans Registre.
+refusal-uneven_weights = Une population type demande un poids par classe d’âge.
+
 ## Compare
 
 compare-title = Comparer

@@ -4,6 +4,7 @@ import { live } from '../parts/live.js';
 import { noRegister, questionChoices } from '../parts/question.js';
 import { leavingBlock } from './outcomes/leaving.js';
 import { lifeTableBlock } from './outcomes/life_table.js';
+import { ratesBlock } from './outcomes/rates.js';
 import { survivalBlock } from './outcomes/survival.js';
 
 /** @param {import('../app.js').App} app */
@@ -18,6 +19,7 @@ export function outcomesPlace(app) {
       survivalBlock(app),
       lifeTableBlock(app),
       leavingBlock(app),
+      ratesBlock(app),
     ];
   });
 }
