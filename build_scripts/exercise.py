@@ -96,6 +96,8 @@ def _caseload(ask: Any) -> None:
     ask("caseload.history")
     ask("caseload.project", **setting)
     ask("caseload.resources", **setting, items=items, lines=lines)
+    ask("caseload.back_test", back_years=2, draws=100)
+    ask("caseload.parts", **setting)
     early = {"kind": "found_earlier", "percent": 20, "months_earlier": 6, "cost_per_year": 9000}
     scenarios = [{"name": "Both", "levers": [{"kind": "fewer_lost", "percent": 40}, early]}]
     ask("caseload.levers", **setting, items=items, scenarios=scenarios)

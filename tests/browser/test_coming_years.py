@@ -142,3 +142,19 @@ def test_the_coming_years_reach_the_report(page: Page) -> None:
     report = page.locator("#report-document")
     for caption in ("When there is no longer enough", "Cost in each year", "What each scenario buys"):
         report.locator("caption", has_text=caption).first.wait_for(timeout=ANSWER_MS)
+
+
+def test_what_would_have_been_projected_three_years_ago(page: Page, native: Callable) -> None:
+    told = native("caseload.back_test", {"back_years": 3})
+    rows = table_rows(page, "as it would have been projected from earlier days")
+    assert len(rows) == len(told["tests"])
+    for row, test in zip(rows, told["tests"], strict=True):
+        assert numbers(row[1]) == pytest.approx([test["band"]["value"]], abs=0.51)
+        assert numbers(row[3]) == pytest.approx(test["band"]["p95"], abs=0.51)
+        assert numbers(row[4]) == [test["seen"]]
+        assert row[7] == ("yes" if test["held"]["p95"] else "no")
+    parts = native("caseload.parts", {"years": 5})["years"]
+    for row, year in zip(table_rows(page, "Shares of the variance"), parts, strict=True):
+        assert numbers(" ".join(row[1:])) == pytest.approx(
+            [100 * year[part] for part in ("inflow", "leaving", "chance")], abs=0.51
+        )

@@ -1017,7 +1017,7 @@ newcomers-basis-history = as in the past
 newcomers-basis-typed = typed
 newcomers-per-year = Newcomers a year
 projection-sentence = From { $today } now, about { $value } will be under care on { $ends } (95 of 100 runs: { $lower } to { $upper }).
-projection-figure = Patients under care, with bands for 80 and 95 of 100 runs
+projection-figure = Patients under care, with bands for 50, 80 and 95 of 100 runs
 projection-figure-described = A line from today's number over { $years ->
     [one] { $years } year
    *[other] { $years } years
@@ -1150,7 +1150,7 @@ levers-sentence = { $name }, after { $years ->
    *[other] { $years } years
   }: { $more } under care (95 of 100 runs: { $lower } to { $upper }); over the whole time { $patient_years } patient-years of care, { $lost } lost, { $deaths } deaths and { $cost } of discounted cost.
 levers-best-sentence = For { $budget }, “{ $name }” gains most patient-years of care in { $share } of the runs.
-levers-figure = Patients under care with each scenario; the bands are those of no change, for 80 and 95 of 100 runs
+levers-figure = Patients under care with each scenario; the bands are those of no change, for 50, 80 and 95 of 100 runs
 levers-figure-described = Lines over { $years ->
     [one] { $years } year
    *[other] { $years } years
@@ -1217,6 +1217,37 @@ caution-deaths_outside_unseen = “{ $name }” keeps patients who would have le
 caution-scenario_free = “{ $name }” has no cost of its own: nothing was typed.
 refusal-no_scenarios = Type at least one lever.
 refusal-lever_makes_no_difference = This lever does not move that figure at all.
+back-test-title = Would it have been right?
+back-years = Look back by years
+back-test-held = On { $origin } this would have projected { $value } under care for { $ends } (95 of 100 runs: { $lower } to { $upper }). There were { $seen }: within the band.
+back-test-missed = On { $origin } this would have projected { $value } under care for { $ends } (95 of 100 runs: { $lower } to { $upper }). There were { $seen }: outside the band. Something changed that the past did not show.
+back-test-flows = It expected { $newcomers } newcomers and saw { $seen_newcomers }; it expected { $leaving } to leave and saw { $seen_leaving }.
+back-test-figure = Projected from what was known on { $origin } (bands for 50, 80 and 95 of 100 runs), and what was seen (dots)
+back-test-described = A line with three bands that widen, and a dashed line with dots for the number really under care; the table below holds the values.
+back-test-path-caption = Projected and seen, every third month
+axis-years-from-origin = Years from the earlier day
+projected = Projected
+projected-on = Projected on
+seen = Seen
+held-p50 = In the 50% band
+held-p80 = In the 80% band
+held-p95 = In the 95% band
+back-tests-sentence = Projected from each of { $count } earlier years to today, the 95% band held { $held } times and the 80% band { $held80 } times.
+back-tests-caption = Under care on { $ends }, as it would have been projected from earlier days
+back-tests-note = Month by month since the day chosen above, the 50% band held in { $p50 } of the months, the 80% band in { $p80 }, the 95% band in { $p95 }. Neighbouring months share their luck.
+back-test-method = The register as it would have been on the earlier day is projected to the closing date in the same way as above. Earlier days share their data, so their successes are not independent.
+parts-title = Where the bands come from
+parts-sentence = On { $ends }, most of the spread ({ $share }) comes from this: { $part }.
+parts-figure = Where the spread of the number under care comes from
+parts-described = One bar for each year, split into the shares of newcomers, leaving and chance.
+parts-caption = Shares of the variance of the number under care
+part-inflow = how many come a year
+part-leaving = the rates of leaving
+part-chance = chance among single patients
+parts-method = Each source is redrawn by itself with the others held at what is expected, and its variance is set beside the sum of all three. A longer history narrows the first two, never the third.
+caution-back_test_hindsight = The earlier day is seen with one piece of hindsight: patients lost by now count as lost since their last visit, though that was perhaps not yet known then.
+caution-few_back_tests = Only { $count } earlier days can be tried: how often the bands held says little.
+refusal-back_test_history_too_short = Before the earlier day there are only { $whole_years } whole years of newcomers; { $needed } are needed. Look back by fewer years.
 caution-history_too_short = The register holds { $whole_years ->
     [0] no whole year
     [one] one whole year

@@ -1017,7 +1017,7 @@ newcomers-basis-history = comme par le passé
 newcomers-basis-typed = saisis
 newcomers-per-year = Nouveaux par an
 projection-sentence = De { $today } aujourd’hui, environ { $value } seront suivis le { $ends } (95 tirages sur 100 : { $lower } à { $upper }).
-projection-figure = Patients suivis, avec bandes pour 80 et 95 tirages sur 100
+projection-figure = Patients suivis, avec bandes pour 50, 80 et 95 tirages sur 100
 projection-figure-described = Une ligne à partir du nombre d’aujourd’hui sur { $years ->
     [one] { $years } an
    *[other] { $years } ans
@@ -1150,7 +1150,7 @@ levers-sentence = { $name }, après { $years ->
    *[other] { $years } ans
   } : { $more } suivis (95 tirages sur 100 : { $lower } à { $upper }) ; sur toute la période { $patient_years } patients-années de suivi, { $lost } perdus de vue, { $deaths } décès et { $cost } de coût actualisé.
 levers-best-sentence = Pour { $budget }, « { $name } » gagne le plus de patients-années de suivi dans { $share } des tirages.
-levers-figure = Patients suivis selon chaque scénario ; les bandes sont celles de la situation actuelle, pour 80 et 95 tirages sur 100
+levers-figure = Patients suivis selon chaque scénario ; les bandes sont celles de la situation actuelle, pour 50, 80 et 95 tirages sur 100
 levers-figure-described = Lignes sur { $years ->
     [one] { $years } an
    *[other] { $years } ans
@@ -1217,6 +1217,37 @@ caution-deaths_outside_unseen = « { $name } » garde des patients qui seraien
 caution-scenario_free = « { $name } » n’a pas de coût propre : rien n’a été saisi.
 refusal-no_scenarios = Saisissez au moins un levier.
 refusal-lever_makes_no_difference = Ce levier ne change rien à ce chiffre.
+back-test-title = Aurait-elle eu raison ?
+back-years = Remonter de, en années
+back-test-held = Le { $origin }, la projection aurait donné { $value } patients suivis pour le { $ends } (95 tirages sur 100 : { $lower } à { $upper }). Il y en a eu { $seen } : dans la bande.
+back-test-missed = Le { $origin }, la projection aurait donné { $value } patients suivis pour le { $ends } (95 tirages sur 100 : { $lower } à { $upper }). Il y en a eu { $seen } : hors de la bande. Quelque chose a changé que le passé ne montrait pas.
+back-test-flows = Elle attendait { $newcomers } nouveaux, il en est venu { $seen_newcomers } ; elle attendait { $leaving } sorties, il y en a eu { $seen_leaving }.
+back-test-figure = Projeté d’après ce qui était connu le { $origin } (bandes pour 50, 80 et 95 tirages sur 100), et observé (points)
+back-test-described = Une ligne avec trois bandes qui s’élargissent, et une ligne pointillée avec des points pour le nombre réellement suivi ; le tableau ci-dessous contient les valeurs.
+back-test-path-caption = Projeté et observé, tous les trois mois
+axis-years-from-origin = Années depuis la date antérieure
+projected = Projeté
+projected-on = Projeté le
+seen = Observé
+held-p50 = Dans la bande à 50 %
+held-p80 = Dans la bande à 80 %
+held-p95 = Dans la bande à 95 %
+back-tests-sentence = Projetée jusqu’à aujourd’hui depuis { $count } années antérieures, la bande à 95 % a tenu { $held } fois et celle à 80 % { $held80 } fois.
+back-tests-caption = Suivis le { $ends }, tels qu’ils auraient été projetés à des dates antérieures
+back-tests-note = Mois après mois depuis la date choisie ci-dessus, la bande à 50 % a tenu dans { $p50 } des mois, celle à 80 % dans { $p80 }, celle à 95 % dans { $p95 }. Des mois voisins partagent leur hasard.
+back-test-method = Le registre tel qu’il aurait été à la date antérieure est projeté jusqu’à la clôture, de la même façon que ci-dessus. Les dates antérieures partagent leurs données : leurs succès ne sont pas indépendants.
+parts-title = D’où viennent les bandes
+parts-sentence = Le { $ends }, la plus grande part de la dispersion ({ $share }) vient de ceci : { $part }.
+parts-figure = D’où vient la dispersion du nombre de patients suivis
+parts-described = Une barre par année, partagée entre les arrivées, les sorties et le hasard.
+parts-caption = Parts de la variance du nombre de patients suivis
+part-inflow = combien arrivent par an
+part-leaving = les taux de sortie
+part-chance = le hasard entre patients
+parts-method = Chaque source est retirée seule, les autres étant tenues à ce qui est attendu, et sa variance est rapportée à la somme des trois. Une histoire plus longue réduit les deux premières, jamais la troisième.
+caution-back_test_hindsight = La date antérieure est vue avec un avantage : les patients aujourd’hui perdus de vue comptent comme perdus depuis leur dernière visite, ce qu’on ne savait peut-être pas encore.
+caution-few_back_tests = Seules { $count } dates antérieures peuvent être essayées : le nombre de fois où les bandes ont tenu dit peu de chose.
+refusal-back_test_history_too_short = Avant la date antérieure, il n’y a que { $whole_years } années complètes d’arrivées ; il en faut { $needed }. Remontez de moins d’années.
 caution-history_too_short = Le registre contient { $whole_years ->
     [0] aucune année complète
     [one] une année complète

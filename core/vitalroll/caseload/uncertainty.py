@@ -16,19 +16,20 @@ _SHAPE_WITHOUT_EXITS = 0.5
 
 @dataclass(frozen=True)
 class Band:
-    """An expected value with the ranges that hold 80 % and 95 % of the draws."""
+    """An expected value with the ranges that hold 80 %, 95 % and 50 % of the draws."""
 
     value: float
     p80: tuple[float, float]
     p95: tuple[float, float]
+    p50: tuple[float, float]
 
 
 def bands(expected: np.ndarray, drawn: np.ndarray) -> list[Band]:
     """Return a band for each expected value, shape (k,), from draws of shape (draws, k)."""
-    low95, low80, high80, high95 = np.quantile(drawn, (0.025, 0.1, 0.9, 0.975), axis=0)
+    levels = np.quantile(drawn, (0.1, 0.9, 0.025, 0.975, 0.25, 0.75), axis=0).T.tolist()
     return [
-        Band(float(value), (float(l80), float(u80)), (float(l95), float(u95)))
-        for value, l80, u80, l95, u95 in zip(expected, low80, high80, low95, high95, strict=True)
+        Band(float(value), (low80, high80), (low95, high95), (low50, high50))
+        for value, (low80, high80, low95, high95, low50, high50) in zip(expected, levels, strict=True)
     ]
 
 

@@ -21,6 +21,7 @@ from vitalroll.desk import (
     register_tasks,
     resource_tasks,
     settings_tasks,
+    trust_tasks,
 )
 
 TASKS = {
@@ -38,4 +39,5 @@ TASKS = {
     **register_tasks.TASKS,
     **resource_tasks.TASKS,
     **settings_tasks.TASKS,
+    **trust_tasks.TASKS,
 }

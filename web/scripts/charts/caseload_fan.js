@@ -7,7 +7,7 @@ const MARGIN_LEFT = 52;
 /** More bands than this hide each other: then only the first course has its own. */
 const MOST_BANDS = 1;
 
-/** @typedef {{ value: number, p80: [number, number], p95: [number, number] }} Band */
+/** @typedef {{ value: number, p50: [number, number], p80: [number, number], p95: [number, number] }} Band */
 
 /**
  * @param {{ courses: Array<{label: string, bands: Band[]}> }} data each course from today on, a year apart
@@ -16,7 +16,7 @@ const MOST_BANDS = 1;
 export function caseloadFan({ courses }, { width, words }) {
   const height = Math.min(400, Math.max(260, width * 0.52));
   const points = courses.map(({ bands }) => bands.map((band, year) => ({
-    year, value: band.value, l80: band.p80[0], u80: band.p80[1], l95: band.p95[0], u95: band.p95[1],
+    year, value: band.value, l80: band.p80[0], u80: band.p80[1], l95: band.p95[0], u95: band.p95[1], l50: band.p50[0], u50: band.p50[1],
   })));
   const highest = Math.max(...points.flat().map(({ u95 }) => u95)) * 1.06;
   const years = points[0].length - 1;
@@ -52,7 +52,8 @@ function courseMarks(line, position, banded) {
   const { stroke, dash } = seriesStyle(position);
   return [
     banded ? Plot.areaY(line, { x: 'year', y1: 'l95', y2: 'u95', fill: stroke, fillOpacity: 0.1 }) : null,
-    banded ? Plot.areaY(line, { x: 'year', y1: 'l80', y2: 'u80', fill: stroke, fillOpacity: 0.16 }) : null,
+    banded ? Plot.areaY(line, { x: 'year', y1: 'l80', y2: 'u80', fill: stroke, fillOpacity: 0.14 }) : null,
+    banded ? Plot.areaY(line, { x: 'year', y1: 'l50', y2: 'u50', fill: stroke, fillOpacity: 0.2 }) : null,
     Plot.lineY(line, { x: 'year', y: 'value', stroke, strokeWidth: 2, strokeDasharray: dash ?? 'none' }),
     Plot.dot(line, { x: 'year', y: 'value', r: 2.6, fill: stroke }),
   ];
