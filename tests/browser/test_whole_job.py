@@ -32,7 +32,7 @@ def test_from_the_demo_to_a_saved_report(page: Page, native: Callable, tmp_path:
 
 
 def _register(page: Page, native: Callable) -> None:
-    sentence = page.locator("#place-register .sentence").inner_text()
+    sentence = page.locator("#understood-heading ~ .sentence").inner_text()
     assert numbers(sentence)[0] == native.cohort["n"]
     rows = table_rows(page, "How follow-up ended")
     counts = {label: numbers(n)[0] for label, n, _ in rows}

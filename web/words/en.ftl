@@ -762,6 +762,7 @@ rates-unknown-age = { $n ->
 rates-method = Time is cut at each band (Lexis); limits of a rate Garwood (1936), of a ratio exact and conditional on all outcomes; standardised directly, limits Fay & Feuer (1997). Weights of the WHO standard: Ahmad and others (2001).
 caution-few_events_in_rate = { $level }: only { $events } outcomes, so one patient more or less moves the rate noticeably.
 caution-standard_cut_short = Ages that hold { $share } of the standard's weight were seen; the standard was cut to these, so the figure can only be compared with others cut in the same way.
+caution-standard_thin = Ages in which fewer than 10 person-years were lived hold { $share } of the standard's weight: one outcome there moves the standardised rate greatly, and its upper limit says how little is known.
 refusal-age_not_known = The register has no age. Choose a column with the age or the date of birth in Register.
 refusal-uneven_weights = A standard needs one weight for each age band.
 

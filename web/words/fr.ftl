@@ -762,6 +762,7 @@ rates-unknown-age = { $n ->
 rates-method = Le temps est découpé à chaque classe (Lexis) ; limites d’un taux Garwood (1936), d’un rapport exactes, conditionnelles à l’ensemble des événements ; standardisation directe, limites Fay et Feuer (1997). Poids de la population type de l’OMS : Ahmad et autres (2001).
 caution-few_events_in_rate = { $level } : seulement { $events } événements, un patient de plus ou de moins change nettement le taux.
 caution-standard_cut_short = Les âges observés portent { $share } du poids de la population type ; celle-ci a été réduite à ces âges, et le chiffre ne se compare qu’à d’autres réduits de même.
+caution-standard_thin = Des âges où moins de 10 personnes-années ont été vécues portent { $share } du poids de la population type : un seul événement y change beaucoup le taux standardisé, et sa limite supérieure dit combien on en sait peu.
 refusal-age_not_known = Le registre n’a pas d’âge. Choisissez une colonne avec l’âge ou la date de naissance dans Registre.
 refusal-uneven_weights = Une population type demande un poids par classe d’âge.
 

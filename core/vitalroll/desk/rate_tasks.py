@@ -26,6 +26,9 @@ from vitalroll.register.cohort import DEATHS, Cohort, Numeric
 SINCE_START = (0, 1, 2, 3, 5, 10, 20)
 AGE_STARTS = (0, 5, 15, 25, 45, 65)
 
+THIN_SHARE = 0.05
+"""More of a standard's weight than this on bands that hardly anybody lived in makes its limits useless."""
+
 FEW_EVENTS = 10
 """Fewer outcomes than this make a rate that one patient moves by a tenth or more."""
 
@@ -91,9 +94,12 @@ def rates(memory: Memory, request: RatesRequest, report: Any) -> dict[str, Any]:
                 own.events, own.person_years, first.events, first.person_years, request.confidence
             )
         )
-    used = [standard.weight_used for each in found for standard in (each["standards"] or {}).values()]
+    standards = [standard for each in found for standard in (each["standards"] or {}).values()]
+    used, thin = ([getattr(each, name) for each in standards] for name in ("weight_used", "weight_thin"))
     if used and min(used) < 0.95:
         cautions.append(Caution("standard_cut_short", {"share": min(used)}))
+    if thin and max(thin) > THIN_SHARE:
+        cautions.append(Caution("standard_thin", {"share": max(thin)}))
     return {
         "bands": bands,
         "groups": found,

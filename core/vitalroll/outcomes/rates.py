@@ -31,6 +31,10 @@ STANDARDS = {
 }  # fmt: skip
 
 
+THIN = 10
+"""Person-years below which the rate of a band says next to nothing (common practice)."""
+
+
 @dataclass(frozen=True)
 class BandRate:
     """One band: outcomes, person-years and the rate per person-year with Garwood's limits."""
@@ -105,7 +109,8 @@ def rate_ratio(
 class Standardised:
     """A directly standardised rate per person-year.
 
-    ``weight_used`` is the share of the standard's weight in bands that have person-years.
+    ``weight_used`` is the share of the standard's weight in bands that have person-years, ``weight_thin`` of
+    that the share in bands with fewer than 10.
     """
 
     events: int
@@ -113,6 +118,7 @@ class Standardised:
     crude: Estimate
     standardised: Estimate
     weight_used: float
+    weight_thin: float
 
 
 def standardise(
@@ -158,4 +164,5 @@ def standardise(
         crude=rate(int(events.sum()), float(years.sum()), confidence),
         standardised=Estimate(value, lower, upper, variance**0.5),
         weight_used=float(share[seen].sum()),
+        weight_thin=float(share[seen & (years < THIN)].sum() / share[seen].sum()),
     )

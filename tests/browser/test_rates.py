@@ -1,0 +1,41 @@
+"""Rates on the page beside the native engine, in every time scale."""
+
+from __future__ import annotations
+
+from collections.abc import Callable
+
+import pytest
+from page_reading import ANSWER_MS, DEATHS, GROUP, go, numbers, table_rows
+
+from site_server import SiteServer
+
+
+def test_rates_by_year_duration_and_age(site: SiteServer, opened: Callable, native: Callable) -> None:
+    page = opened(site.address).page
+    page.locator("#open-demo").click()
+    page.get_by_text("person-years.").first.wait_for(timeout=ANSWER_MS)
+    go(page, "Outcomes")
+    page.locator("#outcomes-group").select_option(label=GROUP)
+    page.locator("#rates .sentence").nth(2).wait_for(timeout=ANSWER_MS)
+    for by, first_band in (("year", "2016"), ("since_start", "0 to 1"), ("age", "5 to 15")):
+        page.locator("#rates-by").select_option(by)
+        expected = native("outcomes.rates", {"interest": DEATHS, "group": native.group, "by": by})
+        page.locator("#rates").get_by_text(first_band, exact=True).first.wait_for(
+            state="attached", timeout=ANSWER_MS
+        )
+        page.locator("#rates details summary").click()
+        rows = table_rows(page, "Outcomes for each 100 person-years")
+        lived = [
+            (group["level"], band)
+            for group in expected["groups"]
+            for band in group["bands"]
+            if band["person_years"] > 0
+        ]
+        assert len(rows) == len(lived)
+        for row, (level, band) in zip(rows, lived, strict=True):
+            assert row[0] == level
+            assert numbers(row[2])[0] == band["events"]
+            assert numbers(row[4])[0] == pytest.approx(100 * band["rate"]["value"], abs=0.0051)
+    sentences = page.locator("#rates .sentence").all_inner_texts()
+    ratio = expected["groups"][1]["ratio"]["value"]
+    assert ratio == pytest.approx(numbers(sentences[1])[-3], rel=0.006)
