@@ -75,6 +75,7 @@ def _outcomes(ask: Any, group: str) -> None:
     ask("outcomes.survival", group=group)
     ask("outcomes.life_table", group=group)
     ask("outcomes.leaving", group=group)
+    ask("outcomes.mean_time", group=group)
     for scale in ("year", "since_start", "age"):
         ask("outcomes.rates", group=group, by=scale)
 

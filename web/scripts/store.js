@@ -29,7 +29,7 @@ export function beginnings(language) {
     /** Answer of register.build, or null. */
     cohort: null,
     question: { interest: ['died_of_disease', 'died_of_other_cause', 'died_cause_unknown'], group: null },
-    outcomes: { interval: 'log-log', step: 'year', ratesBy: 'year' },
+    outcomes: { interval: 'log-log', step: 'year', ratesBy: 'year', horizon: null, further: 2 },
     compare: { exposed: null, reference: null, step: 'year', intervals: 5, weight: 'log_rank', covariates: [], ties: 'efron', competing: null, known: null, landmarkMonths: null },
     caseload: {
       years: 5, basis: 'history', perYear: null, backYears: 3,

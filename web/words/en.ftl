@@ -766,6 +766,31 @@ caution-standard_thin = Ages in which fewer than 10 person-years were lived hold
 refusal-age_not_known = The register has no age. Choose a column with the age or the date of birth in Register.
 refusal-uneven_weights = A standard needs one weight for each age band.
 
+mean-time-title = How long on average, and what lies ahead
+mean-time-empty = Type a number of years.
+mean-time-horizon = Up to so many years
+mean-time-horizon-hint = To be chosen before looking. Left empty: five years, or as far as all groups go.
+mean-time-further = Looking ahead, years
+mean-time-sentence-deaths = { $group }: within { $horizon } years patients lived { $mean } years on average (95% interval { $interval }).
+mean-time-sentence-other = { $group }: within { $horizon } years patients spent { $mean } years without the outcome on average (95% interval { $interval }).
+mean-time-sentence-compared-deaths = { $group }: within { $horizon } years patients lived { $mean } years on average (95% interval { $interval }), { $difference } years in difference from { $first } ({ $between }).
+mean-time-sentence-compared-other = { $group }: within { $horizon } years patients spent { $mean } years without the outcome on average (95% interval { $interval }), { $difference } years in difference from { $first } ({ $between }).
+mean-time-caption = Averages within { $horizon } years (95% limits)
+mean-time-deaths = Years lived
+mean-time-other = Years without the outcome
+mean-time-lost = Years lost
+mean-time-difference = Difference from the first
+ahead-caption-deaths = Alive { $years } years later, of those who had come so far
+ahead-caption-other = Without the outcome { $years } years later, of those who had come so far
+ahead-survived = Years since start
+ahead-share = Share (95% limits)
+ahead-few_survivors = fewer than 10 left
+ahead-beyond_follow_up = beyond follow-up
+mean-time-does-not-mean = An average within a horizon needs no hazards in constant proportion, so it can be compared when curves cross; it says nothing of later years.
+mean-time-method = Area under the product-limit curve (Irwin 1949; Royston & Parmar 2013); conditional survival with Greenwood's variance of the later years (Zabor and others 2013).
+refusal-horizon_beyond_follow_up = Not everyone's curve goes so far: the shortest ends after { NUMBER($years, maximumFractionDigits: 1) } years. Choose an earlier year.
+refusal-curve_restarts = Nobody was under observation for some time, so the curve does not go through from the start and has no average.
+
 ## Compare
 
 compare-title = Compare

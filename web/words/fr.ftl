@@ -766,6 +766,31 @@ caution-standard_thin = Des âges où moins de 10 personnes-années ont été v�
 refusal-age_not_known = Le registre n’a pas d’âge. Choisissez une colonne avec l’âge ou la date de naissance dans Registre.
 refusal-uneven_weights = Une population type demande un poids par classe d’âge.
 
+mean-time-title = Combien de temps en moyenne, et ce qui reste à venir
+mean-time-empty = Saisissez un nombre d’années.
+mean-time-horizon = Jusqu’à tant d’années
+mean-time-horizon-hint = À choisir avant de regarder. Laissé vide : cinq ans, ou aussi loin que vont tous les groupes.
+mean-time-further = Années à venir
+mean-time-sentence-deaths = { $group } : en { $horizon } ans, les patients ont vécu en moyenne { $mean } ans (intervalle à 95 % : { $interval }).
+mean-time-sentence-other = { $group } : en { $horizon } ans, les patients ont passé en moyenne { $mean } ans sans l’événement (intervalle à 95 % : { $interval }).
+mean-time-sentence-compared-deaths = { $group } : en { $horizon } ans, les patients ont vécu en moyenne { $mean } ans (intervalle à 95 % : { $interval }), soit { $difference } ans d’écart avec { $first } ({ $between }).
+mean-time-sentence-compared-other = { $group } : en { $horizon } ans, les patients ont passé en moyenne { $mean } ans sans l’événement (intervalle à 95 % : { $interval }), soit { $difference } ans d’écart avec { $first } ({ $between }).
+mean-time-caption = Moyennes en { $horizon } ans (limites à 95 %)
+mean-time-deaths = Années vécues
+mean-time-other = Années sans l’événement
+mean-time-lost = Années perdues
+mean-time-difference = Écart avec le premier
+ahead-caption-deaths = En vie { $years } ans plus tard, parmi ceux arrivés jusque-là
+ahead-caption-other = Sans l’événement { $years } ans plus tard, parmi ceux arrivés jusque-là
+ahead-survived = Années depuis le début
+ahead-share = Proportion (limites à 95 %)
+ahead-few_survivors = moins de 10 restants
+ahead-beyond_follow_up = au-delà du suivi
+mean-time-does-not-mean = Une moyenne dans un horizon ne suppose pas de risques proportionnels : elle se compare même si les courbes se croisent ; elle ne dit rien des années suivantes.
+mean-time-method = Aire sous la courbe produit-limite (Irwin 1949 ; Royston et Parmar 2013) ; survie conditionnelle avec la variance de Greenwood des années suivantes (Zabor et autres 2013).
+refusal-horizon_beyond_follow_up = Toutes les courbes ne vont pas si loin : la plus courte s’arrête après { NUMBER($years, maximumFractionDigits: 1) } ans. Choisissez une année plus précoce.
+refusal-curve_restarts = Personne n’était observé pendant un certain temps : la courbe ne va pas d’un trait depuis le début et n’a pas de moyenne.
+
 ## Compare
 
 compare-title = Comparer

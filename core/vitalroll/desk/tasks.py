@@ -21,6 +21,7 @@ from vitalroll.desk import (
     register_tasks,
     resource_tasks,
     settings_tasks,
+    time_tasks,
     trust_tasks,
 )
 
@@ -39,5 +40,6 @@ TASKS = {
     **register_tasks.TASKS,
     **resource_tasks.TASKS,
     **settings_tasks.TASKS,
+    **time_tasks.TASKS,
     **trust_tasks.TASKS,
 }

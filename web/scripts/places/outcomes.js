@@ -4,6 +4,7 @@ import { live } from '../parts/live.js';
 import { noRegister, questionChoices } from '../parts/question.js';
 import { leavingBlock } from './outcomes/leaving.js';
 import { lifeTableBlock } from './outcomes/life_table.js';
+import { meanTimeBlock } from './outcomes/mean_time.js';
 import { ratesBlock } from './outcomes/rates.js';
 import { survivalBlock } from './outcomes/survival.js';
 
@@ -20,6 +21,7 @@ export function outcomesPlace(app) {
       lifeTableBlock(app),
       leavingBlock(app),
       ratesBlock(app),
+      meanTimeBlock(app),
     ];
   });
 }
