@@ -96,6 +96,7 @@ def _caseload(ask: Any) -> None:
     lines = [{"kind": "amount", "item": 0, "limit": 900}, {"kind": "beds", "item": 0, "limit": 90}]
     ask("caseload.history")
     ask("caseload.project", **setting)
+    ask("caseload.project", **setting, newcomers={"basis": "trend"}, completeness=90, tail="halved")
     ask("caseload.resources", **setting, items=items, lines=lines)
     ask("caseload.back_test", back_years=2, draws=100)
     ask("caseload.parts", **setting)

@@ -2,8 +2,10 @@
 
 from __future__ import annotations
 
+import json
 import re
 from collections.abc import Callable
+from pathlib import Path
 
 import pytest
 from playwright.sync_api import Page
@@ -158,3 +160,51 @@ def test_what_would_have_been_projected_three_years_ago(page: Page, native: Call
         assert numbers(" ".join(row[1:])) == pytest.approx(
             [100 * year[part] for part in ("inflow", "leaving", "chance")], abs=0.51
         )
+
+
+def test_a_trend_a_tail_and_an_incomplete_register(page: Page, native: Callable) -> None:
+    page.locator("#caseload-basis").select_option("trend")
+    page.locator("#caseload-tail").select_option("doubled")
+    put(page, "#caseload-completeness", 80)
+    setting = {"newcomers": {"basis": "trend", "damping": 0.8}, "completeness": 80, "tail": "doubled"}
+    told = native("caseload.project", setting)
+    page.get_by_text("there twice the last rates are used").wait_for(timeout=ANSWER_MS)
+    page.locator("#projection", has_text="are added").wait_for(timeout=ANSWER_MS)
+    rows = table_rows(page, "Patients under care at the end of each year")
+    for row, band in zip(rows, told["baseline"]["under_care"], strict=True):
+        assert numbers(row[1]) == pytest.approx([band["value"]], abs=0.51)
+    assert numbers(rows[-1][3]) == pytest.approx(told["baseline"]["under_care"][-1]["p95"], abs=0.51)
+
+
+def test_what_was_typed_is_kept_in_a_file_without_patients(page: Page, tmp_path: Path) -> None:
+    page.locator("#items-example").click()
+    page.locator("#levers-example").click()
+    put(page, "#caseload-years", 7)
+    page.locator("#caseload-basis").select_option("trend")
+    page.locator("#levers .sentence").first.wait_for(timeout=ANSWER_MS)
+    with page.expect_download() as saving:
+        page.locator("#scenario-save").click()
+    kept = tmp_path / "kept.json"
+    saving.value.save_as(kept)
+    text = kept.read_text(encoding="utf-8")
+    saved = json.loads(text)["caseload"]
+    assert saved["years"] == 7
+    assert "RH-0" not in text  # no patient's number
+    page.locator("#items-clear").click()
+    page.locator("#levers-clear").click()
+    put(page, "#caseload-years", 3)
+    page.locator("#scenario-open").set_input_files(kept)
+    page.get_by_text("Opened: 4 levers and 3 things that care takes.").wait_for(timeout=ANSWER_MS)
+    assert page.locator("#caseload-years").input_value() == "7"
+    assert page.locator("#caseload-basis").input_value() == "trend"
+    assert page.locator("#levers-1-kind").input_value() == "found_earlier"
+    # A strange file changes nothing and is refused.
+    strange = tmp_path / "strange.json"
+    for spoilt in (
+        "{",
+        json.dumps({"format": "vitalroll-caseload", "version": 1, "caseload": saved | {"basis": "x"}}),
+    ):
+        strange.write_text(spoilt, encoding="utf-8")
+        page.locator("#scenario-open").set_input_files(strange)
+        page.get_by_text("Nothing was changed.").wait_for(timeout=ANSWER_MS)
+        assert page.locator("#caseload-years").input_value() == "7"

@@ -32,7 +32,8 @@ export function beginnings(language) {
     outcomes: { interval: 'log-log', step: 'year', ratesBy: 'year', horizon: null, further: 2 },
     compare: { exposed: null, reference: null, step: 'year', intervals: 5, weight: 'log_rank', covariates: [], ties: 'efron', competing: null, known: null, landmarkMonths: null },
     caseload: {
-      years: 5, basis: 'history', perYear: null, backYears: 3,
+      years: 5, basis: 'history', perYear: null, incidence: null, population: null, growth: 0, damping: 0.8,
+      completeness: 100, tail: 'held', backYears: 3,
       items: [], lines: [], discount: 3,
       levers: [], budget: 100000, sensitivityOf: 0, breakEven: { kind: 'fewer_lost', goal: 'lost', target: null },
     },

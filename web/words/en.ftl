@@ -1037,11 +1037,30 @@ history-method = Newcomers: Poisson limits (Garwood 1936), widened where years d
 
 projection-title = The coming years
 projection-needs-newcomers = Type how many newcomers to expect each year.
-years-ahead = Years ahead
-newcomers-basis = Newcomers
-newcomers-basis-history = as in the past
-newcomers-basis-typed = typed
-newcomers-per-year = Newcomers a year
+caseload-years = Years ahead
+caseload-basis = Newcomers
+caseload-basis-history = as in the past
+caseload-basis-typed = typed
+caseload-per-year = Newcomers a year
+caseload-basis-trend = the trend, damped
+caseload-basis-incidence = incidence × population
+caseload-damping = Damping
+caseload-damping-hint = What is left of the trend after each year: 1 carries it on, 0 stops it.
+caseload-incidence = New cases per 100,000 a year
+caseload-population = Population
+caseload-growth = Growth a year
+caseload-completeness = The register holds of those under care
+caseload-completeness-hint = Below 100 if patients from before the register are missing.
+caseload-tail = Beyond what was seen
+caseload-tail-held = the last rates go on
+caseload-tail-halved = half the last rates
+caseload-tail-doubled = twice the last rates
+caseload-tail-nobody = nobody leaves
+beyond-seen = Longer here than seen
+tail-held = Beyond { $years } years since start, too little was seen: there the last rates are carried on (shaded in the figure).
+tail-halved = Beyond { $years } years since start, too little was seen: there half the last rates are used, as chosen (shaded in the figure).
+tail-doubled = Beyond { $years } years since start, too little was seen: there twice the last rates are used, as chosen (shaded in the figure).
+tail-nobody = Beyond { $years } years since start, too little was seen: there nobody leaves, as chosen (shaded in the figure).
 projection-sentence = From { $today } now, about { $value } will be under care on { $ends } (95 of 100 runs: { $lower } to { $upper }).
 projection-figure = Patients under care, with bands for 50, 80 and 95 of 100 runs
 projection-figure-described = A line from today's number over { $years ->
@@ -1050,7 +1069,7 @@ projection-figure-described = A line from today's number over { $years ->
   }, with bands that widen; the table below holds the values.
 projection-caption = Patients under care at the end of each year
 projection-note = { $draws } runs, seed { $seed }: the same seed gives the same bands.
-projection-method = Today's patients are run forward by how long they have been here, newcomers by survival since arrival (Capocaccia & De Angelis 1997; Verdecchia and others 2002), month by month; rates and counts are redrawn in each run. Beyond { $years } years since start the last rates are held.
+projection-method = Today's patients are run forward by how long they have been here, newcomers by survival since arrival (Capocaccia & De Angelis 1997; Verdecchia and others 2002), month by month; rates and counts are redrawn in each run.
 
 resources-title = What it takes
 resources-type = Type what one patient takes, or how much there is.
@@ -1274,13 +1293,24 @@ parts-method = Each source is redrawn by itself with the others held at what is 
 caution-back_test_hindsight = The earlier day is seen with one piece of hindsight: patients lost by now count as lost since their last visit, though that was perhaps not yet known then.
 caution-few_back_tests = Only { $count } earlier days can be tried: how often the bands held says little.
 refusal-back_test_history_too_short = Before the earlier day there are only { $whole_years } whole years of newcomers; { $needed } are needed. Look back by fewer years.
+back-test-method-trend = The register as it would have been on the earlier day is projected to the closing date in the same way as above, the trend of its newcomers carried on. Earlier days share their data, so their successes are not independent.
+scenario-file-title = Keep what was typed
+scenario-file-lead = Everything typed on this place – years, newcomers, what a patient takes, limits, levers – goes into a small file. No patient is in it. Opening it later, or elsewhere with another register, brings it all back.
+scenario-file-save = Save what was typed
+scenario-file-open = Open a saved file
+scenario-file-opened = Opened: { $levers } levers and { $items } things that care takes.
+scenario-file-strange = This file was not saved from here, or something in it cannot be read. Nothing was changed.
+caution-trend_damped = Newcomers change by about { NUMBER($percent_per_year, maximumFractionDigits: 1) }% a year; that is carried on, and { NUMBER($damping, maximumFractionDigits: 2) } of it is left after each further year.
+caution-register_incomplete = The register is said to hold { NUMBER($completeness, maximumFractionDigits: 0) }% of those under care: { NUMBER($count, maximumFractionDigits: 0) } patients are added, taken to have been here as long as the others.
+refusal-trend_history_too_short = The register holds { $whole_years } whole years of newcomers; { $needed } are needed for a trend. Choose another way to newcomers.
+refusal-trend_not_found = The yearly newcomers have no trend that can be carried on. Choose another way to newcomers.
 caution-history_too_short = The register holds { $whole_years ->
     [0] no whole year
     [one] one whole year
    *[other] { $whole_years } whole years
   } of newcomers; { $needed } are needed to carry them forward. Type a number instead.
 caution-newcomers_overdispersed = Newcomers differ between years more than chance would explain (by a factor of { NUMBER($dispersion, maximumFractionDigits: 1) }); the bands are widened for it.
-caution-newcomers_trend = Newcomers have changed by about { NUMBER($percent_per_year, maximumFractionDigits: 0) }% a year. The projection does not carry the trend on: if it goes on, type a number that you expect.
+caution-newcomers_trend = Newcomers have changed by about { NUMBER($percent_per_year, maximumFractionDigits: 0) }% a year. The projection does not carry the trend on: choose “the trend, damped” to do so.
 caution-years_without_newcomers = { $count ->
     [one] In one year ({ $year }) nobody was registered
    *[other] In { $count } years (the first is { $year }) nobody was registered

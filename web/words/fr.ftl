@@ -1037,11 +1037,30 @@ history-method = Arrivées : limites de Poisson (Garwood 1936), élargies quand
 
 projection-title = Les années à venir
 projection-needs-newcomers = Saisissez combien de nouveaux patients attendre chaque année.
-years-ahead = Nombre d’années
-newcomers-basis = Nouveaux patients
-newcomers-basis-history = comme par le passé
-newcomers-basis-typed = saisis
-newcomers-per-year = Nouveaux par an
+caseload-years = Nombre d’années
+caseload-basis = Nouveaux patients
+caseload-basis-history = comme par le passé
+caseload-basis-typed = saisis
+caseload-per-year = Nouveaux par an
+caseload-basis-trend = la tendance, amortie
+caseload-basis-incidence = incidence × population
+caseload-damping = Amortissement
+caseload-damping-hint = Ce qui reste de la tendance après chaque année : 1 la prolonge, 0 l’arrête.
+caseload-incidence = Nouveaux cas pour 100 000 par an
+caseload-population = Population
+caseload-growth = Croissance par an
+caseload-completeness = Part des patients suivis que contient le registre
+caseload-completeness-hint = Moins de 100 s’il manque des patients d’avant le registre.
+caseload-tail = Au-delà de ce qui a été observé
+caseload-tail-held = les derniers taux continuent
+caseload-tail-halved = la moitié des derniers taux
+caseload-tail-doubled = le double des derniers taux
+caseload-tail-nobody = personne ne sort
+beyond-seen = Ancienneté jamais observée
+tail-held = Au-delà de { $years } ans depuis le début, trop peu a été observé : les derniers taux y sont prolongés (en gris dans la figure).
+tail-halved = Au-delà de { $years } ans depuis le début, trop peu a été observé : la moitié des derniers taux y est utilisée, comme choisi (en gris dans la figure).
+tail-doubled = Au-delà de { $years } ans depuis le début, trop peu a été observé : le double des derniers taux y est utilisé, comme choisi (en gris dans la figure).
+tail-nobody = Au-delà de { $years } ans depuis le début, trop peu a été observé : personne n’y sort, comme choisi (en gris dans la figure).
 projection-sentence = De { $today } aujourd’hui, environ { $value } seront suivis le { $ends } (95 tirages sur 100 : { $lower } à { $upper }).
 projection-figure = Patients suivis, avec bandes pour 50, 80 et 95 tirages sur 100
 projection-figure-described = Une ligne à partir du nombre d’aujourd’hui sur { $years ->
@@ -1050,7 +1069,7 @@ projection-figure-described = Une ligne à partir du nombre d’aujourd’hui su
   }, avec des bandes qui s’élargissent ; le tableau ci-dessous contient les valeurs.
 projection-caption = Patients suivis à la fin de chaque année
 projection-note = { $draws } tirages, germe { $seed } : le même germe donne les mêmes bandes.
-projection-method = Les patients d’aujourd’hui sont prolongés selon leur ancienneté, les nouveaux selon la survie depuis l’arrivée (Capocaccia & De Angelis 1997 ; Verdecchia et coll. 2002), mois par mois ; taux et effectifs sont retirés à chaque tirage. Au-delà de { $years } ans depuis le début, les derniers taux sont maintenus.
+projection-method = Les patients d’aujourd’hui sont prolongés selon leur ancienneté, les nouveaux selon la survie depuis l’arrivée (Capocaccia & De Angelis 1997 ; Verdecchia et coll. 2002), mois par mois ; taux et effectifs sont retirés à chaque tirage.
 
 resources-title = Ce que cela demande
 resources-type = Saisissez ce que demande un patient, ou ce dont on dispose.
@@ -1274,13 +1293,24 @@ parts-method = Chaque source est retirée seule, les autres étant tenues à ce 
 caution-back_test_hindsight = La date antérieure est vue avec un avantage : les patients aujourd’hui perdus de vue comptent comme perdus depuis leur dernière visite, ce qu’on ne savait peut-être pas encore.
 caution-few_back_tests = Seules { $count } dates antérieures peuvent être essayées : le nombre de fois où les bandes ont tenu dit peu de chose.
 refusal-back_test_history_too_short = Avant la date antérieure, il n’y a que { $whole_years } années complètes d’arrivées ; il en faut { $needed }. Remontez de moins d’années.
+back-test-method-trend = Le registre tel qu’il aurait été à la date antérieure est projeté jusqu’à la clôture, de la même façon que ci-dessus, la tendance des arrivées étant prolongée. Les dates antérieures partagent leurs données : leurs succès ne sont pas indépendants.
+scenario-file-title = Garder ce qui a été saisi
+scenario-file-lead = Tout ce qui est saisi ici – années, arrivées, ce que demande un patient, limites, leviers – va dans un petit fichier. Aucun patient n’y figure. L’ouvrir plus tard, ou ailleurs avec un autre registre, ramène le tout.
+scenario-file-save = Enregistrer ce qui a été saisi
+scenario-file-open = Ouvrir un fichier enregistré
+scenario-file-opened = Ouvert : { $levers } leviers et { $items } choses que demandent les soins.
+scenario-file-strange = Ce fichier n’a pas été enregistré ici, ou une partie en est illisible. Rien n’a été changé.
+caution-trend_damped = Les arrivées changent d’environ { NUMBER($percent_per_year, maximumFractionDigits: 1) } % par an ; cela est prolongé, et il en reste { NUMBER($damping, maximumFractionDigits: 2) } après chaque année suivante.
+caution-register_incomplete = Le registre contiendrait { NUMBER($completeness, maximumFractionDigits: 0) } % des patients suivis : { NUMBER($count, maximumFractionDigits: 0) } patients sont ajoutés, supposés là depuis aussi longtemps que les autres.
+refusal-trend_history_too_short = Le registre contient { $whole_years } années complètes d’arrivées ; il en faut { $needed } pour une tendance. Choisissez une autre voie pour les arrivées.
+refusal-trend_not_found = Les arrivées annuelles n’ont pas de tendance qui puisse être prolongée. Choisissez une autre voie pour les arrivées.
 caution-history_too_short = Le registre contient { $whole_years ->
     [0] aucune année complète
     [one] une année complète
    *[other] { $whole_years } années complètes
   } d’arrivées ; il en faut { $needed } pour les prolonger. Saisissez plutôt un nombre.
 caution-newcomers_overdispersed = Les arrivées diffèrent d’une année à l’autre plus que le hasard ne l’explique (d’un facteur { NUMBER($dispersion, maximumFractionDigits: 1) }) ; les bandes sont élargies en conséquence.
-caution-newcomers_trend = Les arrivées ont changé d’environ { NUMBER($percent_per_year, maximumFractionDigits: 0) } % par an. La projection ne prolonge pas cette tendance : si elle doit continuer, saisissez le nombre attendu.
+caution-newcomers_trend = Les arrivées ont changé d’environ { NUMBER($percent_per_year, maximumFractionDigits: 0) } % par an. La projection ne prolonge pas cette tendance : choisissez « la tendance, amortie » pour le faire.
 caution-years_without_newcomers = { $count ->
     [one] Une année ({ $year }), personne n’a été inscrit
    *[other] { $count } années (la première : { $year }), personne n’a été inscrit

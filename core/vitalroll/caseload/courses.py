@@ -62,6 +62,7 @@ def redraw(
     years: int,
     scenarios: Sequence[Scenario] = (),
     vary: Sequence[str] = SOURCES,
+    times_today: float = 1.0,
     draws: int = 1000,
     seed: int = 1,
     report: Report = no_report,
@@ -83,7 +84,7 @@ def redraw(
 
     Parameters
     ----------
-    today, hazards, years
+    today, hazards, years, times_today
         As for ``projection.project``.
     inflow : Inflow
     scenarios : sequence of Scenario
@@ -107,12 +108,12 @@ def redraw(
         if given < 1:
             raise Refusal("out_of_range", field=field, given=given, least=1)
     months = MONTHS_PER_YEAR * years
-    axis = ageing(hazards.edges, cuts=(1, MONTHS_PER_YEAR))
+    axis = ageing(hazards.edges, cuts=(1, MONTHS_PER_YEAR), tail=hazards.tail)
     plans = [as_it_is(months), *(scenario.over(months) for scenario in scenarios)]
     # Whoever is found early would have come later; always drawn as far, so that the streams do
     # not depend on the scenarios.
     more_years = LONGEST_LEAD_MONTHS // MONTHS_PER_YEAR
-    placed, into = axis.place(today).astype(float), axis.arriving(inflow.days_at_arrival)
+    placed, into = times_today * axis.place(today), axis.arriving(inflow.days_at_arrival)
     # Streams of their own, so that a scenario never shifts the baseline.
     parameters, counts, *others = map(
         np.random.default_rng, np.random.SeedSequence(seed).spawn(2 + len(scenarios))

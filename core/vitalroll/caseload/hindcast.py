@@ -11,6 +11,7 @@ from vitalroll.caseload.inflow import FEWEST_WHOLE_YEARS, Inflow, inflow_from_hi
 from vitalroll.caseload.outlook import Measure, Outlook, prospect
 from vitalroll.caseload.projection import MONTHS_PER_YEAR, months_here_today
 from vitalroll.caseload.retention import Retention, retention
+from vitalroll.caseload.trend import inflow_with_trend
 from vitalroll.caseload.uncertainty import Band
 from vitalroll.errors import Refusal
 from vitalroll.numbers import DAYS_PER_MONTH
@@ -80,14 +81,20 @@ def under_care_on(cohort: Cohort, days: np.ndarray) -> np.ndarray:
     return np.searchsorted(first, days, side="right") - np.searchsorted(left, days, side="right")
 
 
-def back_test(cohort: Cohort, years: int, *, draws: int = 1000, seed: int = 1) -> BackTest:
+def back_test(
+    cohort: Cohort, years: int, *, damping: float | None = None, draws: int = 1000, seed: int = 1
+) -> BackTest:
     """Project the last ``years`` years from what was known before them.
+
+    With ``damping`` the trend of the newcomers is carried on (``trend.inflow_with_trend``); without,
+    their mean.
 
     Raises
     ------
     Refusal
-        ``back_test_history_too_short`` (years; whole_years, needed) when fewer than two whole years
-        of newcomers lie before; ``nobody_under_care``; ``no_person_time``.
+        ``back_test_history_too_short`` (back_years; whole_years, needed) when fewer than two whole years
+        of newcomers lie before; ``trend_history_too_short`` when fewer than three do and a trend is
+        asked for; ``nobody_under_care``; ``no_person_time``.
     """
     origin = cohort.closing - round(years * MONTHS_PER_YEAR * DAYS_PER_MONTH)
     known = as_recorded(cohort, origin)
@@ -99,6 +106,8 @@ def back_test(cohort: Cohort, years: int, *, draws: int = 1000, seed: int = 1) -
             whole_years=inflow.whole_years if inflow else 0,
             needed=FEWEST_WHOLE_YEARS,
         )
+    if damping is not None:
+        inflow = inflow_with_trend(inflow, origin, damping=damping)
     found = prospect(
         months_here_today(known), retention(risk_table(known)), inflow, years=years, draws=draws, seed=seed
     ).baseline
@@ -119,7 +128,13 @@ def back_test(cohort: Cohort, years: int, *, draws: int = 1000, seed: int = 1) -
 
 
 def back_tests(
-    cohort: Cohort, *, most_years: int, draws: int = 1000, seed: int = 1, report: Report = no_report
+    cohort: Cohort,
+    *,
+    most_years: int,
+    damping: float | None = None,
+    draws: int = 1000,
+    seed: int = 1,
+    report: Report = no_report,
 ) -> list[BackTest]:
     """Back-test over one year, two years and so on, as far as the history allows.
 
@@ -132,7 +147,7 @@ def back_tests(
     for years in range(1, most_years + 1):
         report("back_tests", years - 1, most_years)
         try:
-            found.append(back_test(cohort, years, draws=draws, seed=seed))
+            found.append(back_test(cohort, years, damping=damping, draws=draws, seed=seed))
         except Refusal:
             if years == 1:
                 raise
@@ -147,6 +162,7 @@ def parts_of_the_band(
     inflow: Inflow,
     *,
     years: int,
+    times_today: float = 1.0,
     draws: int = 1000,
     seed: int = 1,
     report: Report = no_report,
@@ -159,7 +175,16 @@ def parts_of_the_band(
     found = {}
     for position, source in enumerate(SOURCES):
         report("parts", position, len(SOURCES))
-        course = redraw(today, hazards, inflow, years=years, vary=(source,), draws=draws, seed=seed)[0]
+        course = redraw(
+            today,
+            hazards,
+            inflow,
+            years=years,
+            vary=(source,),
+            times_today=times_today,
+            draws=draws,
+            seed=seed,
+        )[0]
         found[source] = course.under_care[:, MONTHS_PER_YEAR::MONTHS_PER_YEAR].var(axis=0, ddof=1)
     report("parts", len(SOURCES), len(SOURCES))
     return found

@@ -6,6 +6,7 @@ import datetime
 import math
 from collections.abc import Sequence
 from dataclasses import dataclass, field
+from typing import TYPE_CHECKING
 
 import numpy as np
 
@@ -13,6 +14,9 @@ from vitalroll.errors import Caution, Refusal
 from vitalroll.numbers import DAYS_PER_YEAR, Estimate, two_sided_z
 from vitalroll.outcomes.person_time import poisson_limits
 from vitalroll.register.cohort import Cohort
+
+if TYPE_CHECKING:
+    from vitalroll.caseload.trend import Trend
 
 OVERDISPERSED_ABOVE = 1.5
 """Chi-squared per degree of freedom above which the years vary more than a Poisson count would."""
@@ -50,7 +54,7 @@ class Inflow:
         Variance over mean of the yearly counts (chi-squared over its degrees of freedom);
         NaN with fewer than two whole years, 1 when typed.
     model : str
-        ``poisson``, ``negative_binomial`` or ``typed``.
+        ``poisson``, ``negative_binomial``, ``trend`` or ``typed``.
     whole_years : int
         Whole calendar years behind the mean.
     history_years : float
@@ -62,6 +66,8 @@ class Inflow:
     cautions : tuple of Caution
     growth_percent : float
         By how much each year after the first brings more newcomers than the year before.
+    trend : Trend or None
+        Carried on instead when the model is ``trend``.
     """
 
     years: tuple[YearCount, ...]
@@ -73,6 +79,7 @@ class Inflow:
     days_at_arrival: np.ndarray = field(default_factory=lambda: np.zeros(1, dtype=np.int64))
     cautions: tuple[Caution, ...] = ()
     growth_percent: float = 0.0
+    trend: Trend | None = None
 
     def growth(self, years: int) -> np.ndarray:
         """Return what the yearly number is multiplied by in each year ahead, shape (years,)."""
@@ -80,11 +87,15 @@ class Inflow:
 
     def per_year_ahead(self, years: int) -> np.ndarray:
         """Return the newcomers expected in each year ahead, shape (years,)."""
+        if self.trend is not None:
+            return self.trend.rates(years)
         return self.per_year.value * self.growth(years)
 
     @property
     def spread(self) -> float:
         """Variance over mean that the model uses: the dispersion if overdispersed, otherwise 1."""
+        if self.model == "trend" and self.dispersion > OVERDISPERSED_ABOVE:
+            return self.dispersion
         return self.dispersion if self.model == "negative_binomial" else 1.0
 
 

@@ -103,6 +103,7 @@ def prospect(
     years: int,
     scenarios: Sequence[Scenario] = (),
     vary: Sequence[str] = SOURCES,
+    times_today: float = 1.0,
     draws: int = 1000,
     seed: int = 1,
     report: Report = no_report,
@@ -123,11 +124,15 @@ def prospect(
         years=years,
         scenarios=scenarios,
         vary=vary,
+        times_today=times_today,
         draws=draws,
         seed=seed,
         report=report,
     )
-    paths = [_path(today, hazards, inflow, years=years, scenario=scenario) for scenario in (None, *scenarios)]
+    paths = [
+        _path(today, hazards, inflow, years=years, scenario=scenario, times_today=times_today)
+        for scenario in (None, *scenarios)
+    ]
     outlooks = [Outlook(_course(path), course) for path, course in zip(paths, drawn, strict=True)]
     return Prospect(
         baseline=outlooks[0],
@@ -137,14 +142,26 @@ def prospect(
 
 
 def expected_course(
-    today: np.ndarray, hazards: Retention, inflow: Inflow, *, years: int, scenario: Scenario | None = None
+    today: np.ndarray,
+    hazards: Retention,
+    inflow: Inflow,
+    *,
+    years: int,
+    scenario: Scenario | None = None,
+    times_today: float = 1.0,
 ) -> Course:
     """Return what is expected, without a leading axis."""
-    return _course(_path(today, hazards, inflow, years=years, scenario=scenario))
+    return _course(_path(today, hazards, inflow, years=years, scenario=scenario, times_today=times_today))
 
 
 def _path(
-    today: np.ndarray, hazards: Retention, inflow: Inflow, *, years: int, scenario: Scenario | None
+    today: np.ndarray,
+    hazards: Retention,
+    inflow: Inflow,
+    *,
+    years: int,
+    scenario: Scenario | None,
+    times_today: float,
 ) -> Path:
     return project(
         today,
@@ -154,6 +171,7 @@ def _path(
         years=years,
         days_at_arrival=inflow.days_at_arrival,
         scenario=scenario,
+        times_today=times_today,
     )
 
 

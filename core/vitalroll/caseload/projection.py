@@ -36,11 +36,14 @@ class Ageing:
         Share of the step's time that falls in each stretch: a patient in the m-th month is on
         average m - 1/2 months from the start, so the step out of the last month of a stretch
         lies half in it and half in the next one.
+    tail : float
+        What the hazard beyond the last stretch, in the last slot, is multiplied by.
     """
 
     slots: int
     begins: np.ndarray
     mixing: np.ndarray
+    tail: float = 1.0
 
     @property
     def run_of_slot(self) -> np.ndarray:
@@ -49,7 +52,10 @@ class Ageing:
 
     def hazards(self, yearly: np.ndarray) -> np.ndarray:
         """Turn yearly hazards (..., stretches, ways) into monthly ones of each run (..., runs, ways)."""
-        return np.einsum("rs,...sw->...rw", self.mixing, yearly) / MONTHS_PER_YEAR
+        monthly = np.einsum("rs,...sw->...rw", self.mixing, yearly) / MONTHS_PER_YEAR
+        if self.tail != 1:
+            monthly[..., -1, :] *= self.tail
+        return monthly
 
     def place(self, months_since_start: np.ndarray) -> np.ndarray:
         """Count patients into the slots, given whole months since start."""
@@ -104,10 +110,11 @@ class Path:
     beyond_support: np.ndarray
 
 
-def ageing(edges: np.ndarray, *, cuts: tuple[int, ...] = ()) -> Ageing:
+def ageing(edges: np.ndarray, *, cuts: tuple[int, ...] = (), tail: float = 1.0) -> Ageing:
     """Lay out the slots for stretches with the given edges (whole years, from 0).
 
-    ``cuts`` are slots at which a run begins besides, without changing any hazard.
+    ``cuts`` are slots at which a run begins besides, without changing any hazard; ``tail``
+    multiplies the hazard of the last slot, which is then a run of its own.
     """
     stretch = np.eye(len(edges) - 1)
     ends = np.asarray(edges[1:] * MONTHS_PER_YEAR, dtype=np.int64)
@@ -117,12 +124,12 @@ def ageing(edges: np.ndarray, *, cuts: tuple[int, ...] = ()) -> Ageing:
         mixing += [(stretch[this] + stretch[this + 1]) / 2, stretch[this + 1]]
     # The hazard of the last stretch is held beyond its end: nothing to cross there.
     slots = int(ends[-1]) + 2
-    for cut in cuts:
+    for cut in (*cuts, slots - 1) if tail != 1 else cuts:
         if cut not in begins and cut < slots:
             position = int(np.searchsorted(begins, cut))
             begins.insert(position, cut)
             mixing.insert(position, mixing[position - 1])
-    return Ageing(slots=slots, begins=np.array(begins), mixing=np.array(mixing))
+    return Ageing(slots=slots, begins=np.array(begins), mixing=np.array(mixing), tail=tail)
 
 
 def months_here_today(cohort: Cohort) -> np.ndarray:
@@ -157,6 +164,7 @@ def project(
     years: int,
     days_at_arrival: np.ndarray | None = None,
     scenario: Scenario | None = None,
+    times_today: float = 1.0,
 ) -> Path:
     """Run the caseload forward and return what is expected.
 
@@ -171,6 +179,8 @@ def project(
     days_at_arrival : int array, optional
         Days since start of newcomers as they arrive, a sample; by default all start here.
     scenario : Scenario, optional
+    times_today : float
+        What the patients of ``today`` are multiplied by, when the register does not hold all.
 
     Returns
     -------
@@ -194,7 +204,7 @@ def project(
     if np.any(rate < 0):
         raise Refusal("out_of_range", field="newcomers.per_year", given=float(rate.min()), least=0.0)
     steps = MONTHS_PER_YEAR * years
-    axis = ageing(hazards.edges)
+    axis = ageing(hazards.edges, tail=hazards.tail)
     monthly = axis.hazards(hazards.hazards)
     kept = scenario.over(steps) if scenario else as_it_is(steps)
     lead = kept.lead_months
@@ -203,7 +213,7 @@ def project(
     arriving = (due[:steps] - np.concatenate((np.zeros(lead), early))[:steps]) * kept.newcomers
     early = early * kept.newcomers
     into = axis.arriving(np.zeros(1) if days_at_arrival is None else days_at_arrival)
-    here, found = axis.place(today).astype(float), np.zeros(axis.slots)
+    here, found = times_today * axis.place(today), np.zeros(axis.slots)
     under_care, first_year, beyond = ([of(here)] for of in (np.sum, _within_a_year, _last))
     leaving = np.empty((steps, len(WAYS_OF_LEAVING)))
     for month in range(steps):

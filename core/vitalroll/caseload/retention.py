@@ -34,6 +34,8 @@ class Retention:
         How many left in the stretch, by way of leaving.
     beyond_person_years, beyond_exits : float, int
         What was observed after the last edge: too little to be used.
+    tail : float
+        What the hazards of the last stretch are multiplied by beyond its end; 1 holds them.
     cautions : tuple of Caution
     """
 
@@ -43,6 +45,7 @@ class Retention:
     exits: np.ndarray
     beyond_person_years: float
     beyond_exits: int
+    tail: float = 1.0
     cautions: tuple[Caution, ...] = ()
 
     @property

@@ -47,10 +47,12 @@ def cost_per_patient_year(
     *,
     years: int,
     discount: float,
+    times_today: float = 1.0,
 ) -> float:
     """Return the expected money for each patient-year gained; NaN when none is gained."""
     before, after = (
-        expected_course(today, hazards, inflow, years=years, scenario=each) for each in (None, scenario)
+        expected_course(today, hazards, inflow, years=years, scenario=each, times_today=times_today)
+        for each in (None, scenario)
     )
 
     def money(course: Course) -> float:
@@ -70,6 +72,7 @@ def one_way(
     *,
     years: int,
     discount: float,
+    times_today: float = 1.0,
 ) -> tuple[float, list[Swing]]:
     """Change one assumption at a time and return the cost per patient-year as it is and each swing.
 
@@ -78,7 +81,7 @@ def one_way(
     of the programme by 20 % down and up; the discount to 0 and 5 %. The widest swing comes first;
     swings that are not defined come last.
     """
-    asked = {"years": years, "discount": discount}
+    asked = {"years": years, "discount": discount, "times_today": times_today}
     base = cost_per_patient_year(today, hazards, inflow, scenario, items, **asked)
 
     def swing(what: str, ends: tuple[float, float], at: Callable[[float], float]) -> Swing:
@@ -86,7 +89,7 @@ def one_way(
 
     swings = []
     rate = inflow.per_year
-    if rate.value > 0 and rate.lower < rate.upper:
+    if inflow.trend is None and rate.value > 0 and rate.lower < rate.upper:
         swings.append(
             swing(
                 "newcomers",
@@ -155,7 +158,7 @@ def one_way(
             "discount",
             (DISCOUNT_LOW, DISCOUNT_HIGH),
             lambda percent: cost_per_patient_year(
-                today, hazards, inflow, scenario, items, years=years, discount=percent
+                today, hazards, inflow, scenario, items, **(asked | {"discount": percent})
             ),
         )
     )

@@ -57,12 +57,15 @@ def drawn_arrivals(inflow: Inflow, draws: int, years: int, random: np.random.Gen
     is certain. Years of an overdispersed history differ by a gamma effect of their own.
     """
     mean, spread = inflow.per_year.value, inflow.spread
-    if inflow.model == "typed":
+    if inflow.trend is not None:
+        rate = inflow.trend.drawn_rates(draws, years, random)
+    elif inflow.model == "typed":
         rate = np.full((draws, 1), mean)
     else:
         rate = random.standard_gamma(mean * inflow.whole_years / spread, size=(draws, 1))
         rate *= spread / inflow.whole_years
-    rate = rate * inflow.growth(years)
+    if inflow.trend is None:
+        rate = rate * inflow.growth(years)
     if spread > 1:
         # Mean rate, variance rate (spread - 1): with the Poisson's own, spread times the rate.
         rate = random.standard_gamma(rate / (spread - 1)) * (spread - 1)

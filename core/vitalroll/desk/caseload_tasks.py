@@ -85,9 +85,9 @@ def project_caseload(memory: Memory, request: ProjectRequest, report: Any) -> di
         ``closing_date``; ``years`` [{year, ends}]; ``newcomers_per_year`` as in the history, model
         "typed" when typed; ``baseline`` {under_care, patient_years, newcomers, deaths, lost,
         leaving [{meaning, values}] for all seven ways}; ``seed``; ``draws``; ``tail``
-        {from_years, held_share [today and at the end of each year]}: beyond ``from_years`` since
-        start the last hazards are held, and ``held_share`` is the share of those expected under
-        care who are beyond; ``history_years``; ``cautions``.
+        {rule, from_years, held_share [today and at the end of each year]}: beyond ``from_years`` since
+        start the last hazards are held or changed by the rule, and ``held_share`` is the share of
+        those expected under care who are beyond; ``history_years``; ``cautions``.
 
     Refusals and cautions: those of ``coming_years.begin``; ``hazard_held`` (from_years, share) when
     more than a quarter of those under care at the end of the last year are beyond support.
@@ -98,6 +98,7 @@ def project_caseload(memory: Memory, request: ProjectRequest, report: Any) -> di
         start.hazards,
         start.inflow,
         years=request.years,
+        times_today=start.times_today,
         draws=request.draws,
         seed=request.seed,
         report=report,
@@ -109,7 +110,11 @@ def project_caseload(memory: Memory, request: ProjectRequest, report: Any) -> di
         "baseline": _course(found.baseline),
         "seed": request.seed,
         "draws": request.draws,
-        "tail": {"from_years": start.hazards.supported_years, "held_share": found.held_share},
+        "tail": {
+            "rule": request.tail,
+            "from_years": start.hazards.supported_years,
+            "held_share": found.held_share,
+        },
         "history_years": start.history_years,
         "cautions": [*start.cautions, *held_hazard(start.hazards, found.held_share)],
     }

@@ -5,7 +5,7 @@ from __future__ import annotations
 import calendar
 import datetime
 from collections.abc import Iterable
-from dataclasses import dataclass, field
+from dataclasses import dataclass, field, replace
 from typing import Annotated, Any, Literal
 
 import numpy as np
@@ -13,6 +13,7 @@ import numpy as np
 from vitalroll.caseload.inflow import FEWEST_WHOLE_YEARS, Inflow, inflow_from_history, inflow_typed
 from vitalroll.caseload.projection import months_here_today
 from vitalroll.caseload.retention import Retention, retention
+from vitalroll.caseload.trend import inflow_with_trend
 from vitalroll.desk.fields import Between
 from vitalroll.desk.memory import Memory
 from vitalroll.errors import Caution, Refusal
@@ -24,20 +25,39 @@ _LONG_UNSEEN_SHARE = 0.1
 _HELD_SHARE_WORTH_SAYING = 0.25
 
 
+TAILS = {"held": 1.0, "halved": 0.5, "doubled": 2.0, "nobody": 0.0}
+"""Rules beyond the supported time since start: what the last hazards are multiplied by there."""
+
+
 @dataclass(frozen=True)
 class Newcomers:
-    """Where the yearly number of newcomers comes from; ``per_year`` when it is typed."""
+    """Where the yearly number of newcomers comes from.
 
-    basis: Literal["history", "typed"] = "history"
+    ``history``: its mean; ``trend``: its trend carried on with ``damping``; ``typed``: ``per_year``;
+    ``incidence``: new cases per 100,000 a year times ``population``. The last two grow by
+    ``growth_percent`` a year (that of the population, when incidence stays).
+    """
+
+    basis: Literal["history", "trend", "typed", "incidence"] = "history"
     per_year: Annotated[float, Between(0, 1e6)] | None = None
+    incidence: Annotated[float, Between(0, 1e5)] | None = None
+    population: Annotated[float, Between(0, 1e10)] | None = None
+    growth_percent: Annotated[float, Between(-50, 50)] = 0.0
+    damping: Annotated[float, Between(0, 1)] = 0.8
 
 
 @dataclass(frozen=True)
 class Setting:
-    """What every projection is asked with."""
+    """What every projection is asked with.
+
+    ``completeness``: per cent of those under care today whom the register holds; ``tail``: the rule
+    beyond the supported time since start, a key of ``TAILS``.
+    """
 
     years: Annotated[int, Between(1, 30)] = 5
     newcomers: Newcomers = field(default_factory=Newcomers)
+    completeness: Annotated[float, Between(1, 100)] = 100.0
+    tail: Literal["held", "halved", "doubled", "nobody"] = "held"
     draws: Annotated[int, Between(100, 20_000)] = 1000
     seed: Annotated[int, Between(0, 2**53)] = 1
 
@@ -56,22 +76,24 @@ class Beginning:
     inflow: Inflow
     history_years: float
     cautions: tuple[Caution, ...]
+    times_today: float
 
 
 def begin(memory: Memory, setting: Setting) -> Beginning:
     """Read the register in memory for a projection.
 
     Refusals: ``no_register``, ``no_patients``, ``no_person_time``, ``start_after_closing``,
-    ``nobody_under_care``, ``history_too_short`` (newcomers.basis), ``missing_field``
-    (newcomers.per_year).
+    ``nobody_under_care``, ``history_too_short`` and ``trend_history_too_short`` (newcomers.basis),
+    ``missing_field`` (newcomers.per_year, incidence or population).
 
     Cautions: those of ``inflow_from_history`` and ``retention``; ``under_care_long_unseen`` (count,
-    share, days); ``horizon_beyond_history`` (years, history_years).
+    share, days); ``horizon_beyond_history`` (years, history_years); ``register_incomplete``
+    (completeness, count: those added).
     """
     cohort = memory.cohort()
     recorded = inflow_from_history(cohort)
-    inflow = _newcomers(setting.newcomers, recorded)
-    hazards = retention(risk_table(cohort))
+    inflow = _newcomers(setting.newcomers, recorded, cohort.closing)
+    hazards = replace(retention(risk_table(cohort)), tail=TAILS[setting.tail])
     today = months_here_today(cohort)
     if len(today) == 0:
         raise Refusal("nobody_under_care")
@@ -79,7 +101,13 @@ def begin(memory: Memory, setting: Setting) -> Beginning:
     if setting.years > recorded.history_years:
         parameters = {"years": setting.years, "history_years": recorded.history_years}
         cautions.append(Caution("horizon_beyond_history", parameters))
-    return Beginning(cohort.closing, today, hazards, inflow, recorded.history_years, tuple(cautions))
+    times_today = 100 / setting.completeness
+    if times_today > 1:
+        parameters = {"completeness": setting.completeness, "count": len(today) * (times_today - 1)}
+        cautions.append(Caution("register_incomplete", parameters))
+    return Beginning(
+        cohort.closing, today, hazards, inflow, recorded.history_years, tuple(cautions), times_today
+    )
 
 
 def held_hazard(hazards: Retention, held_share: np.ndarray) -> Iterable[Caution]:
@@ -125,11 +153,15 @@ def months_after(closing: int, months: int) -> str:
     ).isoformat()
 
 
-def _newcomers(asked: Newcomers, recorded: Inflow) -> Inflow:
-    if asked.basis == "typed":
-        if asked.per_year is None:
-            raise Refusal("missing_field", field="newcomers.per_year")
-        return inflow_typed(asked.per_year, days_at_arrival=recorded.days_at_arrival)
+def _newcomers(asked: Newcomers, recorded: Inflow, closing: int) -> Inflow:
+    if asked.basis in ("typed", "incidence"):
+        needed = ("per_year",) if asked.basis == "typed" else ("incidence", "population")
+        for name in needed:
+            if getattr(asked, name) is None:
+                raise Refusal("missing_field", field=f"newcomers.{name}")
+        rate = asked.per_year if asked.basis == "typed" else asked.incidence * asked.population / 1e5
+        typed = inflow_typed(rate, days_at_arrival=recorded.days_at_arrival)
+        return replace(typed, growth_percent=asked.growth_percent)
     if recorded.whole_years < FEWEST_WHOLE_YEARS:
         raise Refusal(
             "history_too_short",
@@ -137,4 +169,6 @@ def _newcomers(asked: Newcomers, recorded: Inflow) -> Inflow:
             whole_years=recorded.whole_years,
             needed=FEWEST_WHOLE_YEARS,
         )
+    if asked.basis == "trend":
+        return inflow_with_trend(recorded, closing, damping=asked.damping)
     return recorded

@@ -118,6 +118,7 @@ def levers(memory: Memory, request: LeversRequest, report: Any) -> dict[str, Any
         start.hazards,
         start.inflow,
         years=request.years,
+        times_today=start.times_today,
         scenarios=scenarios,
         draws=request.draws,
         seed=request.seed,
@@ -137,6 +138,7 @@ def levers(memory: Memory, request: LeversRequest, report: Any) -> dict[str, Any
         scenarios[looked_at],
         items,
         years=request.years,
+        times_today=start.times_today,
         discount=request.discount,
     )
     cost = found.baseline.measure(lambda course: cost_by_year(items, course))
@@ -211,7 +213,12 @@ def find_break_even(memory: Memory, request: BreakEvenRequest, report: Any) -> d
         return float(
             measured(
                 expected_course(
-                    start.today, start.hazards, start.inflow, years=request.years, scenario=scenario
+                    start.today,
+                    start.hazards,
+                    start.inflow,
+                    years=request.years,
+                    scenario=scenario,
+                    times_today=start.times_today,
                 )
             )
         )
@@ -229,6 +236,7 @@ def find_break_even(memory: Memory, request: BreakEvenRequest, report: Any) -> d
             start.hazards,
             start.inflow,
             years=request.years,
+            times_today=start.times_today,
             scenarios=[Scenario("", (tried,))],
             draws=request.draws,
             seed=request.seed,

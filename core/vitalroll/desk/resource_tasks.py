@@ -93,6 +93,7 @@ def resources(memory: Memory, request: ResourcesRequest, report: Any) -> dict[st
         start.hazards,
         start.inflow,
         years=request.years,
+        times_today=start.times_today,
         draws=request.draws,
         seed=request.seed,
         report=report,

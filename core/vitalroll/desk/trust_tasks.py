@@ -19,9 +19,10 @@ _MOST_YEARS_BACK = 10
 
 @dataclass(frozen=True)
 class BackTestRequest:
-    """Fields of ``caseload.back_test``."""
+    """Fields of ``caseload.back_test``; with ``damping`` the trend of the newcomers is carried on."""
 
     back_years: Annotated[int, Between(1, _MOST_YEARS_BACK)] = 3
+    damping: Annotated[float, Between(0, 1)] | None = None
     draws: Annotated[int, Between(100, 20_000)] = 1000
     seed: Annotated[int, Between(0, 2**53)] = 1
 
@@ -39,7 +40,8 @@ def look_back(memory: Memory, request: BackTestRequest, report: Any) -> dict[str
     Returns
     -------
     dict
-        ``origin``, ``closing_date``: ISO days; ``back_years``; ``path`` [{month, ends, band, seen}]
+        ``origin``, ``closing_date``: ISO days; ``back_years``; ``trend``: whether it was
+        carried on; ``path`` [{month, ends, band, seen}]
         from the origin on; ``newcomers``, ``leaving`` {band, seen} in all; ``months_held`` {p50,
         p80, p95}: share of the months whose band held what was seen; ``tests`` [{years, origin, band,
         seen, held {p50, p80, p95}}]: the number at the closing as it would have been projected one
@@ -53,9 +55,16 @@ def look_back(memory: Memory, request: BackTestRequest, report: Any) -> dict[str
     bands held says little; the tests share their data in any case.
     """
     cohort = memory.cohort()
-    chosen = back_test(cohort, request.back_years, draws=request.draws, seed=request.seed)
+    chosen = back_test(
+        cohort, request.back_years, damping=request.damping, draws=request.draws, seed=request.seed
+    )
     tests = back_tests(
-        cohort, most_years=_MOST_YEARS_BACK, draws=request.draws, seed=request.seed, report=report
+        cohort,
+        most_years=_MOST_YEARS_BACK,
+        damping=request.damping,
+        draws=request.draws,
+        seed=request.seed,
+        report=report,
     )
     cautions = [Caution("back_test_hindsight")]
     if len(tests) < 5:
@@ -64,6 +73,7 @@ def look_back(memory: Memory, request: BackTestRequest, report: Any) -> dict[str
         "origin": _day(chosen.origin),
         "closing_date": _day(cohort.closing),
         "back_years": chosen.years,
+        "trend": request.damping is not None,
         "path": [
             {"month": month, "ends": months_after(chosen.origin, month), "band": band, "seen": seen}
             for month, (band, seen) in enumerate(zip(chosen.under_care, chosen.seen.tolist(), strict=True))
@@ -103,6 +113,7 @@ def parts(memory: Memory, request: PartsRequest, report: Any) -> dict[str, Any]:
         start.hazards,
         start.inflow,
         years=request.years,
+        times_today=start.times_today,
         draws=request.draws,
         seed=request.seed,
         report=report,

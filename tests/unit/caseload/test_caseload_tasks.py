@@ -168,3 +168,38 @@ def test_a_closing_date_on_29_february_goes_on_to_the_28th():
     told = _answer(_desk(cohort(rows, day(2020, 2, 29))), "caseload.project", years=4, draws=100)
     ends = [year["ends"] for year in told["years"]]
     assert ends == ["2021-02-28", "2022-02-28", "2023-02-28", "2024-02-29"]
+
+
+def test_every_way_to_newcomers(desk):
+    def newcomers(**asked):
+        told = _answer(desk, "caseload.project", years=3, newcomers=asked, draws=100)
+        return [band["value"] for band in told["baseline"]["newcomers"]], told
+
+    typed, _ = newcomers(basis="typed", per_year=50, growth_percent=10)
+    assert typed == pytest.approx([50, 55, 60.5])
+    by_incidence, _ = newcomers(basis="incidence", incidence=25, population=200_000, growth_percent=10)
+    assert by_incidence == pytest.approx(typed)
+    trend, told = newcomers(basis="trend", damping=0.5)
+    assert told["newcomers_per_year"]["model"] == "trend"
+    assert trend[0] == pytest.approx(told["newcomers_per_year"]["mean"])
+    assert "trend_damped" in {caution["code"] for caution in told["cautions"]}
+    assert _refusal(desk, "caseload.project", newcomers={"basis": "incidence", "incidence": 3}) == (
+        "missing_field",
+        "newcomers.population",
+    )
+
+
+def test_an_incomplete_register_and_a_rule_for_the_tail(desk):
+    whole = _answer(desk, "caseload.project", draws=100)
+    part = _answer(desk, "caseload.project", draws=100, completeness=50)
+    today = whole["baseline"]["under_care"][0]["value"]
+    assert part["baseline"]["under_care"][0]["value"] == pytest.approx(2 * today)
+    said = {caution["code"]: caution["parameters"] for caution in part["cautions"]}
+    assert said["register_incomplete"] == {"completeness": 50, "count": pytest.approx(today)}
+    ends = {
+        rule: _answer(desk, "caseload.project", draws=100, tail=rule)["baseline"]["under_care"][-1]["value"]
+        for rule in ("nobody", "halved", "held", "doubled")
+    }
+    assert list(ends) == sorted(ends, key=ends.get, reverse=True)
+    assert _refusal(desk, "caseload.project", completeness=0) == ("out_of_range", "completeness")
+    assert _refusal(desk, "caseload.project", tail="guess") == ("not_one_of", "tail")

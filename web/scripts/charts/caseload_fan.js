@@ -10,10 +10,11 @@ const MOST_BANDS = 1;
 /** @typedef {{ value: number, p50: [number, number], p80: [number, number], p95: [number, number] }} Band */
 
 /**
- * @param {{ courses: Array<{label: string, bands: Band[]}> }} data each course from today on, a year apart
+ * @param {{ courses: Array<{label: string, bands: Band[]}>, held?: number[] }} data each course from today on, a year apart;
+ *   `held` are those of the first course who have been here longer than was ever seen
  * @param {{ width: number, words: ReturnType<typeof import('../words.js').wordsIn> }} options
  */
-export function caseloadFan({ courses }, { width, words }) {
+export function caseloadFan({ courses, held = [] }, { width, words }) {
   const height = Math.min(400, Math.max(260, width * 0.52));
   const points = courses.map(({ bands }) => bands.map((band, year) => ({
     year, value: band.value, l80: band.p80[0], u80: band.p80[1], l95: band.p95[0], u95: band.p95[1], l50: band.p50[0], u50: band.p50[1],
@@ -38,6 +39,10 @@ export function caseloadFan({ courses }, { width, words }) {
       Plot.axisY({ tickSize: 0, ticks: 6, tickFormat: (n) => words.count(n) }),
       Plot.axisX({ ticks: points[0].map(({ year }) => year).filter((year) => year % Math.ceil(years / 10) === 0), tickFormat: (year) => words.count(year), tickSize: 4 }),
       Plot.text([words.say('axis-years-from-closing')], { frameAnchor: 'bottom', dy: 36, fill: SOFT_INK }),
+      Plot.areaY(held.map((count, year) => ({ count, year })), { x: 'year', y: 'count', fill: SOFT_INK, fillOpacity: 0.28 }),
+      held.length ? Plot.text([{ year: years, count: held.at(-1) }], {
+        x: 'year', y: 'count', text: () => words.say('beyond-seen'), textAnchor: 'end', dx: -4, dy: -8, fill: SOFT_INK, stroke: 'white', strokeWidth: 5,
+      }) : null,
       points.flatMap((line, position) => courseMarks(line, position, position < MOST_BANDS)),
       courses.length > 1 ? ends.map((end) => Plot.text([end.label], {
         frameAnchor: 'top-right', dx: 8, dy: end.y - 16, textAnchor: 'start', lineAnchor: 'middle', lineWidth: (LABEL_ROOM - 10) / TEXT_SIZE,

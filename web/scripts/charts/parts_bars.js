@@ -40,7 +40,7 @@ export function partsBars(years, parts, { width, words }) {
       Plot.axisX({ ticks: years.map((_, i) => i + 1).filter((year) => year % Math.ceil(years.length / 10) === 0), tickFormat: (year) => words.count(year), tickSize: 4 }),
       Plot.text([words.say('axis-year-ahead')], { frameAnchor: 'bottom', dy: 36, fill: SOFT_INK }),
       Plot.text(labels, {
-        x: years.length + 0.5, y: 'middle', text: 'label', dx: 8, textAnchor: 'start', lineAnchor: 'middle', lineWidth: (room - 12) / TEXT_SIZE, fill: INK, fontWeight: 600,
+        x: years.length + 0.5, y: 'middle', text: 'label', dx: 8, textAnchor: 'start', lineAnchor: 'middle', lineWidth: (room - 12) / (TEXT_SIZE * 1.25), fill: INK, fontWeight: 600,
       }),
       Plot.ruleY([0], { stroke: INK }),
     ],

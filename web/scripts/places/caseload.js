@@ -7,6 +7,7 @@ import { historyBlock } from './caseload/history.js';
 import { leversBlock } from './caseload/levers.js';
 import { projectionBlock } from './caseload/projection.js';
 import { resourcesBlock } from './caseload/resources.js';
+import { scenarioFile } from './caseload/scenario_file.js';
 import { backTestBlock, partsBlock } from './caseload/trust.js';
 
 /** @param {import('../app.js').App} app */
@@ -16,7 +17,7 @@ export function caseloadPlace(app) {
     if (!state.cohort) return [heading, noRegister(app)];
     return [
       heading, h('p', {}, app.words.say('caseload-lead')),
-      historyBlock(app), projectionBlock(app), backTestBlock(app), partsBlock(app), resourcesBlock(app), leversBlock(app), breakEvenBlock(app),
+      historyBlock(app), projectionBlock(app), backTestBlock(app), partsBlock(app), resourcesBlock(app), leversBlock(app), breakEvenBlock(app), scenarioFile(app),
     ];
   });
 }

@@ -9,8 +9,8 @@ const AMOUNTS = ['at_start', 'first_year', 'later', 'per_event', 'unit_cost'];
 const LEAST_GROWTH = -50;
 const MOST = 100;
 
-const blankItem = () => ({ name: '', unit: '', at_start: null, first_year: null, later: null, per_event: null, event: 'death', unit_cost: null, cost_growth: null });
-const blankLine = () => ({ name: '', what: 'patients', limit: null });
+export const blankItem = () => ({ name: '', unit: '', at_start: null, first_year: null, later: null, per_event: null, event: 'death', unit_cost: null, cost_growth: null });
+export const blankLine = () => ({ name: '', what: 'patients', limit: null });
 
 /** Invented. @param {(key: string) => string} say */
 function example(say) {

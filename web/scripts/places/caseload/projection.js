@@ -8,7 +8,7 @@ import { live } from '../../parts/live.js';
 import { cautionList } from '../../parts/said.js';
 import { table } from '../../parts/table.js';
 import { bandColumns } from './bands.js';
-import { FARTHEST, projectionRequest, yearsAreFine } from './request.js';
+import { BASES, FARTHEST, TAILS, projectionRequest, settingFaults } from './request.js';
 
 /** @param {import('../../app.js').App} app */
 export function projectionBlock(app) {
@@ -23,24 +23,33 @@ export function projectionBlock(app) {
 }
 
 function choices(app) {
-  return live(app, (state) => [state.caseload.years, state.caseload.basis, state.caseload.perYear], ({ caseload }) => {
+  const chosen = ({ caseload }) => ['years', 'basis', 'perYear', 'incidence', 'population', 'growth', 'damping', 'completeness', 'tail'].map((name) => caseload[name]);
+  return live(app, chosen, ({ caseload }) => {
     const { say } = app.words;
-    return [choiceRow(
-      numberField({
-        id: 'caseload-years', label: say('years-ahead'), value: caseload.years, least: 1, greatest: FARTHEST, step: 1,
-        fault: yearsAreFine(caseload.years) ? null : say('fault-whole-between', { least: 1, greatest: FARTHEST }),
-        onchange: (years) => app.store.amend('caseload', { years }),
-      }),
-      selectOne({
-        id: 'caseload-basis', label: say('newcomers-basis'), value: caseload.basis,
-        options: ['history', 'typed'].map((basis) => ({ value: basis, label: say(`newcomers-basis-${basis}`) })),
-        onchange: (basis) => app.store.amend('caseload', { basis }),
-      }),
-      caseload.basis === 'typed' ? numberField({
-        id: 'caseload-per-year', label: say('newcomers-per-year'), value: caseload.perYear, least: 0,
-        fault: caseload.perYear < 0 ? say('fault-negative') : null,
-        onchange: (perYear) => app.store.amend('caseload', { perYear }),
-      }) : null)];
+    const faults = settingFaults(caseload);
+    const put = (patch) => app.store.amend('caseload', patch);
+    const field = (name, id, options = {}) => numberField({
+      id: `caseload-${id}`, label: say(`caseload-${id}`), value: caseload[name], least: 0,
+      fault: faults[name] ? say(faults[name][0], faults[name][1]) : null, onchange: (value) => put({ [name]: value }), ...options,
+    });
+    const choose = (name, options) => selectOne({
+      id: `caseload-${name}`, label: say(`caseload-${name}`), value: caseload[name],
+      options: options.map((value) => ({ value, label: say(`caseload-${name}-${value}`) })), onchange: (value) => put({ [name]: value }),
+    });
+    const growth = field('growth', 'growth', { least: -50, unit: say('percent-sign') });
+    /** @type {Record<string, Array<HTMLElement>>} */
+    const more = {
+      history: [],
+      trend: [field('damping', 'damping', { greatest: 1, hint: say('caseload-damping-hint') })],
+      typed: [field('perYear', 'per-year'), growth],
+      incidence: [field('incidence', 'incidence'), field('population', 'population'), growth],
+    };
+    return [
+      choiceRow(field('years', 'years', { least: 1, greatest: FARTHEST, step: 1 }), choose('basis', BASES), ...more[caseload.basis]),
+      choiceRow(
+        field('completeness', 'completeness', { least: 1, greatest: 100, unit: say('percent-sign'), hint: say('caseload-completeness-hint') }),
+        choose('tail', TAILS)),
+    ];
   });
 }
 
@@ -49,9 +58,11 @@ function drawProjection(app, answer) {
   const { say, count, day } = words;
   const last = answer.baseline.under_care.at(-1);
   const courses = [{ label: say('baseline'), bands: answer.baseline.under_care }];
+  const held = answer.tail.held_share.map((share, year) => share * answer.baseline.under_care[year].value);
   const rows = answer.baseline.under_care.map((band, year) => ({
     ends: year === 0 ? answer.closing_date : answer.years[year - 1].ends, band,
     newcomers: year === 0 ? null : answer.baseline.newcomers[year - 1],
+    held: held[year],
     gone: year === 0 ? null : leftInYear(answer.baseline, year - 1),
   }));
   return [
@@ -61,19 +72,21 @@ function drawProjection(app, answer) {
     })),
     figure(app, {
       name: 'caseload', title: say('projection-figure'), described: say('projection-figure-described', { years: answer.years.length }),
-      draw: (width) => caseloadFan({ courses }, { width, words }),
+      draw: (width) => caseloadFan({ courses, held }, { width, words }),
     }),
     table(app, {
       name: 'caseload', caption: say('projection-caption'), rows, note: say('projection-note', { draws: answer.draws, seed: answer.seed }),
       columns: [
         { heading: say('on-day'), show: (row) => day(row.ends), text: true },
         ...bandColumns(app, say('under-care'), (row) => row.band),
+        { heading: say('beyond-seen'), show: (row) => count(row.held), full: (row) => row.held },
         { heading: say('newcomers'), show: (row) => count(row.newcomers?.value), full: (row) => row.newcomers?.value },
         { heading: say('left-in-all'), show: (row) => count(row.gone), full: (row) => row.gone },
       ],
     }),
     cautionList(app, answer.cautions),
-    h('p', { class: 'method' }, say('projection-method', { years: answer.tail.from_years })),
+    h('p', {}, say(`tail-${answer.tail.rule}`, { years: answer.tail.from_years })),
+    h('p', { class: 'method' }, say('projection-method')),
   ];
 }
 

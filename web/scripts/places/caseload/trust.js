@@ -9,7 +9,7 @@ import { live } from '../../parts/live.js';
 import { cautionList } from '../../parts/said.js';
 import { table } from '../../parts/table.js';
 import { bandColumns } from './bands.js';
-import { setting } from './request.js';
+import { setting, settingFaults } from './request.js';
 
 const FARTHEST_BACK = 10;
 const LEVELS = ['p50', 'p80', 'p95'];
@@ -29,9 +29,14 @@ export function backTestBlock(app) {
       }))];
     }),
     ask: ({ cohort, caseload }) => (cohort && backYearsAreFine(caseload.backYears)
-      ? { task: 'caseload.back_test', request: { back_years: caseload.backYears } } : null),
+      ? { task: 'caseload.back_test', request: { back_years: caseload.backYears, damping: caseload.basis === 'trend' ? dampingOf(caseload) : null } } : null),
     draw: (answer) => drawBackTest(app, answer),
   });
+}
+
+/** The back-test follows the basis chosen above where that is the trend. */
+function dampingOf(caseload) {
+  return settingFaults(caseload).damping ? null : caseload.damping;
 }
 
 function backYearsAreFine(years) {
@@ -75,7 +80,7 @@ function drawBackTest(app, answer) {
       ],
     }),
     cautionList(app, answer.cautions),
-    h('p', { class: 'method' }, say('back-test-method')),
+    h('p', { class: 'method' }, say(answer.trend ? 'back-test-method-trend' : 'back-test-method')),
   ];
 }
 
