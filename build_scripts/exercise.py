@@ -39,6 +39,8 @@ def everything() -> None:
     reading = proposed_reading(ask, source, CLOSING)
     cohort = ask("register.build", **reading)
     ask("register.silent_losses", **reading)
+    ask("register.trace_list", **reading, columns=[source["columns"][0]["id"]])
+    ask("register.profile", **reading)
     saved = ask("register.settings", **reading)["settings"]
     ask("register.apply_settings", text=json.dumps(saved))
     ask("register.spellings", columns=[column["id"] for column in source["columns"]])

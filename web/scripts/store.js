@@ -43,6 +43,8 @@ export function beginnings(language) {
       balance: { prevalent: null, new_per_year: null, leaving: [], years: 5, population: null },
       planning: { question: 'survival_size', typed: {} },
     },
+    profile: { site: null },
+    trace: { months: 6, withLost: true, columns: [] },
     report: { title: '', hospital: '', author: '', date: '', leftOut: [] },
     /** Changes whenever a piece of the report does. */
     reportSerial: 0,
@@ -57,7 +59,7 @@ export function emptyReading() {
 }
 
 /** Parts of the state that are choices: these can be undone. */
-const CHOICES = ['reading', 'question', 'outcomes', 'compare', 'caseload', 'counts', 'report'];
+const CHOICES = ['reading', 'question', 'outcomes', 'compare', 'caseload', 'counts', 'profile', 'trace', 'report'];
 const STEPS_KEPT = 100;
 
 /** @param {State} state */

@@ -452,6 +452,67 @@ caution-dates_after_closing = { $n } dates lie after { $closing } and would not 
 refusal-settings_not_read = This is not a file of choices kept by this page.
 refusal-settings_too_new = These choices were kept by a later version of this page (form { $version }; this page knows { $known }).
 
+profile-title = How good the register is
+profile-site = Completeness also by
+profile-no-site = no groups
+completeness-sentence = { $index } of the time that could have been observed was observed; { $known } where recovery, moving away and stopping by choice count as complete.
+completeness-by-year = Completeness of follow-up, by year of start
+completeness-by-site = Completeness of follow-up, by group
+completeness-year = Year of start
+completeness-observed = Person-years observed
+completeness-possible = Person-years possible
+completeness-index = Person-time index
+completeness-known = Known endings complete
+profile-newcomers = Newcomers by month
+profile-newcomers-described = Bars for { $months } months, one for each, as high as the number of patients who started in it.
+profile-month = Month
+profile-missing = What is missing, by column and by how follow-up ended
+profile-missing-note = Blank cells and words such as “unknown” or “n/a”. Where the share differs between endings, comparing only complete rows can mislead. The last column: recovered, moved away or stopped.
+profile-missing-cells = Missing
+profile-ending-under_care = Under care
+profile-ending-died = Died
+profile-ending-lost = Lost
+profile-ending-known = Known ending
+profile-days-start = Of the starts, { $share } are on day { $day } of a month, where { $expected } would be expected.
+profile-days-start-title = Starts by day of the month
+profile-days-end = Of the ends before the closing date, { $share } are on day { $day } of a month, where { $expected } would be expected.
+profile-days-end-title = Ends by day of the month
+profile-days-described = Bars for the 31 days of a month with a short line at the height expected by chance; day { $day } stands out most.
+profile-day = Day
+profile-expected = Expected
+profile-ages = Whipple’s index of the written ages is { $index }, from { $n } ages between 23 and 62: 100 means no preference for ages ending in 0 and 5, and 500 that there are no others.
+profile-ages-from-birth = Whipple’s index of the ages worked out from birth dates is { $index }, from { $n } ages between 23 and 62: 100 means no preference for ages ending in 0 and 5. Rounded birth years show in it only in part.
+profile-ages-title = Ages from 23 to 62 by their last digit
+profile-ages-described = Ten bars, one for each last digit, with a short line at the height expected without preference.
+profile-digit = Last digit
+profile-method = Person-time index: time observed over time that could have been observed until the closing date or death (Clark, Altman & De Stavola 2002). Whipple’s index: 500 times the share of ages ending in 0 or 5 among those from 23 to 62, with limits by Wilson (1927); by the usual reading (United Nations 1955) below 105 is very accurate and 175 or more very rough. Expected days are those of the calendar over 400 years.
+caution-few_ages = Only { $n } ages between 23 and 62: with fewer than { $least }, the index is hardly more than chance.
+caution-many_sites = { $sites } groups are too many for this table (at most { $most }).
+refusal-nobody_to_profile = Every row was set aside, so there is nothing to describe.
+
+trace-title = Whom to look for
+trace-months = Months since the last contact, more than
+trace-with-lost = also those written down as lost
+trace-columns = Columns to put on the list
+trace-columns-legend = Columns on the list
+trace-columns-hint = Nothing but these, the line in the file and the last contact is shown or saved.
+trace-sentence = { $n ->
+    [one] One patient was
+   *[other] { $n } patients were
+  } not seen for more than { $months } months before the closing date.
+trace-unjudged = { $n ->
+    [one] One more is
+   *[other] { $n } more are
+  } under care with no last contact at all, so nobody can say how long ago it was.
+trace-method = Days from the last contact to the closing date, the longest first. Deaths, recoveries, transfers and those who stopped by choice are not listed. The list itself is kept out of the report.
+trace-days = Days unseen
+trace-last = Last contact
+trace-caption = The longest unseen first
+trace-first = The first { $shown } of { $n } are shown; the file holds all.
+trace-save = Save the list of { $n } as CSV on this computer
+caution-trace_list_identifies = This list identifies people. Keep it where the register itself is kept, hand it only to those who do the tracing, and delete it afterwards.
+caution-trace_list_shortened = { $listed } of { $n } are listed.
+
 register-other-title = Another register
 forget = Forget everything
 forget-meaning = Drops the register and every choice made about it from memory.

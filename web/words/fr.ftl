@@ -452,6 +452,67 @@ caution-dates_after_closing = { $n } dates tombent après le { $closing } et ne 
 refusal-settings_not_read = Ce n’est pas un fichier de choix gardé par cette page.
 refusal-settings_too_new = Ces choix ont été gardés par une version plus récente de cette page (forme { $version } ; cette page connaît { $known }).
 
+profile-title = La qualité du registre
+profile-site = Complétude aussi selon
+profile-no-site = sans groupes
+completeness-sentence = { $index } du temps observable a été observé ; { $known } si guérison, transfert et arrêt volontaire comptent comme complets.
+completeness-by-year = Complétude du suivi, par année de début
+completeness-by-site = Complétude du suivi, par groupe
+completeness-year = Année de début
+completeness-observed = Personnes-années observées
+completeness-possible = Personnes-années possibles
+completeness-index = Indice de temps-personne
+completeness-known = Issues connues complètes
+profile-newcomers = Nouveaux patients par mois
+profile-newcomers-described = Des barres pour { $months } mois, une par mois, aussi hautes que le nombre de patients qui y ont commencé.
+profile-month = Mois
+profile-missing = Ce qui manque, par colonne et selon la fin du suivi
+profile-missing-note = Cellules vides et mots comme « inconnu » ou « n/a ». Là où la part diffère selon l’issue, ne comparer que les lignes complètes peut tromper. La dernière colonne : guéris, transférés ou arrêtés.
+profile-missing-cells = Manquent
+profile-ending-under_care = En suivi
+profile-ending-died = Décédés
+profile-ending-lost = Perdus de vue
+profile-ending-known = Issue connue
+profile-days-start = Parmi les débuts, { $share } tombent le { $day } d’un mois, alors qu’on attendrait { $expected }.
+profile-days-start-title = Débuts selon le jour du mois
+profile-days-end = Parmi les fins avant la clôture, { $share } tombent le { $day } d’un mois, alors qu’on attendrait { $expected }.
+profile-days-end-title = Fins selon le jour du mois
+profile-days-described = Des barres pour les 31 jours du mois, avec un trait à la hauteur attendue par hasard ; le { $day } ressort le plus.
+profile-day = Jour
+profile-expected = Attendu
+profile-ages = L’indice de Whipple des âges écrits est de { $index }, d’après { $n } âges de 23 à 62 ans : 100 signifie aucune préférence pour les âges terminés par 0 et 5, et 500 qu’il n’y en a pas d’autres.
+profile-ages-from-birth = L’indice de Whipple des âges calculés d’après les dates de naissance est de { $index }, d’après { $n } âges de 23 à 62 ans : 100 signifie aucune préférence pour les âges terminés par 0 et 5. Des années de naissance arrondies ne s’y voient qu’en partie.
+profile-ages-title = Âges de 23 à 62 ans selon leur dernier chiffre
+profile-ages-described = Dix barres, une par dernier chiffre, avec un trait à la hauteur attendue sans préférence.
+profile-digit = Dernier chiffre
+profile-method = Indice de temps-personne : temps observé sur temps observable jusqu’à la clôture ou au décès (Clark, Altman & De Stavola 2002). Indice de Whipple : 500 fois la part des âges terminés par 0 ou 5 parmi ceux de 23 à 62 ans, avec des bornes selon Wilson (1927) ; selon la lecture usuelle (Nations Unies 1955), moins de 105 est très exact, 175 ou plus très grossier. Les jours attendus sont ceux du calendrier sur 400 ans.
+caution-few_ages = Seulement { $n } âges de 23 à 62 ans : en dessous de { $least }, l’indice n’est guère plus que du hasard.
+caution-many_sites = { $sites } groupes sont trop pour ce tableau (au plus { $most }).
+refusal-nobody_to_profile = Toutes les lignes ont été mises de côté ; il n’y a rien à décrire.
+
+trace-title = Qui rechercher
+trace-months = Mois depuis le dernier contact, plus de
+trace-with-lost = aussi ceux notés perdus de vue
+trace-columns = Colonnes à mettre sur la liste
+trace-columns-legend = Colonnes de la liste
+trace-columns-hint = Rien d’autre que celles-ci, la ligne du fichier et le dernier contact n’est montré ni enregistré.
+trace-sentence = { $n ->
+    [one] Un patient n’a pas été vu
+   *[other] { $n } patients n’ont pas été vus
+  } pendant plus de { $months } mois avant la date de clôture.
+trace-unjudged = { $n ->
+    [one] Un autre est
+   *[other] { $n } autres sont
+  } en suivi sans aucun dernier contact ; nul ne peut dire depuis quand.
+trace-method = Jours du dernier contact à la date de clôture, les plus longs d’abord. Décès, guérisons, transferts et arrêts volontaires n’y figurent pas. La liste elle-même reste hors du rapport.
+trace-days = Jours sans être vu
+trace-last = Dernier contact
+trace-caption = Les plus longtemps non vus d’abord
+trace-first = Les { $shown } premiers sur { $n } sont montrés ; le fichier les contient tous.
+trace-save = Enregistrer la liste de { $n } en CSV sur cet ordinateur
+caution-trace_list_identifies = Cette liste désigne des personnes. Gardez-la là où le registre est gardé, ne la remettez qu’à ceux qui recherchent, et détruisez-la ensuite.
+caution-trace_list_shortened = { $listed } sur { $n } sont donnés.
+
 register-other-title = Un autre registre
 forget = Tout oublier
 forget-meaning = Retire de la mémoire le registre et tous les choix faits à son sujet.

@@ -9,8 +9,9 @@ from typing import Any
 from vitalroll.desk.memory import Memory
 from vitalroll.desk.register_tasks import BuildRequest, choices_of, opened_register
 from vitalroll.errors import Caution
-from vitalroll.register.build import follow
+from vitalroll.register.build import Followed, follow
 from vitalroll.register.dates import Fault
+from vitalroll.register.findings.finding import Seen
 from vitalroll.register.findings.mending import find, look, mend
 from vitalroll.register.plan import Plan
 from vitalroll.register.silent_losses import silent_losses
@@ -41,11 +42,7 @@ def count_silent_losses(memory: Memory, request: BuildRequest, report: Report) -
 
     Other accepted repairs are made first. Refusals: those of ``register.build``.
     """
-    choices = choices_of(request)
-    others = {code: lines for code, lines in choices.repairs.items() if code != RULE}
-    plan = Plan(opened_register(memory), replace(choices, repairs=others))
-    seen = look(plan)
-    followed = follow(plan, mend(seen, find(seen, others) if others else [], others))
+    _, seen, followed = before_the_rule(memory, request)
     no_contact = seen.rows.end.having(Fault.BLANK)
     found = silent_losses(followed.rows, no_contact, followed.keep, request.unseen_months)
     cautions = []
@@ -54,7 +51,7 @@ def count_silent_losses(memory: Memory, request: BuildRequest, report: Report) -
         cautions.append(Caution("under_care_without_contact", told))
     return {
         "months": request.unseen_months,
-        "counted": RULE in choices.repairs,
+        "counted": RULE in request.repairs,
         "n": found.n,
         "under_care": found.under_care,
         "unjudged": found.unjudged,
@@ -92,6 +89,15 @@ def spellings(memory: Memory, request: SpellingsRequest, report: Report) -> dict
         if listed:
             found.append({"column": identifier, "variants": listed})
     return {"columns": found}
+
+
+def before_the_rule(memory: Memory, request: BuildRequest) -> tuple[Plan, Seen, Followed]:
+    """Return who is followed when silent losses are not yet counted as losses."""
+    choices = choices_of(request)
+    others = {code: lines for code, lines in choices.repairs.items() if code != RULE}
+    plan = Plan(opened_register(memory), replace(choices, repairs=others))
+    seen = look(plan)
+    return plan, seen, follow(plan, mend(seen, find(seen, others) if others else [], others))
 
 
 TASKS = {

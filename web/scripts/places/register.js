@@ -7,11 +7,13 @@ import { columnsBlock } from './register/columns.js';
 import { findingsBlock } from './register/findings.js';
 import { meaningsBlock, sexesBlock } from './register/meanings.js';
 import { openingBlock } from './register/opening.js';
+import { profileBlock } from './register/profile.js';
 import { makeReader } from './register/reader.js';
 import { settingsBlock } from './register/settings.js';
 import { silentLossesBlock } from './register/silent_losses.js';
 import { sourceBlock } from './register/source.js';
 import { spellingsBlock } from './register/spellings.js';
+import { traceBlock } from './register/trace.js';
 import { understoodBlock } from './register/understood.js';
 
 /** @param {import('../app.js').App} app */
@@ -33,6 +35,8 @@ export function registerPlace(app) {
       silentLossesBlock(app),
       spellingsBlock(app),
       findingsBlock(app),
+      profileBlock(app),
+      traceBlock(app),
       h('section', { 'aria-labelledby': 'register-other' },
         h('h2', { id: 'register-other' }, say('register-other-title')),
         openingBlock(app, reader),

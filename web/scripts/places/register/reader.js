@@ -28,6 +28,8 @@ export function makeReader(app) {
         source, reading: reading.reading, values: reading.values, cohort: null, building: null, appliedSettings: null, savedSettings: null,
         opening: { busy: false, done: 0, total: 0, refusal: null },
         question: { ...app.store.state.question, group: null },
+        profile: { site: null },
+        trace: { ...app.store.state.trace, columns: [] },
         compare: { ...app.store.state.compare, exposed: null, reference: null, covariates: [] },
       });
       app.store.forgetPast();
