@@ -39,3 +39,28 @@ def test_rates_by_year_duration_and_age(site: SiteServer, opened: Callable, nati
     sentences = page.locator("#rates .sentence").all_inner_texts()
     ratio = expected["groups"][1]["ratio"]["value"]
     assert ratio == pytest.approx(numbers(sentences[1])[-3], rel=0.006)
+
+
+def test_average_time_and_what_lies_ahead(site: SiteServer, opened: Callable, native: Callable) -> None:
+    page = opened(site.address).page
+    page.locator("#open-demo").click()
+    page.get_by_text("person-years.").first.wait_for(timeout=ANSWER_MS)
+    go(page, "Outcomes")
+    page.locator("#outcomes-group").select_option(label=GROUP)
+    page.locator("#mean-time-horizon").fill("4")
+    page.locator("#mean-time-horizon").press("Tab")
+    page.locator("#mean-time .sentence", has_text="within 4 years").nth(2).wait_for(timeout=ANSWER_MS)
+    expected = native("outcomes.mean_time", {"interest": DEATHS, "group": native.group, "horizon_years": 4})
+    rows = table_rows(page, "Averages within 4 years")
+    for row, group in zip(rows, expected["groups"], strict=True):
+        assert row[0] == group["level"]
+        assert numbers(row[1])[0] == pytest.approx(group["mean"]["mean"]["value"], abs=0.0051)
+    ahead = [each for group in expected["groups"] for each in group["ahead"]]
+    for row, each in zip(table_rows(page, "Alive 2 years later"), ahead, strict=True):
+        assert numbers(row[2])[0] == each["at_risk"]
+        if each["code"] is None:
+            assert numbers(row[3])[0] == pytest.approx(100 * each["estimate"]["value"], abs=0.051)
+    page.locator("#mean-time-horizon").fill("40")
+    page.locator("#mean-time-horizon").press("Tab")
+    page.locator("#mean-time .refusal").wait_for(timeout=ANSWER_MS)
+    assert "shortest ends after" in page.locator("#mean-time .refusal").inner_text()
