@@ -116,6 +116,11 @@ def _counts(ask: Any) -> None:
     }  # fmt: skip
     ask("counts.strata", strata=[stratum, stratum])
     ask("counts.balance", prevalent=100, new_per_year=20, leaving=[{"label": "", "per_year": 15}])
+    ages = {
+        "from_age": 0, "population": 900, "prevalence": 0.01, "incidence": 0.002,
+        "mortality_well": 0.01, "mortality_ill": 0.03,
+    }  # fmt: skip
+    ask("counts.district", groups=[ages, ages | {"from_age": 40}])
     ask("counts.survival_size", hazard_ratio=2, survival=0.7, at_years=5, accrual_years=3, follow_up_years=2)
     ask("counts.proportions_size", exposed=0.1, reference=0.25, available=150)
     ask("counts.survey_size", proportion=0.5, margin=0.05, population=2000)

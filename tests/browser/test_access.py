@@ -25,7 +25,7 @@ def with_demo(opened: Callable, site: SiteServer, **options: object) -> Page:
     show(page, "outcomes")
     page.locator("#outcomes-group").select_option(index=1)
     show(page, "counts")
-    for part in ("lifeTable", "strata", "balance"):
+    for part in ("lifeTable", "strata", "balance", "district"):
         page.locator(f"#{part}-example").click()
     show(page, "caseload")
     page.locator("#items-example").click()

@@ -208,3 +208,42 @@ def test_what_was_typed_is_kept_in_a_file_without_patients(page: Page, tmp_path:
         page.locator("#scenario-open").set_input_files(strange)
         page.get_by_text("Nothing was changed.").wait_for(timeout=ANSWER_MS)
         assert page.locator("#caseload-years").input_value() == "7"
+
+
+def test_a_district_from_counts_alone(site: SiteServer, opened: Callable, native: Callable) -> None:
+    page = opened(site.address).page
+    page.get_by_role("navigation").get_by_role("link", name="From counts", exact=True).click()
+    ages = [
+        {
+            "from_age": 0,
+            "population": 9000,
+            "prevalence": 1,
+            "incidence": 0.5,
+            "mortality_well": 4,
+            "mortality_ill": 20,
+        },
+        {
+            "from_age": 50,
+            "population": 4000,
+            "prevalence": 8,
+            "incidence": 12,
+            "mortality_well": 15,
+            "mortality_ill": 60,
+        },
+    ]
+    for position, row in enumerate(ages):
+        for name, value in row.items():
+            put(page, f"#district-{position}-{name}", value)
+    # The page takes per cent and numbers per 1,000.
+    per = {"prevalence": 100, "incidence": 1000, "mortality_well": 1000, "mortality_ill": 1000}
+    groups = [{name: value / per.get(name, 1) for name, value in row.items()} for row in ages]
+    told = native("counts.district", {"groups": groups, "last_age": 90, "years": 10})
+    rows = table_rows(page, "Ill in the whole district")
+    for row, year in zip(rows, told["path"], strict=True):
+        assert numbers(row[1]) == pytest.approx([year["ill"]], abs=0.51)
+    shown = table_rows(page, "Ill by age")
+    for row, group in zip(shown, told["groups"], strict=True):
+        assert numbers(row[5]) == pytest.approx([100 * group["steady_prevalence"]], abs=0.051)
+    put(page, "#district-0-incidence", 1200)
+    page.locator("#district-0-incidence-fault").wait_for()
+    assert page.locator("#district-0-incidence").input_value() == "1200"

@@ -41,6 +41,7 @@ export function beginnings(language) {
       lifeTable: { entering: null, rows: [] },
       strata: [],
       balance: { prevalent: null, new_per_year: null, leaving: [], years: 5, population: null },
+      district: { rows: [], lastAge: 90, years: 10 },
       planning: { question: 'survival_size', typed: {} },
     },
     profile: { site: null },

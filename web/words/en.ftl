@@ -1478,6 +1478,52 @@ caution-balance_paths_apart = By year { $year } the two columns differ ({ $under
 caution-balance_reaches_zero = With the same number leaving each year nobody would be left by year { $year }.
 caution-nobody_leaves = Nobody leaves, so the number only grows and there is no steady state.
 caution-not_in_steady_state = { $new_per_year } come and { $leaving_per_year } leave each year: the number is changing, so prevalence is not simply incidence times duration.
+counts-district-title = A whole district, by age
+counts-district-empty = Type at least one age group: people, share ill, new cases and deaths.
+counts-district-lead = For a lifelong disease and a district without a register: from how many fall ill and how many die, well and ill, at each age.
+district-caption = Age groups
+district-from_age = From age
+district-population = People
+district-prevalence = Ill now, %
+district-incidence = New cases per 1,000 well a year
+district-mortality_well = Deaths per 1,000 well a year
+district-mortality_ill = Deaths per 1,000 ill a year
+district-last-age = The last group ends at age
+district-years = Years ahead
+district-sentence = Of { $now } ill now, { $then } will be ill in { $years ->
+    [one] { $years } year
+   *[other] { $years } years
+  }, { $share } of the people.
+district-steady = If the rates had always been these, { $steady } would be ill: { $distance } is how far today lies from that. In { $years ->
+    [0] no time
+    [one] { $years } year
+   *[other] { $years } years
+  } the number is within 1% of it.
+district-steady-far = If the rates had always been these, { $steady } would be ill: { $distance } is how far today lies from that. Even a whole life does not close the gap.
+district-figure = Share ill by age: now, in { $years } years, and in the steady state
+district-figure-described = Steps by age group, one line for each of the three moments, told apart by dashes and named at their right end.
+district-now = now
+district-then = in { $years } years
+district-in-steady-state = steady state
+axis-age = Age
+district-groups-caption = Ill by age
+district-ages = Ages
+district-ill-now = Ill now
+district-share-now = Share now
+district-ill-then = Ill in { $years } years
+district-share-then = Share in { $years } years
+district-share-steady = Share in the steady state
+district-path-caption = Ill in the whole district
+district-ill = Ill
+district-share = Share of the people
+district-method = Illness-death equation dp/dt = (1 − p)(i − p(m1 − m0)) along each generation, solved exactly within each half-year (Brinks & Landwehr 2014). Nobody recovers, moves in or out; each age keeps its number of people.
+caution-ill_die_less = From age { $from_age } on, the ill are said to die less often than the well. Check the two rates: they may be exchanged.
+caution-far_from_steady_state = Today lies { $share } from the steady state of these rates. Incidence times duration does not give the share of ill here, and rates that changed lately will show for decades.
+caution-migration_ignored = People who move in or out, recovery, and changes of the rates are left out.
+refusal-no_age_groups = Type at least one age group.
+refusal-ages_not_rising = Each age group must begin after the one before, and the last must end after it begins.
+refusal-ages_not_whole = Ages must be whole years from 0.
+refusal-nobody_in_district = There are no people in these age groups.
 caution-utilisation_at_or_above_one = { $places } places are too few: { $needed } would be taken on average.
 
 refusal-utilisation_at_or_above_one = { $places } places are too few: { $needed } would be taken on average.

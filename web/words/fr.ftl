@@ -1478,6 +1478,52 @@ caution-balance_paths_apart = À l’année { $year }, les deux colonnes diffèr
 caution-balance_reaches_zero = Avec le même nombre de sorties chaque année, il ne resterait personne à l’année { $year }.
 caution-nobody_leaves = Personne ne sort : le nombre ne fait que croître et il n’y a pas d’état stable.
 caution-not_in_steady_state = { $new_per_year } arrivent et { $leaving_per_year } sortent chaque année : le nombre change, la prévalence n’est donc pas simplement l’incidence multipliée par la durée.
+counts-district-title = Tout un district, par âge
+counts-district-empty = Saisissez au moins un groupe d’âge : habitants, part de malades, nouveaux cas et décès.
+counts-district-lead = Pour une maladie à vie et un district sans registre : à partir de ceux qui tombent malades et de ceux qui meurent, sains et malades, à chaque âge.
+district-caption = Groupes d’âge
+district-from_age = À partir de l’âge
+district-population = Habitants
+district-prevalence = Malades aujourd’hui, %
+district-incidence = Nouveaux cas pour 1 000 sains par an
+district-mortality_well = Décès pour 1 000 sains par an
+district-mortality_ill = Décès pour 1 000 malades par an
+district-last-age = Le dernier groupe finit à l’âge
+district-years = Nombre d’années
+district-sentence = De { $now } malades aujourd’hui, on passera à { $then } dans { $years ->
+    [one] { $years } an
+   *[other] { $years } ans
+  }, soit { $share } des habitants.
+district-steady = Si les taux avaient toujours été ceux-ci, { $steady } seraient malades : { $distance } est l’écart d’aujourd’hui. En { $years ->
+    [0] zéro an
+    [one] { $years } an
+   *[other] { $years } ans
+  }, le nombre en est à moins de 1 %.
+district-steady-far = Si les taux avaient toujours été ceux-ci, { $steady } seraient malades : { $distance } est l’écart d’aujourd’hui. Même une vie entière ne comble pas l’écart.
+district-figure = Part de malades par âge : aujourd’hui, dans { $years } ans et à l’équilibre
+district-figure-described = Paliers par groupe d’âge, une ligne pour chacun des trois moments, distinguées par leurs tirets et nommées à leur extrémité droite.
+district-now = aujourd’hui
+district-then = dans { $years } ans
+district-in-steady-state = équilibre
+axis-age = Âge
+district-groups-caption = Malades par âge
+district-ages = Âges
+district-ill-now = Malades aujourd’hui
+district-share-now = Part aujourd’hui
+district-ill-then = Malades dans { $years } ans
+district-share-then = Part dans { $years } ans
+district-share-steady = Part à l’équilibre
+district-path-caption = Malades dans tout le district
+district-ill = Malades
+district-share = Part des habitants
+district-method = Équation maladie-décès dp/dt = (1 − p)(i − p(m1 − m0)) le long de chaque génération, résolue exactement par demi-année (Brinks & Landwehr 2014). Personne ne guérit, n’arrive ni ne part ; chaque âge garde son nombre d’habitants.
+caution-ill_die_less = À partir de { $from_age } ans, les malades mourraient moins que les sains. Vérifiez les deux taux : ils sont peut-être inversés.
+caution-far_from_steady_state = Aujourd’hui se trouve à { $share } de l’équilibre de ces taux. L’incidence multipliée par la durée ne donne pas ici la part de malades, et des taux récemment changés se verront pendant des décennies.
+caution-migration_ignored = Les arrivées et départs d’habitants, la guérison et les changements de taux sont laissés de côté.
+refusal-no_age_groups = Saisissez au moins un groupe d’âge.
+refusal-ages_not_rising = Chaque groupe d’âge doit commencer après le précédent, et le dernier finir après son début.
+refusal-ages_not_whole = Les âges doivent être des années entières à partir de 0.
+refusal-nobody_in_district = Il n’y a aucun habitant dans ces groupes d’âge.
 caution-utilisation_at_or_above_one = { $places } places ne suffisent pas : { $needed } seraient occupées en moyenne.
 
 refusal-utilisation_at_or_above_one = { $places } places ne suffisent pas : { $needed } seraient occupées en moyenne.

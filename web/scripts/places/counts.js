@@ -2,6 +2,7 @@
 import { h } from '../parts/element.js';
 import { live } from '../parts/live.js';
 import { balancePart } from './counts/balance.js';
+import { districtPart } from './counts/district.js';
 import { lifeTablePart } from './counts/life_table.js';
 import { planningPart } from './counts/planning.js';
 import { strataPart } from './counts/strata.js';
@@ -14,6 +15,7 @@ export function countsPlace(app) {
     lifeTablePart(app),
     strataPart(app),
     balancePart(app),
+    districtPart(app),
     planningPart(app),
   ]);
 }
