@@ -22,7 +22,7 @@ HARD_CASES = Path(__file__).parents[1] / "hard_cases"
 ANSWER_MS = 30_000
 EXPECTED = json.loads((HARD_CASES / "faults.json").read_text(encoding="utf-8"))
 END_TO_END = (
-    "slipped_sideways", "day_and_month_changed_over", "ends_before_start", "no_such_day", "born_in_wrong_century",
+    "slipped_sideways", "day_and_month_changed_over", "ends_before_start", "no_such_day", "partial_date", "born_in_wrong_century",
     "death_date_but_alive", "contact_after_death", "death_dated_by_contact", "transfer_as_lost", "same_number",
     "one_number_two_people", "likely_same_person",
 )  # fmt: skip
@@ -53,7 +53,7 @@ def patients(page: Page) -> int:
     )
 
 
-def test_a_dozen_faults_end_to_end(site: SiteServer, opened: Callable) -> None:
+def test_faults_end_to_end(site: SiteServer, opened: Callable) -> None:
     page = opened(site.address).page
     for name in END_TO_END:
         open_fault(page, name)
@@ -125,3 +125,25 @@ def test_on_a_small_screen_nothing_runs_over(site: SiteServer, opened: Callable,
     page = opened(site.address, width=360, language=language).page
     open_fault(page, "many_at_once")
     assert page.evaluate("document.documentElement.scrollWidth") <= 360
+
+
+def test_the_ethiopian_calendar_is_chosen_and_the_persian_refused_by_name(
+    site: SiteServer, opened: Callable
+) -> None:
+    page = opened(site.address).page
+    page.locator("#register-file").first.set_input_files(HARD_CASES / "files" / "ethiopian_dates.csv")
+    page.locator("#closing-date").wait_for(timeout=ANSWER_MS)
+    page.locator("#closing-date").fill(CLOSING)
+    page.locator("#closing-date").blur()
+    for column in ("c2", "c5", "c6", "c7"):
+        if not page.locator(f"#calendar-{column}").is_visible():
+            page.locator(f"tr:has(#role-{column}) .calendar summary").click()
+        page.locator(f"#calendar-{column}").select_option("ethiopian")
+    sentence = page.locator("#understood-heading ~ .sentence")
+    # The same patients as in the file without faults, which is this one in Gregorian dates.
+    expect(sentence).to_contain_text(
+        "8 patients from 8 rows, who started between 16 March 2015", timeout=ANSWER_MS
+    )
+    page.locator("#calendar-c5").select_option("persian")
+    refusal = page.locator("section", has=page.locator("#understood-heading")).locator(".refusal")
+    expect(refusal).to_contain_text("follow another calendar (Persian)", timeout=ANSWER_MS)

@@ -56,7 +56,7 @@ export function beginnings(language) {
 
 /** A reading of no columns at all. */
 export function emptyReading() {
-  return { roles: {}, meanings: {}, blank_meaning: null, sexes: {}, date_orders: {}, closing_date: '', repairs: {}, unseen_months: 12, spellings: {} };
+  return { roles: {}, meanings: {}, blank_meaning: null, sexes: {}, date_orders: {}, closing_date: '', repairs: {}, unseen_months: 12, spellings: {}, calendars: {} };
 }
 
 /** Parts of the state that are choices: these can be undone. */

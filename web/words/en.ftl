@@ -513,6 +513,20 @@ trace-save = Save the list of { $n } as CSV on this computer
 caution-trace_list_identifies = This list identifies people. Keep it where the register itself is kept, hand it only to those who do the tracing, and delete it afterwards.
 caution-trace_list_shortened = { $listed } of { $n } are listed.
 
+calendar-title = Another calendar?
+calendar-of = Calendar of { $column }
+calendar-gregorian = Gregorian, or Buddhist years
+calendar-ethiopian = Ethiopian (day, month, year)
+calendar-persian = Persian
+calendar-hijri = Hijri
+calendar-bikram_sambat = Bikram Sambat
+refusal-calendar_not_converted = The dates in “{ $heading }” follow another calendar ({ $calendar }). It cannot be converted by subtraction, and this page has no tables for it. Have the dates converted in the program they come from, and save the list again.
+finding-partial_date-short = Day or month not known
+finding-partial_date = Only the month or the year of a date is written, so the row is set aside, or its age is not known.
+repair-middle_of_period = take the 15th of that month, or 1 July of that year, kept between start and closing date
+repair-first_of_period-effect = With the first day instead, survival at { $years } years would be { $survival } ({ $deaths } deaths);
+repair-last_of_period-effect = with the last day, { $survival } ({ $deaths } deaths, at { $years } years).
+
 register-other-title = Another register
 forget = Forget everything
 forget-meaning = Drops the register and every choice made about it from memory.

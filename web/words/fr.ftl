@@ -513,6 +513,20 @@ trace-save = Enregistrer la liste de { $n } en CSV sur cet ordinateur
 caution-trace_list_identifies = Cette liste désigne des personnes. Gardez-la là où le registre est gardé, ne la remettez qu’à ceux qui recherchent, et détruisez-la ensuite.
 caution-trace_list_shortened = { $listed } sur { $n } sont donnés.
 
+calendar-title = Un autre calendrier ?
+calendar-of = Calendrier de { $column }
+calendar-gregorian = grégorien, ou années bouddhiques
+calendar-ethiopian = éthiopien (jour, mois, année)
+calendar-persian = persan
+calendar-hijri = hégirien
+calendar-bikram_sambat = Bikram Sambat
+refusal-calendar_not_converted = Les dates de « { $heading } » suivent un autre calendrier ({ $calendar }). Il ne se convertit pas par soustraction, et cette page n’a pas de tables pour lui. Faites convertir les dates dans le programme d’où elles viennent, et enregistrez de nouveau la liste.
+finding-partial_date-short = Jour ou mois inconnu
+finding-partial_date = Seul le mois ou l’année d’une date est écrit ; la ligne est mise de côté, ou son âge n’est pas connu.
+repair-middle_of_period = prendre le 15 de ce mois, ou le 1er juillet de cette année, entre le début et la clôture
+repair-first_of_period-effect = Avec le premier jour, la survie à { $years } ans serait de { $survival } ({ $deaths } décès) ;
+repair-last_of_period-effect = avec le dernier jour, de { $survival } ({ $deaths } décès, à { $years } ans).
+
 register-other-title = Un autre registre
 forget = Tout oublier
 forget-meaning = Retire de la mémoire le registre et tous les choix faits à son sujet.

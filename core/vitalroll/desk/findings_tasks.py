@@ -3,7 +3,7 @@
 from __future__ import annotations
 
 from collections.abc import Callable, Mapping
-from dataclasses import dataclass
+from dataclasses import dataclass, replace
 from typing import Any
 
 import numpy as np
@@ -46,8 +46,9 @@ def findings(memory: Memory, request: BuildRequest, report: Report) -> dict[str,
         ``years`` of the headline; ``untouched`` and ``now``, headlines {n, events, lost, survival
         (Estimate)} without any repair and with those accepted; ``findings``: {code, severity, count,
         lines (the first 20), parameters, repair}, where ``repair`` is null or {kind, units, accepted,
-        declined (lines), overruled, without, with (headlines), listed: [{line, declined, changes:
-        [{line, what, before, after}]}]}; ``corrections``: {line, code, what, before, after};
+        declined (lines), overruled, without, with (headlines), alternatives: [{kind, headline}] of
+        other ways to repair it, listed: [{line, declined, changes: [{line, what, before, after}]}]};
+        ``corrections``: {line, code, what, before, after};
         ``cautions``.
 
         ``without`` and ``with`` hold every other accepted repair: their difference is what this one
@@ -122,6 +123,7 @@ def _answer(
         return answer
     others = {code: lines for code, lines in accepted.items() if code != finding.code}
     is_accepted = finding.code in accepted
+    alone = others | {finding.code: accepted.get(finding.code, ())}
     declined = set(accepted.get(finding.code, ()))
     answer["repair"] = {
         "kind": finding.repair.kind,
@@ -131,9 +133,18 @@ def _answer(
         "overruled": overruled.get(finding.code, 0),
         "without": _headline(plan, seen, made, others) if is_accepted else now,
         "with": now if is_accepted else _headline(plan, seen, made, others | {finding.code: ()}),
+        "alternatives": [
+            {"kind": other.kind, "headline": _headline(plan, seen, _instead(made, finding, other), alone)}
+            for other in finding.alternatives
+        ],
         "listed": _listed(seen, finding.repair, line, declined),
     }
     return answer
+
+
+def _instead(made: list[Finding], finding: Finding, other: Repair) -> list[Finding]:
+    """Return the findings with one repaired in another way."""
+    return [replace(each, repair=other) if each is finding else each for each in made]
 
 
 def _listed(seen: Seen, repair: Repair, line: np.ndarray, declined: set[int]) -> list[dict[str, Any]]:

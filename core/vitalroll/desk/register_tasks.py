@@ -71,6 +71,7 @@ class BuildRequest:
     repairs: dict[str, tuple[int, ...]] = field(default_factory=dict)
     unseen_months: Annotated[float, Between(1, 120)] = 12
     spellings: dict[str, dict[str, str]] = field(default_factory=dict)
+    calendars: dict[str, str] = field(default_factory=dict)
 
 
 @dataclass(frozen=True)
@@ -202,6 +203,7 @@ def choices_of(request: BuildRequest) -> Choices:
         repairs=request.repairs,
         unseen_months=request.unseen_months,
         spellings=request.spellings,
+        calendars=request.calendars,
     )
 
 

@@ -15,6 +15,7 @@ from typing import Literal, get_args
 
 import numpy as np
 
+from vitalroll.register.calendars import ETHIOPIAN_BEHIND, ethiopian_days
 from vitalroll.register.recognition import months
 from vitalroll.register.spelling import bare, same
 
@@ -269,7 +270,14 @@ def _without_parts(texts: DateTexts, weights: np.ndarray, usual: str | None, epo
     return Settling(order, True, (order,), int(counts.sum()), 0)
 
 
-def read_dates(texts: DateTexts, order: str, *, last_year: int, epoch: str = "serial_1900") -> Dates:
+def read_dates(
+    texts: DateTexts,
+    order: str,
+    *,
+    last_year: int,
+    epoch: str = "serial_1900",
+    calendar: str = "gregorian",
+) -> Dates:
     """Read texts as days.
 
     Parameters
@@ -279,6 +287,8 @@ def read_dates(texts: DateTexts, order: str, *, last_year: int, epoch: str = "se
         One of ORDERS. Single serials among written dates are read with ``epoch``.
     last_year : int
         A year of two digits is the last year with those digits that is not after this one.
+    calendar : str
+        ``gregorian`` or ``ethiopian``. Serials are days of the spreadsheet in either.
 
     Returns
     -------
@@ -286,7 +296,8 @@ def read_dates(texts: DateTexts, order: str, *, last_year: int, epoch: str = "se
         Years above 2400 are counted from the Buddhist era: 543 is taken off. Years outside
         1850 to 2200 are faults: other calendars are not converted.
     """
-    year, month, day = year_month_day(texts, order, last_year=last_year)
+    behind = ETHIOPIAN_BEHIND if calendar == "ethiopian" else 0
+    year, month, day = year_month_day(texts, order, last_year=last_year - behind)
     in_parts, short = texts.form == Form.PARTS, texts.short_year
     buddhist = (year > _BUDDHIST_FROM) & ~short & (year <= _BUDDHIST_FROM + 400)
     year[buddhist] -= BUDDHIST_OFFSET
@@ -294,12 +305,16 @@ def read_dates(texts: DateTexts, order: str, *, last_year: int, epoch: str = "se
     if order == "year_month_day":
         # A four-digit year at the end cannot be read with the year in front.
         written &= ~(in_parts & ~short)
-    possible = written & (year >= EARLIEST_YEAR) & (year <= LATEST_YEAR) & (month >= 1) & (month <= 12)
+    within = written & (year >= EARLIEST_YEAR) & (year <= LATEST_YEAR)
+    possible = within & (month >= 1) & (month <= 12)
     safe_year, safe_month = np.where(possible, year, 2000), np.where(possible, month, 1)
     start = _month_start(safe_year, safe_month)
     length = _month_start(safe_year + safe_month // 12, safe_month % 12 + 1) - start
     possible &= (day >= 1) & (day <= length)
     ordinal = np.where(possible, start + day - 1, 0)
+    if calendar == "ethiopian":
+        ordinal, there_is = ethiopian_days(year, month, day)
+        possible = within & there_is
     serial = texts.form == Form.SERIAL
     counted_from = _EPOCH[order] if order in _EPOCH else _EPOCH[epoch]
     ordinal = np.where(serial, counted_from + texts.parts[:, 0], ordinal)

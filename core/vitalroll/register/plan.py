@@ -9,6 +9,7 @@ from datetime import date
 import numpy as np
 
 from vitalroll.errors import Caution, Refusal
+from vitalroll.register.calendars import CALENDARS, CONVERTED
 from vitalroll.register.checks import Days, Rows
 from vitalroll.register.cohort import Covariate, meaning_code
 from vitalroll.register.covariates import Derived, age_of, calendar_of, group_of, sex_of
@@ -43,6 +44,8 @@ class Choices:
         Somebody under care who was not seen for longer than this before the closing date is perhaps lost.
     spellings : mapping of column identifier to a mapping of value to the value that it is
         Misspelt values of columns to group by.
+    calendars : mapping of column identifier to a name from calendars.CALENDARS
+        Columns of dates that are not Gregorian.
     """
 
     roles: Mapping[str, str]
@@ -54,6 +57,7 @@ class Choices:
     repairs: Mapping[str, Collection[int]] = field(default_factory=dict)
     unseen_months: float = 12
     spellings: Mapping[str, Mapping[str, str]] = field(default_factory=dict)
+    calendars: Mapping[str, str] = field(default_factory=dict)
 
 
 class Plan:
@@ -81,6 +85,7 @@ class Plan:
         for field_name, said, allowed in (
             ("sexes", choices.sexes, SEXES),
             ("date_orders", choices.date_orders, ORDERS),
+            ("calendars", choices.calendars, CALENDARS),
         ):
             for key, value in said.items():
                 if value not in allowed:
@@ -211,9 +216,16 @@ class Plan:
             self._dates_read[identifier] = self._read(profile, role)
         return self._dates_read[identifier]
 
+    def calendar_of(self, profile: Profile) -> str:
+        """Return the calendar that the dates of a column follow."""
+        return self.choices.calendars.get(profile.column.identifier, "gregorian")
+
     def order_of(self, profile: Profile) -> str:
         """Return the order in which a column of dates is read."""
         chosen = self.choices.date_orders.get(profile.column.identifier)
+        if self.calendar_of(profile) == "ethiopian":
+            # A month 13 would be taken for a day; these dates are written with the day first.
+            return "day_month_year"
         return chosen or dates_anyhow(profile, self.register.source).settling.order
 
     def _read(self, profile: Profile, role: str) -> Dates:
@@ -221,8 +233,14 @@ class Plan:
         column = profile.column
         dates = dates_anyhow(profile, source)
         order = self.choices.date_orders.get(column.identifier)
+        calendar = self.calendar_of(profile)
         about = {"column": column.identifier, "heading": excerpt(column.heading)}
-        if order is None:
+        if calendar not in CONVERTED:
+            where = f"calendars.{column.identifier}"
+            raise Refusal("calendar_not_converted", field=where, calendar=calendar, **about)
+        if calendar == "ethiopian":
+            order = self.order_of(profile)
+        elif order is None:
             if not dates.settling.settled:
                 where = f"date_orders.{column.identifier}"
                 choices = list(dates.settling.choices)
@@ -231,7 +249,8 @@ class Plan:
         elif order not in dates.settling.choices and dates.settling.settled:
             self._cautions.append(Caution("order_against_evidence", about | {"order": order}))
         last_year = self.last_year(role)
-        read = read_dates(dates.texts, order, last_year=last_year, epoch=source.epoch or "serial_1900")
+        epoch = source.epoch or "serial_1900"
+        read = read_dates(dates.texts, order, last_year=last_year, epoch=epoch, calendar=calendar)
         self._note_dates(dates, read.fault, profile.counts, about, role)
         return read
 

@@ -14,6 +14,7 @@ from datetime import date
 from typing import Any
 
 from vitalroll.errors import Caution, Refusal
+from vitalroll.register.calendars import CALENDARS
 from vitalroll.register.cohort import MEANINGS
 from vitalroll.register.dates import ORDERS, Fault, read_dates
 from vitalroll.register.findings.mending import CODES
@@ -69,6 +70,7 @@ def settings_of(register: Register, choices: Choices) -> Saved:
             "position": profile.column.position,
             "role": _role(choices, profile),
             "order": choices.date_orders.get(profile.column.identifier),
+            "calendar": choices.calendars.get(profile.column.identifier, "gregorian"),
             "spellings": spellings.get(profile.column.identifier, {}),
         }
         for profile in register.profiles
@@ -108,6 +110,7 @@ def apply_settings(register: Register, text: str) -> Applied:
     roles = {profile.column.identifier: "none" for profile in register.profiles}
     orders: dict[str, str] = {}
     spellings: dict[str, dict[str, str]] = {}
+    calendars: dict[str, str] = {}
     cautions: list[Caution] = []
     for said, profile in column_of:
         identifier = profile.column.identifier
@@ -116,6 +119,8 @@ def apply_settings(register: Register, text: str) -> Applied:
             cautions.append(Caution("not_dates_any_more", {"heading": profile.column.heading}))
             role = "none"
         roles[identifier] = role
+        if said["calendar"] != "gregorian":
+            calendars[identifier] = said["calendar"]
         if said["spellings"]:
             spellings[identifier] = said["spellings"]
         if profile.dates is not None:
@@ -142,6 +147,7 @@ def apply_settings(register: Register, text: str) -> Applied:
         "repairs": {code: [] for code in settings["repairs"]},
         "unseen_months": settings["unseen_months"],
         "spellings": spellings,
+        "calendars": calendars,
     }
     new_values = _new_values(register, roles, settings["meanings"])
     return Applied(reading, len(column_of), tuple(absent), tuple(added), new_values, tuple(cautions))
@@ -223,6 +229,7 @@ def _is_column(said: Any) -> bool:
         and isinstance(said.get("position"), int)
         and said.get("role") in ROLES
         and said.get("order") in (None, *ORDERS)
+        and said.get("calendar") in CALENDARS
         and _is_mapping(said.get("spellings"), None)
     )
 

@@ -35,7 +35,7 @@ export function refusalNote(app, refusal) {
  */
 export function named(app, parameters = {}) {
   const values = { ...parameters };
-  for (const name of ['meaning', 'role', 'order']) {
+  for (const name of ['meaning', 'role', 'order', 'calendar']) {
     const key = `${name}-${values[name]}`;
     if (typeof values[name] === 'string' && app.words.has(key)) values[name] = app.words.say(key);
   }

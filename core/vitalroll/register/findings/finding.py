@@ -69,6 +69,7 @@ class Finding:
     """What a check found.
 
     ``rows`` are positions of the rows concerned; ``parameters`` are those of its sentence.
+    ``alternatives`` are other ways to repair it, whose effect is shown to see how much the way matters.
     """
 
     code: str
@@ -76,6 +77,7 @@ class Finding:
     rows: np.ndarray
     parameters: dict[str, Any] = field(default_factory=dict)
     repair: Repair | None = None
+    alternatives: tuple[Repair, ...] = ()
 
 
 @dataclass(frozen=True)

@@ -13,7 +13,7 @@ from vitalroll.numbers import DAYS_PER_MONTH
 from vitalroll.register.checks import Days, Rows
 from vitalroll.register.cohort import MEANINGS
 from vitalroll.register.dates import Fault
-from vitalroll.register.findings import days, endings, form, people
+from vitalroll.register.findings import days, endings, form, partial, people
 from vitalroll.register.findings.finding import NOT_RECORDED, Check, Finding, Repair, Seen
 from vitalroll.register.plan import Plan
 
@@ -24,6 +24,7 @@ CHECKS: tuple[Check, ...] = (
     days.far_after_closing,
     days.born_in_wrong_century,
     days.no_such_day,
+    partial.partial_date,
     endings.death_date_but_alive,
     endings.contact_after_death,
     endings.died_without_date,

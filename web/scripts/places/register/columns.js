@@ -10,7 +10,7 @@ const SINGLE = ROLES.filter((role) => !['none', 'name', 'group', 'end'].includes
 
 /** @param {import('../../app.js').App} app */
 export function columnsBlock(app) {
-  return live(app, (state) => [state.source?.fingerprint, state.source?.sheet, state.source?.header_line, state.reading.roles, state.reading.date_orders], (state) => {
+  return live(app, (state) => [state.source?.fingerprint, state.source?.sheet, state.source?.header_line, state.reading.roles, state.reading.date_orders, state.reading.calendars], (state) => {
     const { say } = app.words;
     const { source, reading } = state;
     return [h('section', { 'aria-labelledby': 'columns-heading' },
@@ -33,7 +33,7 @@ function row(app, column, reading) {
     h('td', { class: 'text' }, looks(app, column)),
     h('td', { class: 'text' },
       roleSelect(app, column, role),
-      DATE_ROLES.includes(role) && column.dates ? orderChoice(app, column, reading) : null));
+      DATE_ROLES.includes(role) && column.dates ? [orderChoice(app, column, reading), calendarChoice(app, column, reading)] : null));
 }
 
 /** Evidence as sentences, then some of what stands in the column. */
@@ -63,6 +63,23 @@ function giveRole(app, id, role) {
   }
   app.store.amend('reading', { roles: { ...roles, [id]: role } });
 }
+
+/** The calendar is only asked for where somebody opens it: most registers are Gregorian, or Buddhist, which shows by itself. */
+function calendarChoice(app, column, reading) {
+  const { say } = app.words;
+  const chosen = reading.calendars[column.id] ?? 'gregorian';
+  return h('details', { class: 'calendar', open: chosen !== 'gregorian' }, h('summary', {}, say('calendar-title')),
+    h('select', {
+      id: `calendar-${column.id}`, 'aria-label': say('calendar-of', { column: column.heading }),
+      onchange: (event) => {
+        const { [column.id]: _, ...others } = app.store.state.reading.calendars;
+        const { value } = event.target;
+        app.store.amend('reading', { calendars: value === 'gregorian' ? others : { ...others, [column.id]: value } });
+      },
+    }, CALENDARS.map((calendar) => h('option', { value: calendar, selected: calendar === chosen }, say(`calendar-${calendar}`)))));
+}
+
+const CALENDARS = ['gregorian', 'ethiopian', 'persian', 'hijri', 'bikram_sambat'];
 
 function orderChoice(app, column, reading) {
   const { say, has } = app.words;

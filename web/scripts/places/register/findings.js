@@ -118,7 +118,8 @@ function effect(app, repair, years) {
     ['survival', percent(without.survival.value), percent(mended.survival.value)],
   ].filter(([, before, after]) => before !== after)
     .map(([what, before, after]) => say(`effect-${what}`, { before, after, years }));
-  const said = moved.length ? moved.join(' ') : say('effect-nothing');
+  const ways = repair.alternatives.map(({ kind, headline }) => say(`repair-${kind}-effect`, { years, survival: percent(headline.survival.value), deaths: headline.events }));
+  const said = [...(moved.length ? moved : [say('effect-nothing')]), ...ways].join(' ');
   return repair.overruled ? `${said} ${say('effect-overruled', { n: repair.overruled })}` : said;
 }
 

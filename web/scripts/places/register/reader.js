@@ -135,7 +135,8 @@ function addProposals(reading, role, { values }) {
 export function requestOf(reading) {
   const roles = Object.fromEntries(Object.entries(reading.roles).filter(([, role]) => role !== 'none'));
   const orders = Object.fromEntries(Object.entries(reading.date_orders).filter(([id]) => id in roles));
-  return { ...reading, roles, date_orders: orders };
+  const calendars = Object.fromEntries(Object.entries(reading.calendars).filter(([id]) => id in roles));
+  return { ...reading, roles, date_orders: orders, calendars };
 }
 
 /** Keys of what the person still has to choose before a cohort can be built. */
@@ -145,7 +146,8 @@ export function whatIsMissing({ source, reading }) {
   if (!roles.includes('end') && !roles.includes('death_date')) missing.push('missing-end');
   if (!reading.closing_date) missing.push('missing-closing');
   const unsettled = source.columns.some((column) =>
-    DATE_ROLES.includes(reading.roles[column.id]) && column.dates && !reading.date_orders[column.id]);
+    DATE_ROLES.includes(reading.roles[column.id]) && column.dates && !reading.date_orders[column.id]
+    && reading.calendars[column.id] !== 'ethiopian');
   if (unsettled) missing.push('missing-order');
   if (roles.includes('outcome') && !Object.values(reading.meanings).length) missing.push('missing-meanings');
   return missing;
