@@ -247,3 +247,21 @@ def test_a_district_from_counts_alone(site: SiteServer, opened: Callable, native
     put(page, "#district-0-incidence", 1200)
     page.locator("#district-0-incidence-fault").wait_for()
     assert page.locator("#district-0-incidence").input_value() == "1200"
+
+
+def test_long_work_shows_how_far_it_is_and_can_be_stopped(page: Page) -> None:
+    page.locator("#items-example").click()
+    page.locator("#levers-example").click()
+    page.locator("#levers .sentence").first.wait_for(timeout=ANSWER_MS)
+    put(page, "#caseload-years", 30)
+    stop = page.locator("#place-caseload .starting").get_by_role("button")
+    stop.first.wait_for(timeout=2 * ANSWER_MS)
+    assert page.locator("#place-caseload progress").count() == 1
+    stop.first.click()
+    page.locator("#place-caseload .refusal", has_text="Stopped before it was finished.").first.wait_for(
+        timeout=ANSWER_MS
+    )
+    # The engine is back, with its register, and the next question is answered.
+    put(page, "#caseload-years", 2)
+    page.locator("#levers .sentence", has_text="after 2 years").first.wait_for(timeout=3 * ANSWER_MS)
+    assert page.locator("#place-caseload .starting").count() == 0

@@ -52,6 +52,7 @@ megabytes = { $size } MB
 estimate = { $value } ({ $lower } to { $upper })
 everyone = Everyone
 working = Working…
+answer-working = Working this out …
 stop = Stop
 save-table = Save this table as CSV
 save-figure = Save this figure as SVG

@@ -52,6 +52,7 @@ megabytes = { $size } Mo
 estimate = { $value } ({ $lower } à { $upper })
 everyone = Ensemble
 working = Calcul en cours…
+answer-working = Calcul en cours…
 stop = Arrêter
 save-table = Enregistrer ce tableau en CSV
 save-figure = Enregistrer cette figure en SVG

@@ -28,7 +28,12 @@ Report = Callable[[str, int, int], None]
 SOURCES = ("inflow", "leaving", "chance")
 """What can be redrawn: the rate of newcomers, the hazards, and who comes and leaves at those rates."""
 
-_DRAWS_AT_A_TIME = 250
+_NOBODY = 1e-9
+"""Fewer expected to leave than this are rounding, not patients: chance has no hold on them."""
+
+_SMALLEST_FACTOR = 1e-20
+
+_DRAWS_AT_A_TIME = 500
 """Small enough that one chunk's patients stay in the processor's cache."""
 
 
@@ -162,7 +167,7 @@ class _Chunk:
         runs = len(self._axis.begins)
         for month in range(months):
             for track, random in zip(tracks, randoms, strict=True):
-                error = random.standard_normal((runs, draws)) if self._luck else None
+                error = random.standard_normal((runs, draws), dtype=np.float32) if self._luck else None
                 track.step(month, error, random)
         return [track.course(random) for track, random in zip(tracks, randoms, strict=True)]
 
@@ -174,10 +179,12 @@ class _Layers:
         self._chunk, self._plan, self._beside, self._months = chunk, plan, beside, months
         draws = chunk._due.shape[1]
         runs, ways = chunk._monthly.shape[:2]
-        ordinary = _Groups(chunk._axis, months, draws, chunk._placed)
+        ordinary = _Groups(chunk._axis, months, draws, chunk._placed, chunk._into)
         self._groups = [ordinary]
         if plan.lead_months:
-            self._groups.append(_Groups(chunk._axis, months, draws, np.zeros(chunk._axis.slots)))
+            # Whoever is found early comes at the start.
+            at_start = np.eye(1, chunk._axis.slots)[0]
+            self._groups.append(_Groups(chunk._axis, months, draws, np.zeros(chunk._axis.slots), at_start))
             self._early = np.zeros((months + plan.lead_months, draws))
         self.error = np.zeros((runs, draws))
         self.expected_left = np.zeros((runs, draws))
@@ -200,19 +207,18 @@ class _Layers:
         self.newcomers[month] = sum(arrived)
         under_care = first_year = 0.0
         for position, (groups, come) in enumerate(zip(self._groups, arrived, strict=True)):
-            into = self._chunk._into if position == 0 else np.eye(1, self._chunk._axis.slots)[0]
-            groups.arrive(month, come, into)
+            groups.arrive(month, come)
             self._set_hazards(position, month)
-            here, staying = groups.by_run(month), self._staying[position]
+            here, staying = groups.here, self._staying[position]
             expected = here * (1 - staying)
             left = expected
             if error is not None:
-                own = error if position == 0 else random.standard_normal(error.shape)
+                own = error if position == 0 else random.standard_normal(error.shape, dtype=np.float32)
                 shared = self._shared(own, expected) if position == 0 else own
-                left = expected + shared * np.sqrt(np.maximum(expected, 0) * staying)
-            groups.leave(month, here, left)
-            self._unshared[position] += left
+                left = expected + shared * np.sqrt(np.where(expected > _NOBODY, expected, 0) * staying)
             stayed = here - left
+            groups.leave(month, left)
+            self._unshared[position] += left
             under_care = under_care + stayed.sum(axis=0)
             begins = self._chunk._axis.begins
             first_year = first_year + stayed[: int(np.searchsorted(begins, MONTHS_PER_YEAR))].sum(axis=0)
@@ -294,34 +300,56 @@ class _Layers:
 
 
 class _Groups:
-    """Patients by the month of their start (rows) and draw (columns); see the module's head."""
+    """Patients by the month of their start (rows) and draw (columns); see the module's head.
 
-    def __init__(self, axis: Ageing, months: int, draws: int, placed: np.ndarray) -> None:
-        self._axis, self._months = axis, months
-        self._here = np.zeros((months + axis.slots, draws))
-        self._here[months:] = placed[:, np.newaxis]
-        self._ends = [*axis.begins[1:], axis.slots]
+    All rows of a run are multiplied by the same chance of staying, so each run has one factor for
+    all of them: a row holds its patients divided by the factor of its run, and only the row that
+    passes into the next run is touched in a month.
+    """
 
-    def arrive(self, month: int, come: np.ndarray, into: np.ndarray) -> None:
-        first = self._months - month
-        entrances = np.flatnonzero(into)
-        self._here[first + entrances] += into[entrances, np.newaxis] * come
+    def __init__(self, axis: Ageing, months: int, draws: int, placed: np.ndarray, into: np.ndarray) -> None:
+        self._months, self._slots = months, axis.slots
+        self._rows = np.zeros((months + axis.slots, draws))
+        self._rows[months:] = placed[:, np.newaxis]
+        self._factor = np.ones((len(axis.begins), draws))
+        self._begins = axis.begins
+        self._ends = np.array([*axis.begins[1:], axis.slots])
+        self._single = np.flatnonzero(np.diff(axis.begins) == 1)
+        self._entrances = np.flatnonzero(into)
+        self._entering = into[self._entrances, np.newaxis]
+        self._run_entered = axis.run_of_slot[self._entrances]
+        self._entering_runs = np.add.reduceat(into, axis.begins)[:, np.newaxis]
+        self.here = np.add.reduceat(self._rows[months:], axis.begins, axis=0)
+        """How many are in each run, shape (runs, draws)."""
 
-    def by_run(self, month: int) -> np.ndarray:
-        """Return how many are in each run, shape (runs, draws)."""
-        first = self._months - month
-        rows = self._here[first : first + self._axis.slots]
-        return np.add.reduceat(rows, self._axis.begins, axis=0)
+    def arrive(self, month: int, come: np.ndarray) -> None:
+        """Let ``come`` (draws,) arrive."""
+        rows = self._months - month + self._entrances
+        self._rows[rows] += self._entering * come / self._factor[self._run_entered]
+        self.here += self._entering_runs * come
 
-    def leave(self, month: int, here: np.ndarray, left: np.ndarray) -> None:
-        """Take ``left`` of ``here`` (runs, draws) away, from each row of a run alike."""
-        first = self._months - month
+    def leave(self, month: int, left: np.ndarray) -> None:
+        """Take ``left`` (runs, draws) away, from each row of a run alike, and let a month pass."""
+        here, factor = self.here, self._factor
         stays = 1 - np.divide(left, here, out=np.zeros_like(left), where=here != 0)
-        for run, (begin, end) in enumerate(zip(self._axis.begins, self._ends, strict=True)):
-            self._here[first + begin : first + end] *= stays[run]
-        last = first + self._axis.slots - 1
-        # All who have been here longer than the register supports make one group.
-        self._here[last - 1] += self._here[last]
+        # A run that is left by all would have the factor 0, by which nothing can be divided.
+        factor *= np.where(np.abs(stays) < _SMALLEST_FACTOR, _SMALLEST_FACTOR, stays)
+        here -= left
+        first = self._months - month
+        rows = first + self._ends[:-1] - 1
+        moved = self._rows[rows] * factor[:-1]
+        here[:-1] -= moved
+        here[self._single] = 0
+        here[1:] += moved
+        self._rows[rows] = moved / factor[1:]
+        if (month + 1) % MONTHS_PER_YEAR == 0:
+            self._fold(first - 1)
+
+    def _fold(self, first: int) -> None:
+        """Bring the factors back to 1, long before they could become too small."""
+        for run, (begin, end) in enumerate(zip(self._begins[:-1], self._ends[:-1], strict=True)):
+            self._rows[first + begin : first + end] *= self._factor[run]
+        self._factor[:] = 1
 
 
 def _staying(monthly: np.ndarray) -> np.ndarray:

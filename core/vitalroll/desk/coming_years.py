@@ -58,7 +58,7 @@ class Setting:
     newcomers: Newcomers = field(default_factory=Newcomers)
     completeness: Annotated[float, Between(1, 100)] = 100.0
     tail: Literal["held", "halved", "doubled", "nobody"] = "held"
-    draws: Annotated[int, Between(100, 20_000)] = 1000
+    draws: Annotated[int, Between(100, 20_000)] = 2000
     seed: Annotated[int, Between(0, 2**53)] = 1
 
 

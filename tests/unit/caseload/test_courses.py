@@ -232,8 +232,19 @@ def test_the_more_is_redrawn_the_wider_the_courses():
 
 def test_progress_is_reported_up_to_the_end():
     said = []
-    redraw(TODAY, HAZARDS, inflow_typed(1.0), years=1, draws=600, report=lambda *step: said.append(step))
-    assert said == [("draws", 0, 600), ("draws", 250, 600), ("draws", 500, 600), ("draws", 600, 600)]
+    redraw(TODAY, HAZARDS, inflow_typed(1.0), years=1, draws=1200, report=lambda *step: said.append(step))
+    assert said == [("draws", 0, 1200), ("draws", 500, 1200), ("draws", 1000, 1200), ("draws", 1200, 1200)]
+
+
+def test_hazards_so_high_that_nobody_stays_leave_nobody():
+    """A month's chance of staying of exp(-100) is nothing to divide by, and does not have to be."""
+    hazards = known_hazards({"lost": 1200.0}, {"lost": 1200.0})
+    course = redraw(TODAY, hazards, inflow_typed(60.0), years=3, draws=50)[0]
+    assert np.all(np.isfinite(course.under_care))
+    # Who comes within the month stays 1/100 of it on average.
+    assert np.abs(course.under_care[:, 1:]).max() < 5
+    flow = course.newcomers.sum(axis=1) - course.leaving.sum(axis=(1, 2))
+    np.testing.assert_allclose(course.under_care[:, 0] + flow, course.under_care[:, -1], atol=1e-6)
 
 
 def test_no_draws_are_refused():

@@ -1,21 +1,48 @@
 /** A block that asks the engine, shows the answer, and hands it to the report. */
+import { button } from './choices.js';
 import { h } from './element.js';
 import { refusalNote } from './said.js';
 
 const PATIENCE_MS = 250;
+/** After this long it is said how far a question has come, and it can be stopped. */
+const LONG_MS = 1500;
 
 const MOST_KEPT = 12;
 /** Latest questions with their answers on the way: blocks that ask the same share one. @type {Map<string, Promise<any>>} */
 const asked = new Map();
 
+/** How far each question on the way has come; every block that waits for it listens. @type {Map<string, Set<(done: number, total: number) => void>>} */
+const listening = new Map();
+
 function askOnce(app, question, key, id) {
   if (!asked.has(key)) {
-    const answer = app.engine.ask(question.task, question.request, { key: id });
+    const onProgress = (_, done, total) => listening.get(key)?.forEach((hear) => hear(done, total));
+    const answer = app.engine.ask(question.task, question.request, { key: id, onProgress });
     asked.set(key, answer);
     answer.catch(() => asked.delete(key));
     if (asked.size > MOST_KEPT) asked.delete(asked.keys().next().value);
   }
   return asked.get(key);
+}
+
+/**
+ * A line before `body` that says how far a question has come, and can end it; it comes with the first news.
+ * @param {import('../app.js').App} app
+ */
+function progressLine(app, id, body) {
+  const { say } = app.words;
+  const bar = /** @type {HTMLProgressElement} */ (h('progress', { id: `${id}-progress`, max: 1 }));
+  const line = h('div', { class: 'starting', role: 'status' },
+    h('label', { for: `${id}-progress` }, say('answer-working')), bar,
+    button(say('stop'), () => app.engine.stop(), { class: 'plain', id: `${id}-stop` }));
+  return {
+    hear(done, total) {
+      if (!line.isConnected) body.before(line);
+      bar.max = Math.max(total, 1);
+      bar.value = done;
+    },
+    end: () => line.remove(),
+  };
 }
 
 /**
@@ -84,6 +111,10 @@ export function answerBlock(app, { id, title, ask, draw, paper = draw, empty, ch
     const waiting = setTimeout(() => {
       body.setAttribute('aria-busy', 'true');
     }, PATIENCE_MS);
+    const progress = progressLine(app, id, body);
+    const long = setTimeout(() => {
+      listening.set(key, (listening.get(key) ?? new Set()).add(progress.hear));
+    }, LONG_MS);
     try {
       const answer = await askOnce(app, question, key, id);
       if (key === latestKey) latest = { answer, state };
@@ -100,6 +131,10 @@ export function answerBlock(app, { id, title, ask, draw, paper = draw, empty, ch
       if (key === latestKey) latest = { refusal };
     } finally {
       clearTimeout(waiting);
+      clearTimeout(long);
+      progress.end();
+      listening.get(key)?.delete(progress.hear);
+      if (!listening.get(key)?.size) listening.delete(key);
     }
     if (key === latestKey) redraw();
   }

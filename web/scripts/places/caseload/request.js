@@ -1,6 +1,6 @@
 /** What every question about the coming years is asked with. */
 
-const DRAWS = 1000;
+const DRAWS = 2000;
 const SEED = 1;
 export const FARTHEST = 30;
 
