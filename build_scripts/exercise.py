@@ -35,6 +35,7 @@ def everything() -> None:
     ask("about")
     text = demo_register()
     ask("register.open", name="demo.xlsx", content=small_workbook(text))
+    ask("register.open", name="demo.ods", content=small_open_document(text))
     source = ask("register.open", name="demo-register.csv", content=text.encode())
     reading = proposed_reading(ask, source, CLOSING)
     cohort = ask("register.build", **reading)
@@ -125,6 +126,34 @@ def _counts(ask: Any) -> None:
     ask("counts.proportions_size", exposed=0.1, reference=0.25, available=150)
     ask("counts.survey_size", proportion=0.5, margin=0.05, population=2000)
     ask("counts.accuracy_size", sensitivity=0.9, specificity=0.85, margin=0.05, prevalence=0.2)
+
+
+def small_open_document(text: str) -> bytes:
+    """Return CSV text as a small OpenDocument workbook."""
+    spaces = " ".join(
+        f'xmlns:{name}="urn:oasis:names:tc:opendocument:xmlns:{name}:1.0"'
+        for name in ("office", "table", "text")
+    )
+    rows = "".join(
+        "<table:table-row>"
+        + "".join(
+            f'<table:table-cell office:value-type="string"><text:p>{escape(cell)}</text:p></table:table-cell>'
+            for cell in row
+        )
+        + "</table:table-row>"
+        for row in csv.reader(io.StringIO(text))
+    )
+    content = (
+        f'<?xml version="1.0" encoding="UTF-8"?><office:document-content {spaces}>'
+        "<office:body><office:spreadsheet>"
+        f'<table:table table:name="Register">{rows}</table:table>'
+        "</office:spreadsheet></office:body></office:document-content>"
+    )
+    packed = io.BytesIO()
+    with zipfile.ZipFile(packed, "w", zipfile.ZIP_DEFLATED) as archive:
+        archive.writestr("mimetype", "application/vnd.oasis.opendocument.spreadsheet")
+        archive.writestr("content.xml", content)
+    return packed.getvalue()
 
 
 def small_workbook(text: str) -> bytes:

@@ -132,10 +132,125 @@ def binary_workbook() -> bytes:
     return archive({"[Content_Types].xml": b"<Types/>", "xl/workbook.bin": b"\0" * 64})
 
 
+OPEN_DOCUMENT = b"application/vnd.oasis.opendocument.spreadsheet"
+_SPACES = " ".join(
+    f'xmlns:{name}="urn:oasis:names:tc:opendocument:xmlns:{name}:1.0"'
+    for name in ("office", "table", "text", "style")
+)
+
+
+def ods(tables: str, styles: str = "", **parts: bytes) -> bytes:
+    """Return an .ods workbook of the given tables (XML), with any other parts."""
+    content = (
+        f'<?xml version="1.0" encoding="UTF-8"?><office:document-content {_SPACES}>'
+        f"<office:automatic-styles>{styles}</office:automatic-styles>"
+        f"<office:body><office:spreadsheet>{tables}</office:spreadsheet></office:body></office:document-content>"
+    )
+    named = {name.replace("__", "/"): part for name, part in parts.items()}
+    return archive({"mimetype": OPEN_DOCUMENT, "content.xml": content.encode(), **named})
+
+
+def ods_cell(value: object) -> str:
+    """Return a cell as a spreadsheet writes it."""
+    if value is None:
+        return "<table:table-cell/>"
+    if isinstance(value, _DAY):
+        return (
+            f'<table:table-cell office:value-type="date" office:date-value="{value.isoformat()}">'
+            f"<text:p>{value:%d/%m/%y}</text:p></table:table-cell>"
+        )
+    if isinstance(value, int):
+        return f'<table:table-cell office:value-type="float" office:value="{value}"><text:p>{value}</text:p></table:table-cell>'
+    return f'<table:table-cell office:value-type="string"><text:p>{value}</text:p></table:table-cell>'
+
+
+def ods_table(rows: list[list[object]], name: str = "Register", attributes: str = "") -> str:
+    """Return a table with the rows, then the blank cells and rows that programs write to the sheet's end."""
+    body = "".join(
+        "<table:table-row>" + "".join(map(ods_cell, row))
+        + '<table:table-cell table:number-columns-repeated="16000"/></table:table-row>'
+        for row in rows
+    )  # fmt: skip
+    blank = (
+        '<table:table-row table:number-rows-repeated="1048000">'
+        '<table:table-cell table:number-columns-repeated="16384"/></table:table-row>'
+    )
+    return f'<table:table table:name="{name}" {attributes}>{body}{blank}</table:table>'
+
+
 def open_document() -> bytes:
-    """A workbook of another form, .ods."""
-    kind = b"application/vnd.oasis.opendocument.spreadsheet"
-    return archive({"mimetype": kind, "content.xml": b"<office/>"})
+    """A workbook of the other common form, .ods."""
+    return ods(ods_table([HEADINGS, *PATIENTS]))
+
+
+def open_document_marks() -> bytes:
+    """An .ods workbook with a hidden sheet that holds more, hidden rows, merged cells and an uncalculated formula."""
+    rows = ods_table([HEADINGS, *PATIENTS])
+    rows = rows.replace("<table:table-row>", '<table:table-row table:visibility="filter">', 2)
+    rows = rows.replace(
+        "</table:table-row>",
+        '<table:table-cell table:formula="of:=1+1"/>'
+        '<table:table-cell table:number-columns-spanned="2"/><table:covered-table-cell/></table:table-row>',
+        1,
+    )
+    styles = '<style:style style:name="ta2"><style:table-properties table:display="false"/></style:style>'
+    codes = ods_table([["Mild", i] for i in range(60)], "Codes", 'table:style-name="ta2"')
+    return ods(codes + rows, styles)
+
+
+def open_document_texts() -> bytes:
+    """Texts in spans, over lines, with repeated spaces and a note; percentages, truths and times of day."""
+    texts = [
+        '<table:table-cell office:value-type="string"><text:p>Under<text:s/><text:span>ca<text:span>re</text:span>'
+        "</text:span></text:p><office:annotation><text:p>seen by nurse</text:p></office:annotation></table:table-cell>",
+        '<table:table-cell office:value-type="percentage" office:value="0.5"><text:p>50 %</text:p></table:table-cell>',
+        '<table:table-cell office:value-type="boolean" office:boolean-value="true"/>',
+        '<table:table-cell office:value-type="date" office:date-value="2025-05-20T14:30:00"/>',
+        '<table:table-cell office:value-type="string" table:number-columns-repeated="2"><text:p>x</text:p></table:table-cell>',
+        '<table:table-cell table:number-columns-repeated="2"/>',
+        '<table:table-cell office:value-type="string"><text:p>a</text:p><text:p>b</text:p></table:table-cell>',
+    ]
+    row = f'<table:table-row table:number-rows-repeated="3">{"".join(texts)}</table:table-row>'
+    headings = "".join(map(ods_cell, ["Status", "Share", "Seen", "When", "P", "Q", "R", "S", "T"]))
+    return ods(
+        f'<table:table table:name="Register"><table:table-row>{headings}</table:table-row>{row}</table:table>'
+    )
+
+
+def open_document_bomb() -> bytes:
+    """A few bytes that stand for a thousand million cells: a row said to be repeated, of cells said so too."""
+    cell = '<table:table-cell office:value-type="string" table:number-columns-repeated="1900"><text:p>x</text:p></table:table-cell>'
+    row = f'<table:table-row table:number-rows-repeated="999999">{cell}</table:table-row>'
+    return ods(f'<table:table table:name="Register">{row}</table:table>')
+
+
+def open_document_entities() -> bytes:
+    """An .ods workbook that declares entities which would grow without end."""
+    content = b'<?xml version="1.0"?><!DOCTYPE x [<!ENTITY a "aaaaaaaaaa"><!ENTITY b "&a;&a;&a;">]><x>&b;</x>'
+    return archive({"mimetype": OPEN_DOCUMENT, "content.xml": content})
+
+
+def open_document_deep() -> bytes:
+    """Spans within spans within spans, far deeper than anybody writes."""
+    text = "<text:span>" * 5000 + "x" + "</text:span>" * 5000
+    cell = f'<table:table-cell office:value-type="string"><text:p>{text}</text:p></table:table-cell>'
+    return ods(f'<table:table table:name="Register"><table:table-row>{cell}</table:table-row></table:table>')
+
+
+def open_document_locked() -> bytes:
+    """An .ods workbook with a password: its manifest says how each part is encrypted."""
+    manifest = b"<manifest:manifest><manifest:file-entry><manifest:encryption-data/></manifest:file-entry></manifest:manifest>"
+    return ods(ods_table([HEADINGS]), **{"META-INF__manifest.xml": manifest})
+
+
+def open_document_macros() -> bytes:
+    """An .ods workbook with macros."""
+    return ods(ods_table([HEADINGS, *PATIENTS]), **{"Basic__Standard__Module1.xml": b"<m/>"})
+
+
+def open_document_text() -> bytes:
+    """A text document of the same family."""
+    return archive({"mimetype": b"application/vnd.oasis.opendocument.text", "content.xml": b"<office/>"})
 
 
 def text_document() -> bytes:
@@ -234,6 +349,14 @@ MADE: dict[str, Callable[[], bytes]] = {
     "macros": macros,
     "binary workbook": binary_workbook,
     "open document": open_document,
+    "open document marks": open_document_marks,
+    "open document texts": open_document_texts,
+    "open document bomb": open_document_bomb,
+    "open document entities": open_document_entities,
+    "open document deep": open_document_deep,
+    "open document locked": open_document_locked,
+    "open document macros": open_document_macros,
+    "open document text": open_document_text,
     "text document": text_document,
     "entities": entities,
     "bomb": bomb,

@@ -117,7 +117,7 @@ register-title = Register
 
 register-lead = Open the list of patients: one row for each patient, from a spreadsheet or a text file. It is read on this computer and nowhere else.
 open-file = Choose a file, or drop one here
-open-file-hint = .csv, .tsv, .txt or .xlsx
+open-file-hint = .csv, .tsv, .txt, .xlsx or .ods
 open-demo = Open the invented demo register
 demo-meaning = About 1,160 invented patients of an invented rheumatic heart disease clinic, with the faults that real registers have.
 open-not-yet = A register can be opened as soon as the engine is ready and the page is sealed; see the line at the top.
@@ -681,7 +681,6 @@ refusal-workbook_encrypted = The workbook is protected with a password. Save a c
 refusal-workbook_entities = The workbook contains definitions that no spreadsheet program writes. It was not opened.
 refusal-workbook_macros = The workbook contains macros. Save it as .xlsx, without macros.
 refusal-workbook_old_form = This is a workbook of the old kind (.xls). Save it as .xlsx.
-refusal-workbook_open_document = This is an OpenDocument workbook (.ods), which is not read yet. Save it as .xlsx or .csv.
 refusal-workbook_too_large = The workbook unpacks to more than this page can hold. Save only the list of patients in a workbook of its own.
 refusal-workbook_too_many_parts = The workbook has { $parts } parts, more than any list of patients needs. It was not opened.
 refusal-workbook_without_sheets = The workbook has no sheets with cells.

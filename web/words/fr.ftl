@@ -117,7 +117,7 @@ register-title = Registre
 
 register-lead = Ouvrez la liste des patients : une ligne par patient, depuis un tableur ou un fichier texte. Elle est lue sur cet ordinateur et nulle part ailleurs.
 open-file = Choisissez un fichier ou déposez-le ici
-open-file-hint = .csv, .tsv, .txt ou .xlsx
+open-file-hint = .csv, .tsv, .txt, .xlsx ou .ods
 open-demo = Ouvrir le registre inventé de démonstration
 demo-meaning = Environ 1 160 patients inventés d’une consultation inventée de cardiopathie rhumatismale, avec les défauts des vrais registres.
 open-not-yet = Un registre peut être ouvert dès que le moteur est prêt et la page scellée ; voyez la ligne en haut.
@@ -681,7 +681,6 @@ refusal-workbook_encrypted = Le classeur est protégé par un mot de passe. Enre
 refusal-workbook_entities = Le classeur contient des définitions qu’aucun tableur n’écrit. Il n’a pas été ouvert.
 refusal-workbook_macros = Le classeur contient des macros. Enregistrez-le en .xlsx, sans macros.
 refusal-workbook_old_form = C’est un classeur d’ancien type (.xls). Enregistrez-le en .xlsx.
-refusal-workbook_open_document = C’est un classeur OpenDocument (.ods), pas encore lu ici. Enregistrez-le en .xlsx ou .csv.
 refusal-workbook_too_large = Décompressé, le classeur dépasse ce que cette page peut contenir. Enregistrez seulement la liste des patients dans un classeur à part.
 refusal-workbook_too_many_parts = Le classeur a { $parts } parties, plus qu’il n’en faut pour une liste de patients. Il n’a pas été ouvert.
 refusal-workbook_without_sheets = Le classeur n’a aucune feuille avec des cellules.

@@ -23,8 +23,10 @@ _SMALL = 1_000_000
 """Parts below this size may be packed as tightly as they like: they cannot do harm."""
 
 _CHUNK = 1 << 20
+_OPEN_DOCUMENT = b"application/vnd.oasis.opendocument.spreadsheet"
+_OPEN_CONTENT = "content.xml"
 _COMPOUND = b"\xd0\xcf\x11\xe0\xa1\xb1\x1a\xe1"
-_DAMAGED = (
+DAMAGED = (
     zipfile.BadZipFile,
     zlib.error,
     struct.error,
@@ -96,13 +98,13 @@ def checked_archive(content: bytes) -> zipfile.ZipFile:
     ------
     Refusal
         ``workbook_damaged``, ``workbook_encrypted``, ``workbook_macros``, ``workbook_binary``
-        (.xlsb), ``workbook_open_document`` (.ods), ``not_a_table`` (another kind of archive),
+        (.xlsb), ``not_a_table`` (another kind of archive),
         ``workbook_too_many_parts`` (``parts``, ``most``), ``workbook_too_large`` (``bytes``,
         ``most``), ``workbook_bomb`` (``ratio``, ``most``) and ``workbook_entities``.
     """
     try:
         archive = zipfile.ZipFile(io.BytesIO(content))
-    except _DAMAGED:
+    except DAMAGED:
         raise Refusal("workbook_damaged") from None
     entries = archive.infolist()
     _check_kind(archive, {entry.filename for entry in entries})
@@ -154,11 +156,33 @@ def _check_kind(archive: zipfile.ZipFile, names: set[str]) -> None:
     if "xl/workbook.xml" not in lower:
         if "xl/workbook.bin" in lower:
             raise Refusal("workbook_binary")
-        if "content.xml" in lower and "mimetype" in lower:
-            raise Refusal("workbook_open_document")
-        raise Refusal("not_a_table")
+        if not is_open_document(archive):
+            raise Refusal("not_a_table")
+        _check_open_document(archive, lower)
     if any(name.endswith("vbaproject.bin") for name in lower):
         raise Refusal("workbook_macros")
+
+
+def is_open_document(archive: zipfile.ZipFile) -> bool:
+    """Return whether an archive says that it is an OpenDocument workbook (.ods), or a template of one."""
+    names = archive.namelist()
+    if "mimetype" not in names or _OPEN_CONTENT not in names:
+        return False
+    if archive.getinfo("mimetype").file_size > len(_OPEN_DOCUMENT) + 20:
+        return False
+    return b"".join(_pieces(archive, "mimetype")).startswith(_OPEN_DOCUMENT)
+
+
+def _check_open_document(archive: zipfile.ZipFile, lower: set[str]) -> None:
+    """Refuse an OpenDocument workbook with macros or a password: its parts are encrypted one by one."""
+    if any(name.startswith("basic/") for name in lower):
+        raise Refusal("workbook_macros")
+    listed = "META-INF/manifest.xml"
+    if listed in archive.namelist():
+        if archive.getinfo(listed).file_size > _SMALL:
+            raise Refusal("workbook_damaged")
+        if b"encryption-data" in b"".join(_pieces(archive, listed)):
+            raise Refusal("workbook_encrypted")
 
 
 def _check_ratio(unpacked: int, packed: int) -> None:
@@ -173,7 +197,7 @@ def _pieces(archive: zipfile.ZipFile, name: str | zipfile.ZipInfo) -> Iterator[b
         with archive.open(name) as part:
             while piece := part.read(_CHUNK):
                 yield piece
-    except _DAMAGED:
+    except DAMAGED:
         raise Refusal("workbook_damaged") from None
 
 

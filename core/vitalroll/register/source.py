@@ -3,15 +3,18 @@
 from __future__ import annotations
 
 import hashlib
+import io
+import zipfile
 from collections.abc import Callable, Iterator
 from dataclasses import dataclass
 
 import numpy as np
 
 from vitalroll.errors import Caution, Refusal
-from vitalroll.register.archive_check import is_archive, refuse_by_signature
+from vitalroll.register.archive_check import DAMAGED, is_archive, is_open_document, refuse_by_signature
 from vitalroll.register.delimited import Rows, how_divided, read_rows
 from vitalroll.register.encoding import decode
+from vitalroll.register.open_document import open_document
 from vitalroll.register.table import Column, Table, table_of
 from vitalroll.register.workbook import open_workbook
 
@@ -76,7 +79,7 @@ def open_source(
     heading_line: int | None = None,
     report: Report | None = None,
 ) -> Source:
-    """Open a register: delimited text in any common encoding, or an .xlsx workbook.
+    """Open a register: delimited text in any common encoding, or an .xlsx or .ods workbook.
 
     Parameters
     ----------
@@ -104,7 +107,7 @@ def open_source(
     fingerprint = hashlib.sha256(content).hexdigest()
     refuse_by_signature(content)
     if is_archive(content):
-        book = open_workbook(content, sheet)
+        book = open_document(content, sheet) if _is_ods(content) else open_workbook(content, sheet)
         table = table_of(_reporting(book.rows, 0, report), heading_line)
         return Source(
             fingerprint, name, "workbook", None, None, book.sheets, book.sheet, book.epoch, table,
@@ -120,6 +123,14 @@ def open_source(
         fingerprint, name, "delimited", decoded.encoding, how.delimiter, (), None, None, table,
         decoded.cautions + how.cautions + table.cautions,
     )  # fmt: skip
+
+
+def _is_ods(content: bytes) -> bool:
+    try:
+        return is_open_document(zipfile.ZipFile(io.BytesIO(content)))
+    except (*DAMAGED, Refusal):
+        # What is wrong with it is said by the reader of workbooks.
+        return False
 
 
 def _reporting(chunks: Iterator[Rows], total: int, report: Report | None) -> Iterator[Rows]:

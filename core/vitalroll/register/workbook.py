@@ -152,6 +152,11 @@ def _some(rows: Iterator[tuple[Any, ...]], cells: int) -> list[tuple[Any, ...]]:
     return got
 
 
+def number_as_shown(value: float) -> str:
+    """Return a number with fifteen digits, as a spreadsheet shows it; the rest is round-off."""
+    return format(value, ".15g")
+
+
 def _text(value: Any) -> str:
     if value is None:
         return ""
@@ -160,8 +165,7 @@ def _text(value: Any) -> str:
     if isinstance(value, bool):
         return "TRUE" if value else "FALSE"
     if isinstance(value, float):
-        # Fifteen digits, as a spreadsheet shows them; the rest is round-off.
-        return format(value, ".15g")
+        return number_as_shown(value)
     if isinstance(value, datetime.datetime):
         midnight = value.time() == datetime.time()
         return value.date().isoformat() if midnight else value.isoformat(sep=" ", timespec="seconds")

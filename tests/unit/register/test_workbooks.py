@@ -48,7 +48,7 @@ MAIN = {"xl/workbook.xml": b"<workbook/>"}
     ("parts", "code"),
     [
         ({"xl/workbook.bin": b""}, "workbook_binary"),
-        ({"mimetype": b"", "content.xml": b""}, "workbook_open_document"),
+        ({"mimetype": b"", "content.xml": b""}, "not_a_table"),
         ({"word/document.xml": b""}, "not_a_table"),
         (MAIN | {"xl/vbaProject.bin": b""}, "workbook_macros"),
         (MAIN | {"a.xml": b"<!DOCTYPE x>"}, "workbook_entities"),

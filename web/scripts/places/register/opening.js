@@ -4,7 +4,7 @@ import { h } from '../../parts/element.js';
 import { live } from '../../parts/live.js';
 import { refusalNote } from '../../parts/said.js';
 
-const ENDINGS = '.csv,.tsv,.txt,.xlsx';
+const ENDINGS = '.csv,.tsv,.txt,.xlsx,.ods';
 
 /** @param {import('../../app.js').App} app @param {ReturnType<typeof import('./reader.js').makeReader>} reader */
 export function openingBlock(app, reader) {
