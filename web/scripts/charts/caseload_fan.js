@@ -4,6 +4,8 @@ import { FAINT_RULE, INK, SOFT_INK, TEXT_SIZE, plateStyle, seriesStyle, spreadLa
 
 const LABEL_ROOM = 96;
 const MARGIN_LEFT = 52;
+/** Longer labels take two lines beside the drawing. */
+const ONE_LINE = 13;
 /** More bands than this hide each other: then only the first course has its own. */
 const MOST_BANDS = 1;
 
@@ -24,7 +26,7 @@ export function caseloadFan({ courses, held = [] }, { width, words }) {
   const plotHeight = height - 16 - 44;
   const ends = spreadLabels(points.map((line, position) => ({
     label: courses[position].label, position, y: 16 + (1 - line.at(-1).value / highest) * plotHeight,
-  })), height - 44);
+  })), height - 44, courses.some(({ label }) => label.length > ONE_LINE) ? 2 * TEXT_SIZE + 3 : undefined);
   return Plot.plot({
     ...plateStyle(width),
     height,
