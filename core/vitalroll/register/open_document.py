@@ -22,8 +22,11 @@ _STYLE = "{urn:oasis:names:tc:opendocument:xmlns:style:1.0}"
 _CELLS = (_TABLE + "table-cell", _TABLE + "covered-table-cell")
 _NUMBERS = ("float", "percentage", "currency")
 _CONTENT = "content.xml"
-_DEEPEST = 40
-"""Spans within spans: a text that a person wrote has a few at most."""
+_DEEPEST = 60
+"""Elements within elements: what a person wrote has a dozen at most."""
+
+_PIECE = 4_096
+"""So few bytes at once that no depth is reached that a browser's stack cannot bear."""
 
 
 @dataclass
@@ -78,9 +81,19 @@ def open_document(content: bytes, sheet: str | None = None) -> Workbook:
 
 def _events(archive: zipfile.ZipFile) -> Iterator[tuple[str, Any]]:
     """Give the beginnings and ends of elements; whatever goes wrong means that the workbook is damaged."""
+    parser = ElementTree.XMLPullParser(events=("start", "end"))
+    depth = 0
     try:
         with archive.open(_CONTENT) as part:
-            yield from ElementTree.iterparse(part, events=("start", "end"))
+            while piece := part.read(_PIECE):
+                parser.feed(piece)
+                for event, element in parser.read_events():
+                    depth += 1 if event == "start" else -1
+                    if depth > _DEEPEST:
+                        raise Refusal("workbook_damaged")
+                    yield event, element
+        parser.close()
+        yield from parser.read_events()
     except (*DAMAGED, ElementTree.ParseError):
         raise Refusal("workbook_damaged") from None
 
