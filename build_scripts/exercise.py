@@ -88,7 +88,7 @@ def _comparisons(ask: Any, group: str) -> None:
     ask("compare.alike", **pair, timing={"known": "later", "landmark_days": 180})
     ask("compare.difference", **pair)
     ask("compare.intervals", **pair)
-    ask("compare.rank_test", group=group)
+    ask("compare.rank_test", group=group, stratify="sex", scores={"Mild": 1, "Moderate": 2, "Severe": 3})
     ask("compare.cox", covariates=[{"id": group, "reference": "Mild"}, {"id": "age", "per": 10}])
     ask("compare.subdistribution", covariates=[{"id": group}], interest=["died_of_disease"])
 

@@ -909,11 +909,57 @@ rank-weight-hint = Choose it before looking at the result.
 rank-log_rank = Equal: log-rank
 rank-gehan = Number at risk: Gehan
 rank-tarone_ware = Its square root: Tarone-Ware
-rank-fleming_harrington = Survival so far: Fleming-Harrington
+rank-fleming_harrington = Powers of survival: Fleming-Harrington
 rank-method-log_rank = Log-rank test (Mantel 1966; Peto & Peto 1972), hypergeometric variance.
 rank-method-gehan = Gehan's generalised Wilcoxon test: weights are the numbers at risk, so early differences count more.
 rank-method-tarone_ware = Tarone & Ware (1977): weights are square roots of the numbers at risk.
-rank-method-fleming_harrington = Fleming & Harrington (1991), weight S(t−): early differences count more.
+rank-method-fleming_harrington = Fleming & Harrington (1991), weight S(t−)^{ $rho } (1 − S(t−))^{ $gamma }, S pooled over the groups.
+rank-peto_peto = Survival so far, Peto and Peto’s
+rank-rho = Power of survival so far
+rank-rho-hint = Above 0: early differences count more.
+rank-gamma = Power of what has been lost
+rank-gamma-hint = Above 0: late differences count more.
+rank-power-fault = Between 0 and { $greatest }.
+rank-stratify = Compare within levels of
+rank-stratify-hint = Patients are compared only with those of the same level.
+rank-stratify-none = No column
+rank-ordered = Have the groups an order?
+rank-ordered-hint = Only an order known before looking.
+rank-ordered-no = No
+rank-ordered-yes = Yes, by scores
+rank-score-of = Score of “{ $level }”
+rank-score-fault = A number is missing.
+rank-stratified = Compared within levels of “{ $covariate }”: p { $p }. Without that: p { $crude }. If these disagree, the column explains part of the difference, or hid it.
+rank-trend-up = Along the order of the groups outcomes come faster the higher the score (z { $z }, p { $p }).
+rank-trend-down = Along the order of the groups outcomes come more slowly the higher the score (z { $z }, p { $p }).
+rank-trend-chance = Chance alone could explain what there is of a trend along the order of the groups (z { $z }, p { $p }). A middle group can still differ from both ends.
+rank-pairs-caption = Each pair of groups by itself, and adjusted because { $n ->
+    [one] { $n } pair is
+   *[other] { $n } pairs are
+  } compared
+rank-pair = Groups
+rank-pair-of = { $first } and { $second }
+adjusted-p = p, adjusted
+not-tested = not tested
+rank-method-peto_peto = Peto & Peto’s generalised Wilcoxon test (1972): weights are the product of 1 − d/(n + 1), so early differences count more.
+rank-method-stratified = Scores and variances are summed over the strata.
+rank-method-trend = Test for trend by Tarone (1975).
+rank-method-pairs = Pairs adjusted by Holm (1979).
+caution-curves_cross = The curves of “{ $first }” and “{ $second }” cross at about { NUMBER($years, maximumFractionDigits: 1) } years; before that “{ $above }” was above. One test or one ratio for the whole of follow-up hides this: compare at chosen times, or by the average time within a horizon.
+caution-stratum_not_recorded = { $n ->
+    [one] { $n } patient has
+   *[other] { $n } patients have
+  } nothing in the column to compare within, and { $n ->
+    [one] is
+   *[other] are
+  } left out.
+caution-strata_say_nothing = { $n ->
+    [one] One level says
+   *[other] { $n } levels say
+  } nothing, because only one group is there or nobody had the outcome: { $strata }. Merge levels if there are many.
+refusal-stratified_by_itself = Groups cannot be compared within levels of the column that makes them. Choose another column.
+refusal-score_missing = “{ $level }” has no score. Give every group a number.
+refusal-scores_alike = All groups have the same score, so there is no order. Give them different numbers.
 
 intervals-title = Interval by interval
 intervals-lead = Of those who began each interval in “{ $exposed }” and in “{ $reference }”, how many met the outcome in it. Those lost or withdrawn in an interval count for half of it.

@@ -909,11 +909,57 @@ rank-weight-hint = À choisir avant de regarder le résultat.
 rank-log_rank = Égal : log-rank
 rank-gehan = Effectif à risque : Gehan
 rank-tarone_ware = Sa racine carrée : Tarone-Ware
-rank-fleming_harrington = Survie jusque-là : Fleming-Harrington
+rank-fleming_harrington = Puissances de la survie : Fleming-Harrington
 rank-method-log_rank = Test du log-rank (Mantel 1966 ; Peto & Peto 1972), variance hypergéométrique.
 rank-method-gehan = Test de Wilcoxon généralisé par Gehan : les poids sont les effectifs à risque, les différences précoces comptent davantage.
 rank-method-tarone_ware = Tarone & Ware (1977) : les poids sont les racines carrées des effectifs à risque.
-rank-method-fleming_harrington = Fleming & Harrington (1991), poids S(t−) : les différences précoces comptent davantage.
+rank-method-fleming_harrington = Fleming & Harrington (1991), poids S(t−)^{ $rho } (1 − S(t−))^{ $gamma }, S commune à tous les groupes.
+rank-peto_peto = Survie jusque-là, selon Peto et Peto
+rank-rho = Puissance de la survie jusque-là
+rank-rho-hint = Au-dessus de 0 : les différences précoces comptent davantage.
+rank-gamma = Puissance de ce qui est perdu
+rank-gamma-hint = Au-dessus de 0 : les différences tardives comptent davantage.
+rank-power-fault = Entre 0 et { $greatest }.
+rank-stratify = Comparer au sein des modalités de
+rank-stratify-hint = Les patients ne sont comparés qu’à ceux de la même modalité.
+rank-stratify-none = Aucune colonne
+rank-ordered = Les groupes ont-ils un ordre ?
+rank-ordered-hint = Seulement un ordre connu avant de regarder.
+rank-ordered-no = Non
+rank-ordered-yes = Oui, par des scores
+rank-score-of = Score de « { $level } »
+rank-score-fault = Il manque un nombre.
+rank-stratified = Comparaison au sein des modalités de « { $covariate } » : p { $p }. Sans cela : p { $crude }. Si les deux ne concordent pas, la colonne explique une partie de la différence, ou la cachait.
+rank-trend-up = Dans l’ordre des groupes, les événements viennent d’autant plus vite que le score est élevé (z { $z }, p { $p }).
+rank-trend-down = Dans l’ordre des groupes, les événements viennent d’autant plus lentement que le score est élevé (z { $z }, p { $p }).
+rank-trend-chance = Le hasard seul pourrait expliquer la tendance observée dans l’ordre des groupes (z { $z }, p { $p }). Un groupe du milieu peut malgré tout différer des deux extrêmes.
+rank-pairs-caption = Chaque paire de groupes pour elle-même, puis ajustée parce que { $n ->
+    [one] { $n } paire est comparée
+   *[other] { $n } paires sont comparées
+  }
+rank-pair = Groupes
+rank-pair-of = { $first } et { $second }
+adjusted-p = p ajusté
+not-tested = non testé
+rank-method-peto_peto = Test de Wilcoxon généralisé par Peto & Peto (1972) : les poids sont le produit des 1 − d/(n + 1), les différences précoces comptent davantage.
+rank-method-stratified = Scores et variances sont additionnés sur les strates.
+rank-method-trend = Test de tendance de Tarone (1975).
+rank-method-pairs = Paires ajustées selon Holm (1979).
+caution-curves_cross = Les courbes de « { $first } » et de « { $second } » se croisent à environ { NUMBER($years, maximumFractionDigits: 1) } ans ; avant, « { $above } » était au-dessus. Un seul test ou un seul rapport pour tout le suivi le cache : comparez à des moments choisis, ou par le temps moyen dans un horizon.
+caution-stratum_not_recorded = { $n ->
+    [one] { $n } patient n’a
+   *[other] { $n } patients n’ont
+  } rien dans la colonne au sein de laquelle on compare, et { $n ->
+    [one] est laissé
+   *[other] sont laissés
+  } de côté.
+caution-strata_say_nothing = { $n ->
+    [one] Une modalité ne dit
+   *[other] { $n } modalités ne disent
+  } rien, car un seul groupe s’y trouve ou personne n’y a eu l’événement : { $strata }. Regroupez les modalités si elles sont nombreuses.
+refusal-stratified_by_itself = On ne peut pas comparer les groupes au sein des modalités de la colonne qui les forme. Choisissez une autre colonne.
+refusal-score_missing = « { $level } » n’a pas de score. Donnez un nombre à chaque groupe.
+refusal-scores_alike = Tous les groupes ont le même score, il n’y a donc pas d’ordre. Donnez-leur des nombres différents.
 
 intervals-title = Intervalle par intervalle
 intervals-lead = Parmi ceux qui ont commencé chaque intervalle dans « { $exposed } » et dans « { $reference } », combien y ont connu l’événement. Les perdus de vue et autres sorties d’un intervalle comptent pour moitié.

@@ -12,7 +12,7 @@ from scipy.special import chdtrc
 from vitalroll.errors import Refusal
 from vitalroll.outcomes.risk_table import RiskTable
 
-Weight = Literal["log_rank", "gehan", "tarone_ware", "fleming_harrington"]
+Weight = Literal["log_rank", "gehan", "tarone_ware", "peto_peto", "fleming_harrington"]
 
 _NEGLIGIBLE = 1e-12
 """Share of the largest eigenvalue below which a direction of the covariance holds nothing."""
@@ -26,6 +26,28 @@ class GroupCounts:
     n: int
     observed: int
     expected: float
+
+
+@dataclass(frozen=True)
+class WeightedSums:
+    """What every rank test is made of, summed over strata.
+
+    Parameters
+    ----------
+    score : array, shape (k,)
+        Weighted outcomes observed less expected, in each group.
+    variance : array, shape (k, k)
+        Its covariance if all groups had the same hazards.
+    observed, expected : arrays, shape (k,)
+        Unweighted.
+    """
+
+    levels: tuple[str, ...]
+    n: tuple[int, ...]
+    score: np.ndarray
+    variance: np.ndarray
+    observed: np.ndarray
+    expected: np.ndarray
 
 
 @dataclass(frozen=True)
@@ -55,9 +77,11 @@ def rank_test(
         One mapping for each stratum; a single one for an unstratified test. All have the same levels.
     interest : names from MEANINGS
     weight : str
-        ``log_rank`` 1; ``gehan`` n; ``tarone_ware`` sqrt n; ``fleming_harrington`` S(t-)^rho [1-S(t-)]^gamma
-        with S pooled over the groups of the stratum. To be chosen before looking.
+        ``log_rank`` 1; ``gehan`` n; ``tarone_ware`` sqrt n; ``peto_peto`` prod [1 - d/(n+1)] up to
+        and with t; ``fleming_harrington`` S(t-)^rho [1-S(t-)]^gamma;
+        survival is pooled over the groups of the stratum. To be chosen before looking.
     rho, gamma : float
+        Of Fleming and Harrington's weight only.
 
     Returns
     -------
@@ -80,9 +104,37 @@ def rank_test(
     Mantel (1966) Cancer Chemother Rep 50:163-170; Peto & Peto (1972) JRSS A 135:185-206; Gehan (1965)
     Biometrika 52:203-223; Tarone & Ware (1977) Biometrika 64:156-160; Fleming & Harrington (1991).
     """
+    sums = weighted_sums(strata, interest, weight=weight, rho=rho, gamma=gamma)
+    chi_squared, df = _quadratic_form(sums.score, sums.variance)
+    if df == 0:
+        raise Refusal("nothing_to_compare")
+    return RankTest(
+        weight=weight,
+        groups=tuple(
+            GroupCounts(level, sums.n[i], int(sums.observed[i]), float(sums.expected[i]))
+            for i, level in enumerate(sums.levels)
+        ),
+        chi_squared=chi_squared,
+        df=df,
+        p=float(chdtrc(df, chi_squared)),
+    )
+
+
+def weighted_sums(
+    strata: Sequence[Mapping[str, RiskTable]],
+    interest: Collection[str],
+    *,
+    weight: Weight = "log_rank",
+    rho: float = 1.0,
+    gamma: float = 0.0,
+) -> WeightedSums:
+    """Sum up score and covariance over strata; parameters and refusals as in ``rank_test``.
+
+    ``nothing_to_compare`` is left to the test that is made of them.
+    """
     if weight not in get_args(Weight):
         raise Refusal("not_one_of", field="weight", given=weight, choices=list(get_args(Weight)))
-    levels = list(strata[0])
+    levels = list(strata[0]) if strata else []
     if len(levels) < 2:
         raise Refusal("one_group", field="group")
     k = len(levels)
@@ -99,20 +151,13 @@ def rank_test(
         expected += part[2]
     if observed.sum() == 0:
         raise Refusal("no_events_to_compare")
-    chi_squared, df = _quadratic_form(score, variance)
-    if df == 0:
-        raise Refusal("nothing_to_compare")
-    return RankTest(
-        weight=weight,
-        groups=tuple(
-            GroupCounts(
-                level, sum(tables[level].n for tables in strata), int(observed[i]), float(expected[i])
-            )
-            for i, level in enumerate(levels)
-        ),
-        chi_squared=chi_squared,
-        df=df,
-        p=float(chdtrc(df, chi_squared)),
+    return WeightedSums(
+        levels=tuple(levels),
+        n=tuple(sum(tables[level].n for tables in strata) for level in levels),
+        score=score,
+        variance=variance,
+        observed=observed,
+        expected=expected,
     )
 
 
@@ -152,6 +197,8 @@ def _weights(n: np.ndarray, d: np.ndarray, weight: Weight, rho: float, gamma: fl
         return n
     if weight == "tarone_ware":
         return np.sqrt(n)
+    if weight == "peto_peto":
+        return np.cumprod(1 - d / (n + 1))
     before = np.concatenate(([1.0], np.cumprod(1 - d / n)[:-1]))
     return before**rho * (1 - before) ** gamma
 

@@ -12,7 +12,6 @@ from vitalroll.comparison.cox import cox
 from vitalroll.comparison.design import Choice
 from vitalroll.comparison.intervals import compare_intervals
 from vitalroll.comparison.milestone import milestone_difference
-from vitalroll.comparison.rank_tests import Weight, rank_test
 from vitalroll.comparison.risk_sums import Ties
 from vitalroll.desk.fields import Between
 from vitalroll.desk.memory import Memory
@@ -79,16 +78,6 @@ class IntervalsRequest:
     step: Step = "year"
     intervals: Annotated[int, Between(1, 240)] = 5
     confidence: Confidence = 0.95
-    timing: GroupTiming = NOT_SAID
-
-
-@dataclass(frozen=True)
-class RankTestRequest:
-    """Fields of ``compare.rank_test``."""
-
-    group: str
-    interest: tuple[str, ...] = DEATHS
-    weight: Weight = "log_rank"
     timing: GroupTiming = NOT_SAID
 
 
@@ -167,7 +156,7 @@ def difference(memory: Memory, request: DifferenceRequest, report: Any) -> dict[
         ],
         "cautions": [
             *timing_cautions(request.timing),
-            *_few_events({request.exposed: exposed, request.reference: reference}, request.interest),
+            *few_events({request.exposed: exposed, request.reference: reference}, request.interest),
         ],
     }
 
@@ -218,31 +207,8 @@ def intervals(memory: Memory, request: IntervalsRequest, report: Any) -> dict[st
         ],
         "cautions": [
             *timing_cautions(request.timing),
-            *_few_events({request.exposed: exposed, request.reference: reference}, request.interest),
+            *few_events({request.exposed: exposed, request.reference: reference}, request.interest),
             *found.cautions,
-        ],
-    }
-
-
-def rank_tests(memory: Memory, request: RankTestRequest, report: Any) -> dict[str, Any]:
-    """Answer ``compare.rank_test``: a rank test over all groups of a covariate.
-
-    Returns
-    -------
-    dict
-        ``weight``, ``groups``, ``chi_squared``, ``df``, ``p`` as in ``rank_tests.RankTest``;
-        ``left_out``; ``cautions``.
-    """
-    groups = groups_of(compared(memory, request.timing), request.group)
-    tables = _named(groups)
-    result = rank_test([tables], request.interest, weight=request.weight)
-    return {
-        **{field.name: getattr(result, field.name) for field in dataclasses.fields(result)},
-        "left_out": groups.left_out,
-        "cautions": [
-            *timing_cautions(request.timing),
-            *groups.cautions,
-            *_few_events(tables, request.interest),
         ],
     }
 
@@ -263,18 +229,20 @@ def _pair(cohort: Cohort, group: str, exposed: str, reference: str) -> tuple[Ris
     """Return the risk tables of two different groups; refuse any other pair by its field."""
     if exposed == reference:
         raise Refusal("same_group", field="reference", level=reference)
-    tables = _named(groups_of(cohort, group))
+    tables = named_tables(groups_of(cohort, group))
     for field, level in (("exposed", exposed), ("reference", reference)):
         if level not in tables:
             raise Refusal("unknown_level", field=field, covariate=group, level=level)
     return tables[exposed], tables[reference]
 
 
-def _named(groups: Groups) -> dict[str, RiskTable]:
+def named_tables(groups: Groups) -> dict[str, RiskTable]:
+    """Return the risk tables of groups by their names."""
     return {str(level): table for level, table in groups.tables.items()}
 
 
-def _few_events(tables: dict[str, RiskTable], interest: tuple[str, ...]) -> list[Caution]:
+def few_events(tables: dict[str, RiskTable], interest: tuple[str, ...]) -> list[Caution]:
+    """Return a caution for each group with hardly any outcomes."""
     found = []
     for level, table in tables.items():
         events = int(table.events(interest).sum())
@@ -287,6 +255,5 @@ TASKS = {
     "compare.alike": (AlikeRequest, alike_groups),
     "compare.difference": (DifferenceRequest, difference),
     "compare.intervals": (IntervalsRequest, intervals),
-    "compare.rank_test": (RankTestRequest, rank_tests),
     "compare.cox": (CoxRequest, regression),
 }

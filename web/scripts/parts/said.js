@@ -51,6 +51,9 @@ export function named(app, parameters = {}) {
   }
   // A caution about everybody carries level null.
   if ('level' in values) values.level = levelName(app, app.store.state.question.group, values.level);
+  for (const name of ['first', 'second', 'above']) {
+    if (typeof values[name] === 'string') values[name] = levelName(app, app.store.state.question.group, values[name]);
+  }
   for (const name of ['covariate', 'column', 'group', 'id']) {
     if (typeof values[name] === 'string') values[name] = covariateName(app, values[name]);
   }
