@@ -67,3 +67,13 @@ def test_a_missing_score_asks_nothing_and_equal_scores_are_refused(page: Page) -
     page.locator("#compare-score-1").press("Tab")
     expect(page.locator("#compare-score-1-fault")).to_contain_text("A number is missing")
     expect(page.locator("#rank-test .refusal")).to_have_count(0)
+
+
+def test_groups_found_in_different_ways_are_said_beside_every_comparison(page: Page) -> None:
+    blocks = ("alike", "difference", "rank-test", "intervals", "cox", "subdistribution")
+    page.locator("#compare-found").select_option("differently")
+    for block in blocks:
+        expect(page.locator(f"#{block} .cautions")).to_contain_text("lead time", timeout=ANSWER_MS)
+    page.locator("#compare-found").select_option("alike")
+    for block in blocks:
+        expect(page.locator(f"#{block}")).not_to_contain_text("lead time", timeout=ANSWER_MS)

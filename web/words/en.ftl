@@ -1103,6 +1103,11 @@ e-value-of-unclear = The difference is unclear already, so nothing hidden is nee
     [common] , on the scale of risks
    *[other] {""}
   }; VanderWeele & Ding 2017).
+compare-found = How were the patients found?
+compare-found-hint = For example by screening or a search for cases, or because they fell ill.
+compare-found-alike = In the same way in all groups
+compare-found-differently = In different ways
+caution-found_differently = The groups were found in different ways. Those found by looking for the illness are found earlier, so they live longer from then on even if nothing helped them (lead time), and a search finds more of the slow cases. Compare within the levels of a column that says how they were found, or count from an event that is the same for all.
 caution-group_timing_not_said = It was not said when the groups became known. If they were made by something after the start, those in the group had to live until then, and the comparison flatters it.
 caution-counted_from_landmark = Counted from { $days } days after the start, among those still followed then. A group entered after that day must not be used here.
 caution-groups_unlike = The groups differ in { $covariates } (standardised difference up to { NUMBER($most, maximumFractionDigits: 2) }). Take these into account before believing a difference in outcome.

@@ -1103,6 +1103,11 @@ e-value-of-unclear = L’écart est déjà incertain : aucun facteur caché n�
     [common] , à l’échelle des risques
    *[other] {""}
   } ; VanderWeele et Ding 2017).
+compare-found = Comment les patients ont-ils été trouvés ?
+compare-found-hint = Par exemple par dépistage ou recherche de cas, ou parce qu’ils sont tombés malades.
+compare-found-alike = De la même façon dans tous les groupes
+compare-found-differently = De façons différentes
+caution-found_differently = Les groupes ont été trouvés de façons différentes. Ceux que l’on trouve en cherchant la maladie sont trouvés plus tôt et vivent donc plus longtemps à partir de là, même si rien ne les a aidés (avance au diagnostic), et une recherche trouve davantage de cas lents. Comparez au sein des modalités d’une colonne qui dit comment ils ont été trouvés, ou comptez à partir d’un événement qui est le même pour tous.
 caution-group_timing_not_said = Il n’a pas été dit quand les groupes ont été connus. S’ils résultent de quelque chose de postérieur au début, ceux du groupe ont dû vivre jusque-là, et la comparaison le flatte.
 caution-counted_from_landmark = Compté à partir de { $days } jours après le début, parmi ceux encore suivis alors. Un groupe formé après ce jour ne doit pas servir ici.
 caution-groups_unlike = Les groupes diffèrent par { $covariates } (différence standardisée jusqu’à { NUMBER($most, maximumFractionDigits: 2) }). Prenez-les en compte avant de croire à un écart de résultats.

@@ -34,10 +34,14 @@ class GroupTiming:
     """When it was known who belongs to which group: at the ``start``, only ``later``, or not said (None).
 
     ``landmark_days``, for groups known later: the day after the start from which time is counted.
+    ``found_alike``: whether the patients of all groups were found in the same way, or not said (None). Who is
+    found by looking for the illness is found earlier, and lives longer from then on without living longer
+    (lead time; Feinleib & Zelen 1969 Arch Environ Health 19:412-415).
     """
 
     known: Literal["start", "later"] | None = None
     landmark_days: Annotated[int, Between(1, 20_000)] | None = None
+    found_alike: bool | None = None
 
 
 NOT_SAID = GroupTiming()
@@ -117,12 +121,15 @@ def compared(memory: Memory, timing: GroupTiming) -> Cohort:
 
 
 def timing_cautions(timing: GroupTiming) -> list[Caution]:
-    """Return what has to be said of a comparison because of when its groups became known."""
+    """Return what has to be said of a comparison because of when its groups became known, and how found."""
+    cautions = []
     if timing.known is None:
-        return [Caution("group_timing_not_said")]
-    if timing.known == "later":
-        return [Caution("counted_from_landmark", {"days": timing.landmark_days})]
-    return []
+        cautions.append(Caution("group_timing_not_said"))
+    elif timing.known == "later":
+        cautions.append(Caution("counted_from_landmark", {"days": timing.landmark_days}))
+    if timing.found_alike is False:
+        cautions.append(Caution("found_differently"))
+    return cautions
 
 
 def alike_groups(memory: Memory, request: AlikeRequest, report: Any) -> dict[str, Any]:

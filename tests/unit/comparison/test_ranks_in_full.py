@@ -10,6 +10,7 @@ from vitalroll.comparison.crossing import crossings
 from vitalroll.comparison.ordered import trend_test
 from vitalroll.comparison.pairwise import holm, pairwise
 from vitalroll.comparison.rank_tests import rank_test, weighted_sums
+from vitalroll.desk.comparison_tasks import GroupTiming
 from vitalroll.desk.memory import Memory
 from vitalroll.desk.rank_tasks import RankTestRequest, rank_tests
 from vitalroll.errors import Refusal
@@ -160,3 +161,10 @@ def test_the_desk_refuses_what_cannot_be_meant(request_: dict, code: str) -> Non
     with pytest.raises(Refusal) as refused:
         asked(random_cohort(5, 40), **request_)
     assert refused.value.code == code
+
+
+def test_groups_found_in_different_ways_are_cautioned_against_only_when_said() -> None:
+    subject = random_cohort(6, 60)
+    for alike, said in ((None, False), (True, False), (False, True)):
+        cautions = asked(subject, timing=GroupTiming(known="start", found_alike=alike))["cautions"]
+        assert ("found_differently" in [caution.code for caution in cautions]) is said

@@ -24,7 +24,7 @@ export function pairRequest(state) {
 }
 
 /** When the groups became known, as the engine asks for it. @param {import('../../store.js').State} state */
-export function timingOf({ compare: { known, landmarkMonths } }) {
+export function timingOf({ compare: { known, landmarkMonths, foundAlike } }) {
   const landmark = known === 'later' && landmarkMonths > 0;
-  return { known, landmark_days: landmark ? Math.max(1, Math.round(landmarkMonths * DAYS_PER_YEAR / 12)) : null };
+  return { known, landmark_days: landmark ? Math.max(1, Math.round(landmarkMonths * DAYS_PER_YEAR / 12)) : null, found_alike: foundAlike };
 }
