@@ -79,6 +79,7 @@ def _outcomes(ask: Any, group: str) -> None:
     ask("outcomes.life_table", group=group)
     ask("outcomes.leaving", group=group)
     ask("outcomes.mean_time", group=group)
+    ask("outcomes.tipping", group=group)
     for scale in ("year", "since_start", "age"):
         ask("outcomes.rates", group=group, by=scale)
 

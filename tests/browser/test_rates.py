@@ -64,3 +64,20 @@ def test_average_time_and_what_lies_ahead(site: SiteServer, opened: Callable, na
     page.locator("#mean-time-horizon").press("Tab")
     page.locator("#mean-time .refusal").wait_for(timeout=ANSWER_MS)
     assert "shortest ends after" in page.locator("#mean-time .refusal").inner_text()
+
+
+def test_what_the_losses_could_change(site: SiteServer, opened: Callable, native: Callable) -> None:
+    page = opened(site.address).page
+    page.locator("#open-demo").click()
+    page.get_by_text("person-years.").first.wait_for(timeout=ANSWER_MS)
+    go(page, "Outcomes")
+    page.locator("#outcomes-group").select_option(label=GROUP)
+    page.locator("#tipping .sentence").nth(2).wait_for(timeout=ANSWER_MS)
+    expected = native("outcomes.tipping", {"interest": DEATHS, "group": native.group})
+    page.locator("#tipping details summary").click()
+    rows = table_rows(page, "by the hazard of the lost")
+    for i, row in enumerate(rows):
+        for cell, group in zip(row[1:], expected["groups"], strict=True):
+            estimate = group["survival"][i]
+            wanted = [100 * estimate[name] for name in ("value", "lower", "upper")]
+            assert numbers(cell) == pytest.approx(wanted, abs=0.051)

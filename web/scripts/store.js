@@ -29,7 +29,7 @@ export function beginnings(language) {
     /** Answer of register.build, or null. */
     cohort: null,
     question: { interest: ['died_of_disease', 'died_of_other_cause', 'died_cause_unknown'], group: null },
-    outcomes: { interval: 'log-log', step: 'year', ratesBy: 'year', horizon: null, further: 2 },
+    outcomes: { interval: 'log-log', step: 'year', ratesBy: 'year', horizon: null, further: 2, lostYears: 3 },
     compare: { exposed: null, reference: null, step: 'year', intervals: 5, weight: 'log_rank', rho: 1, gamma: 0, stratify: null, ordered: false, scores: {}, covariates: [], ties: 'efron', competing: null, known: null, landmarkMonths: null, foundAlike: null },
     caseload: {
       years: 5, basis: 'history', perYear: null, incidence: null, population: null, growth: 0, damping: 0.8,

@@ -866,6 +866,26 @@ mean-time-method = Area under the product-limit curve (Irwin 1949; Royston & Par
 refusal-horizon_beyond_follow_up = Not everyone's curve goes so far: the shortest ends after { NUMBER($years, maximumFractionDigits: 1) } years. Choose an earlier year.
 refusal-curve_restarts = Nobody was under observation for some time, so the curve does not go through from the start and has no average.
 
+tipping-title = If the lost fared otherwise
+tipping-years = Survival at so many years
+tipping-sentence = { $group }, { $lost } of { $n } lost: { $alike } free of the outcome at { $years } years if the lost fared like those who stayed, { $double } if their hazard doubled, { $most } if it was { $times } times as high.
+tipping-clear-tips = The difference between { $group } and { $first } is no longer clear if those lost from { $better } had { $times } times the hazard of those who stayed.
+tipping-clear-holds = The difference between { $group } and { $first } stays clear even if those lost from { $better } had { $times } times the hazard of those who stayed.
+tipping-unclear-tips = No clear difference between { $group } and { $first } as it stands; there would be one if those lost from { $better } had { $times } times the hazard of those who stayed.
+tipping-unclear-holds = No clear difference between { $group } and { $first }, nor would there be one if those lost from { $better } had { $times } times the hazard of those who stayed.
+tipping-does-not-mean = Nobody knows how the lost fared unless some are traced. Ask of each multiple whether it could be true here.
+tipping-figure = Free of the outcome at { $years } years, by how the lost fared
+tipping-figure-described = { $groups ->
+    [one] A line with its 95% band that falls as the lost are supposed to have fared worse; the table below holds the values.
+   *[other] { $groups } lines with their 95% bands that fall as the lost are supposed to have fared worse; the table below holds the values.
+  }
+axis-delta = Hazard of the lost (times)
+tipping-delta = Hazard of the lost, times that of those who stayed
+tipping-caption = Free of the outcome at { $years } years (95% limits), by the hazard of the lost
+tipping-method = The lost stay at risk after their last visit with a hazard so many times that of the others (Zhao and others 2014; Lipkovich and others 2016), worked out as an expectation. Limits from { $resamples } resamples of the patients, seed { $seed }. 1 is the product limit.
+caution-few_lost = Only { $lost } were lost, so little can change.
+refusal-lost_is_the_outcome = Being lost is one of the outcomes counted, so nothing about the lost is unknown here.
+
 ## Compare
 
 compare-title = Compare

@@ -866,6 +866,26 @@ mean-time-method = Aire sous la courbe produit-limite (Irwin 1949 ; Royston et 
 refusal-horizon_beyond_follow_up = Toutes les courbes ne vont pas si loin : la plus courte s’arrête après { NUMBER($years, maximumFractionDigits: 1) } ans. Choisissez une année plus précoce.
 refusal-curve_restarts = Personne n’était observé pendant un certain temps : la courbe ne va pas d’un trait depuis le début et n’a pas de moyenne.
 
+tipping-title = Si les perdus de vue ont évolué autrement
+tipping-years = Survie à tant d’années
+tipping-sentence = { $group }, { $lost } perdus de vue sur { $n } : { $alike } sans l’événement à { $years } ans s’ils ont évolué comme ceux restés, { $double } si leur risque était double, { $most } s’il était { $times } fois plus élevé.
+tipping-clear-tips = L’écart entre { $group } et { $first } n’est plus net si les perdus de vue de { $better } avaient { $times } fois le risque de ceux restés.
+tipping-clear-holds = L’écart entre { $group } et { $first } reste net même si les perdus de vue de { $better } avaient { $times } fois le risque de ceux restés.
+tipping-unclear-tips = Pas d’écart net entre { $group } et { $first } en l’état ; il y en aurait un si les perdus de vue de { $better } avaient { $times } fois le risque de ceux restés.
+tipping-unclear-holds = Pas d’écart net entre { $group } et { $first }, et il n’y en aurait pas non plus si les perdus de vue de { $better } avaient { $times } fois le risque de ceux restés.
+tipping-does-not-mean = Personne ne sait ce que sont devenus les perdus de vue si l’on n’en recherche pas une partie. Demandez-vous pour chaque multiple s’il est plausible ici.
+tipping-figure = Sans l’événement à { $years } ans, selon l’évolution des perdus de vue
+tipping-figure-described = { $groups ->
+    [one] Une ligne avec sa bande à 95 %, qui baisse à mesure que l’on suppose une évolution plus mauvaise ; le tableau contient les valeurs.
+   *[other] { $groups } lignes avec leurs bandes à 95 %, qui baissent à mesure que l’on suppose une évolution plus mauvaise ; le tableau contient les valeurs.
+  }
+axis-delta = Risque des perdus de vue (fois)
+tipping-delta = Risque des perdus de vue, en multiple de celui de ceux restés
+tipping-caption = Sans l’événement à { $years } ans (limites à 95 %), selon le risque des perdus de vue
+tipping-method = Après leur dernière visite, les perdus de vue restent à risque avec un risque multiple de celui des autres (Zhao et autres 2014 ; Lipkovich et autres 2016), calculé comme une espérance. Limites d’après { $resamples } rééchantillonnages des patients, graine { $seed }. 1 est la méthode produit-limite.
+caution-few_lost = Seulement { $lost } ont été perdus de vue : peu de chose peut changer.
+refusal-lost_is_the_outcome = Être perdu de vue fait partie des événements comptés : rien n’est inconnu ici à leur sujet.
+
 ## Compare
 
 compare-title = Comparer

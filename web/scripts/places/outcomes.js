@@ -7,6 +7,7 @@ import { lifeTableBlock } from './outcomes/life_table.js';
 import { meanTimeBlock } from './outcomes/mean_time.js';
 import { ratesBlock } from './outcomes/rates.js';
 import { survivalBlock } from './outcomes/survival.js';
+import { tippingBlock } from './outcomes/tipping.js';
 
 /** @param {import('../app.js').App} app */
 export function outcomesPlace(app) {
@@ -20,6 +21,7 @@ export function outcomesPlace(app) {
       survivalBlock(app),
       lifeTableBlock(app),
       leavingBlock(app),
+      tippingBlock(app),
       ratesBlock(app),
       meanTimeBlock(app),
     ];
