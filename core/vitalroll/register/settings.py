@@ -8,6 +8,7 @@ misspellings of a value that stands in several rows.
 from __future__ import annotations
 
 import json
+import re
 from collections.abc import Callable, Mapping
 from dataclasses import dataclass
 from datetime import date
@@ -28,6 +29,9 @@ KIND, VERSION = "vitalroll-settings", 1
 SEVERAL_ROWS = 3
 LONGEST = 1_000_000
 """A longer text is no file of settings: these take a few thousand letters."""
+
+DEEPEST = 20
+"""No file of settings is nested deeper than a handful of levels."""
 
 _LISTED = 30
 
@@ -187,13 +191,25 @@ def _common_spellings(register: Register, choices: Choices) -> tuple[dict[str, d
     return found, left_out
 
 
+def _depth(text: str) -> int:
+    """Return how deep a text of JSON is nested, without following it.
+
+    In WebAssembly a text nested without end would exhaust the stack and take the whole engine with it.
+    """
+    deepest = depth = 0
+    for mark in re.findall(r"[\[\]{}]", re.sub(r'"(?:\\.|[^"\\])*"', "", text)):
+        depth += 1 if mark in "[{" else -1
+        deepest = max(deepest, depth)
+    return deepest
+
+
 def _checked(text: str) -> dict[str, Any]:
     """Return settings in which every field has the kind that it must have."""
-    if len(text) > LONGEST:
+    if len(text) > LONGEST or _depth(text) > DEEPEST:
         raise Refusal("settings_not_read")
     try:
         found = json.loads(text.removeprefix("\ufeff"))
-    except (ValueError, RecursionError):
+    except ValueError:
         raise Refusal("settings_not_read") from None
     if not isinstance(found, dict) or found.get("kind") != KIND:
         raise Refusal("settings_not_read")
