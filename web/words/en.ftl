@@ -869,9 +869,9 @@ refusal-curve_restarts = Nobody was under observation for some time, so the curv
 tipping-title = If the lost fared otherwise
 tipping-years = Survival at so many years
 tipping-sentence = { $group }, { $lost } of { $n } lost: { $alike } free of the outcome at { $years } years if the lost fared like those who stayed, { $double } if their hazard doubled, { $most } if it was { $times } times as high.
-tipping-clear-tips = The difference between { $group } and { $first } is no longer clear if those lost from { $better } had { $times } times the hazard of those who stayed.
+tipping-clear-tips = The difference between { $group } and { $first } is no longer clear if those lost from { $better } had about { $times } times the hazard of those who stayed.
 tipping-clear-holds = The difference between { $group } and { $first } stays clear even if those lost from { $better } had { $times } times the hazard of those who stayed.
-tipping-unclear-tips = No clear difference between { $group } and { $first } as it stands; there would be one if those lost from { $better } had { $times } times the hazard of those who stayed.
+tipping-unclear-tips = No clear difference between { $group } and { $first } as it stands; there would be one if those lost from { $better } had about { $times } times the hazard of those who stayed.
 tipping-unclear-holds = No clear difference between { $group } and { $first }, nor would there be one if those lost from { $better } had { $times } times the hazard of those who stayed.
 tipping-does-not-mean = Nobody knows how the lost fared unless some are traced. Ask of each multiple whether it could be true here.
 tipping-figure = Free of the outcome at { $years } years, by how the lost fared
@@ -882,8 +882,9 @@ tipping-figure-described = { $groups ->
 axis-delta = Hazard of the lost (times)
 tipping-delta = Hazard of the lost, times that of those who stayed
 tipping-caption = Free of the outcome at { $years } years (95% limits), by the hazard of the lost
-tipping-method = The lost stay at risk after their last visit with a hazard so many times that of the others (Zhao and others 2014; Lipkovich and others 2016), worked out as an expectation. Limits from { $resamples } resamples of the patients, seed { $seed }. 1 is the product limit.
-caution-few_lost = Only { $lost } were lost, so little can change.
+tipping-method = The lost stay at risk after their last visit with a hazard so many times that of the others (Zhao and others 2014; Lipkovich and others 2016), worked out as an expectation. Limits from { $resamples } resamples of the patients, seed { $seed }. At 1 it is the product limit; even 10 is not the worst case, which stands beside the curve above.
+caution-left_out_of_tipping = { $level } is left out here: fewer than { $least } outcomes by then, or nobody followed from the start so far.
+refusal-too_few_to_tip = By { $years } years no group has { $least } outcomes and follow-up from the start. Choose another year, or rely on the bounds beside the curve.
 refusal-lost_is_the_outcome = Being lost is one of the outcomes counted, so nothing about the lost is unknown here.
 
 ## Compare

@@ -869,9 +869,9 @@ refusal-curve_restarts = Personne n’était observé pendant un certain temps 
 tipping-title = Si les perdus de vue ont évolué autrement
 tipping-years = Survie à tant d’années
 tipping-sentence = { $group }, { $lost } perdus de vue sur { $n } : { $alike } sans l’événement à { $years } ans s’ils ont évolué comme ceux restés, { $double } si leur risque était double, { $most } s’il était { $times } fois plus élevé.
-tipping-clear-tips = L’écart entre { $group } et { $first } n’est plus net si les perdus de vue de { $better } avaient { $times } fois le risque de ceux restés.
+tipping-clear-tips = L’écart entre { $group } et { $first } n’est plus net si les perdus de vue de { $better } avaient environ { $times } fois le risque de ceux restés.
 tipping-clear-holds = L’écart entre { $group } et { $first } reste net même si les perdus de vue de { $better } avaient { $times } fois le risque de ceux restés.
-tipping-unclear-tips = Pas d’écart net entre { $group } et { $first } en l’état ; il y en aurait un si les perdus de vue de { $better } avaient { $times } fois le risque de ceux restés.
+tipping-unclear-tips = Pas d’écart net entre { $group } et { $first } en l’état ; il y en aurait un si les perdus de vue de { $better } avaient environ { $times } fois le risque de ceux restés.
 tipping-unclear-holds = Pas d’écart net entre { $group } et { $first }, et il n’y en aurait pas non plus si les perdus de vue de { $better } avaient { $times } fois le risque de ceux restés.
 tipping-does-not-mean = Personne ne sait ce que sont devenus les perdus de vue si l’on n’en recherche pas une partie. Demandez-vous pour chaque multiple s’il est plausible ici.
 tipping-figure = Sans l’événement à { $years } ans, selon l’évolution des perdus de vue
@@ -882,8 +882,9 @@ tipping-figure-described = { $groups ->
 axis-delta = Risque des perdus de vue (fois)
 tipping-delta = Risque des perdus de vue, en multiple de celui de ceux restés
 tipping-caption = Sans l’événement à { $years } ans (limites à 95 %), selon le risque des perdus de vue
-tipping-method = Après leur dernière visite, les perdus de vue restent à risque avec un risque multiple de celui des autres (Zhao et autres 2014 ; Lipkovich et autres 2016), calculé comme une espérance. Limites d’après { $resamples } rééchantillonnages des patients, graine { $seed }. 1 est la méthode produit-limite.
-caution-few_lost = Seulement { $lost } ont été perdus de vue : peu de chose peut changer.
+tipping-method = Après leur dernière visite, les perdus de vue restent à risque avec un risque multiple de celui des autres (Zhao et autres 2014 ; Lipkovich et autres 2016), calculé comme une espérance. Limites d’après { $resamples } rééchantillonnages des patients, graine { $seed }. À 1, c’est la méthode produit-limite ; même 10 n’est pas le pire cas, indiqué à côté de la courbe plus haut.
+caution-left_out_of_tipping = { $level } est laissé de côté ici : moins de { $least } événements à ce moment, ou personne de suivi depuis le début jusque-là.
+refusal-too_few_to_tip = À { $years } ans, aucun groupe n’a { $least } événements et un suivi depuis le début. Choisissez une autre année, ou fiez-vous aux bornes à côté de la courbe.
 refusal-lost_is_the_outcome = Être perdu de vue fait partie des événements comptés : rien n’est inconnu ici à leur sujet.
 
 ## Compare

@@ -11,9 +11,11 @@ import numpy as np
 from vitalroll.desk.fields import Between
 from vitalroll.desk.memory import Memory
 from vitalroll.desk.outcome_tasks import Confidence
-from vitalroll.errors import Caution
+from vitalroll.errors import Caution, Refusal
 from vitalroll.numbers import DAYS_PER_YEAR, Estimate, two_sided_z
 from vitalroll.outcomes.groups import groups_of
+from vitalroll.outcomes.product_limit import product_limit
+from vitalroll.outcomes.risk_table import risk_table
 from vitalroll.outcomes.tipping import survival_if_the_lost_fared
 from vitalroll.register.cohort import DEATHS, Cohort, meaning_code
 
@@ -22,7 +24,8 @@ DELTAS = (0.5, 0.7, 1.0, 1.5, 2.0, 3.0, 4.0, 5.0, 7.0, 10.0)
 
 AT_ONE = DELTAS.index(1.0)
 RESAMPLES = 200
-FEW_LOST = 5
+FEWEST_EVENTS = 5
+"""With fewer outcomes by the time asked for, resampling the patients says too little of the uncertainty."""
 
 
 @dataclass(frozen=True)
@@ -48,11 +51,31 @@ def tipping(
         [{level, better, differences (of Estimate, from the first group, for each delta among the lost of the
         better group alone), tips_at (the delta at which what can be said of the difference first changes;
         null when none does it)}]; ``years``; ``resamples``; ``seed``; ``cautions``.
+
+    Raises
+    ------
+    Refusal
+        ``lost_is_the_outcome``; ``too_few_to_tip`` (``years``, ``least``) when no group can be answered.
+
+    Cautions
+    --------
+    ``left_out_of_tipping`` (``level``, ``least``): a group whose curve does not go from the start to the time
+    asked for, or with fewer outcomes by then.
     """
     cohort = memory.cohort()
     groups = groups_of(cohort, request.group)
     day = request.years * DAYS_PER_YEAR
-    parts = {level: _part(cohort, request.group, level) for level in groups.tables}
+    whole = {level: _part(cohort, request.group, level) for level in groups.tables}
+    if "lost" in request.interest:
+        raise Refusal("lost_is_the_outcome", field="interest")
+    parts = {level: part for level, part in whole.items() if _can_be_answered(part, request.interest, day)}
+    if not parts:
+        raise Refusal("too_few_to_tip", field="years", years=request.years, least=FEWEST_EVENTS)
+    unsaid = [
+        Caution("left_out_of_tipping", {"level": level, "least": FEWEST_EVENTS})
+        for level in whole
+        if level not in parts
+    ]
     z = two_sided_z(request.confidence)
     found = {
         level: survival_if_the_lost_fared(part, request.interest, day, DELTAS)
@@ -89,7 +112,7 @@ def tipping(
         "years": request.years,
         "resamples": RESAMPLES,
         "seed": request.seed,
-        "cautions": [*groups.cautions, *_cautions(parts)],
+        "cautions": [*groups.cautions, *unsaid],
     }
 
 
@@ -128,17 +151,28 @@ def _estimates(value: np.ndarray, lower: np.ndarray, upper: np.ndarray, error: n
 
 
 def _tips_at(lower: np.ndarray, upper: np.ndarray) -> float | None:
-    """Return the delta, going up from 1, at which what can be said of the difference changes."""
+    """Return the delta, going up from 1, at which what can be said of the difference changes.
+
+    Between two deltas the limit that passes 0 is taken as straight over the logarithm of delta.
+    """
     said = np.where(lower > 0, 1, np.where(upper < 0, -1, 0))
     for position in range(AT_ONE + 1, len(DELTAS)):
-        if said[position] != said[AT_ONE]:
-            return DELTAS[position]
+        before, now = said[position - 1], said[position]
+        if now == said[AT_ONE]:
+            continue
+        limit = lower if 1 in (before, now) else upper
+        share = limit[position - 1] / (limit[position - 1] - limit[position])
+        begins, ends = np.log(DELTAS[position - 1]), np.log(DELTAS[position])
+        return float(np.exp(begins + share * (ends - begins)))
     return None
 
 
-def _cautions(parts: dict[str | None, Cohort]) -> list[Caution]:
-    lost = sum(int(np.count_nonzero(part.outcome == meaning_code("lost"))) for part in parts.values())
-    return [Caution("few_lost", {"lost": lost})] if lost < FEW_LOST else []
+def _can_be_answered(part: Cohort, interest: tuple[str, ...], day: float) -> bool:
+    """Tell whether a group has a curve from the start to the day, and outcomes enough to resample."""
+    table = risk_table(part)
+    span = product_limit(table, interest).span
+    events = int(table.events(interest)[table.time <= day].sum())
+    return span.begins == 0 and not span.restarts and span.speaks_of(day) and events >= FEWEST_EVENTS
 
 
 TASKS = {"outcomes.tipping": (TippingRequest, tipping)}

@@ -6,6 +6,7 @@ import numpy as np
 import pytest
 
 from vitalroll.desk import Desk
+from vitalroll.desk.loss_tasks import _tips_at
 from vitalroll.errors import Refusal
 from vitalroll.numbers import DAYS_PER_YEAR
 from vitalroll.outcomes.losses import losses_by
@@ -108,3 +109,34 @@ def test_the_better_group_is_the_one_whose_lost_are_doubted() -> None:
     assert values == sorted(values, reverse=True)
     limits = pair["differences"][answer["deltas"].index(1.0)]
     assert limits["upper"] < 0
+
+
+def asked(outcomes: list[str], exits: list[int], years: float = 0.5, entry: list[int] | None = None) -> dict:
+    n = len(exits)
+    desk = Desk()
+    desk._memory.built = Cohort(
+        entry=np.array(entry or [0] * n), exit=np.array(exits), outcome=np.array([meaning_code(each) for each in outcomes]),
+        start=np.full(n, 730_000), line=np.arange(n), closing=732_000,
+    )  # fmt: skip
+    return desk.answer("outcomes.tipping", {"years": years})
+
+
+@pytest.mark.parametrize(
+    ("outcomes", "exits", "entry"),
+    [
+        (["lost"] * 8, [400] * 8, None),
+        (["under_care"] * 8, [400] * 8, None),
+        (["died_of_disease"] * 4 + ["lost"] * 4, [50, 60, 70, 80, 400, 400, 400, 400], None),
+        (["died_of_disease"] * 8, [120, 130, 140, 150, 160, 400, 410, 420], [100] * 8),
+        (["died_of_disease"] * 5 + ["lost"] * 3, [10] * 8, None),
+    ],
+    ids=["all lost", "no outcomes", "few outcomes", "begins late", "not followed so far"],
+)
+def test_where_nothing_can_be_said_no_number_is_given(outcomes, exits, entry) -> None:
+    assert asked(outcomes, exits, entry=entry)["refusal"]["code"] == "too_few_to_tip"
+
+
+def test_the_multiple_at_which_it_tips_lies_between_the_deltas_around_it() -> None:
+    lower = np.array([0.3, 0.25, 0.2, 0.15, 0.1, 0.05, -0.05, -0.1, -0.2, -0.3])
+    assert _tips_at(lower, lower + 1) == pytest.approx(np.sqrt(3.0 * 4.0))
+    assert _tips_at(np.full(10, 0.1), np.full(10, 0.2)) is None

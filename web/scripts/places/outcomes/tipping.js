@@ -63,7 +63,7 @@ function tipSentence(app, { level, better, differences, tips_at: tipsAt }, { nam
   const { lower, upper } = differences[deltas.indexOf(1)];
   const clear = lower > 0 || upper < 0;
   const key = `tipping-${clear ? 'clear' : 'unclear'}-${tipsAt === null ? 'holds' : 'tips'}`;
-  return h('p', {}, say(key, { group: name(level), first, better: name(better), times: amount(tipsAt ?? deltas.at(-1)) }));
+  return h('p', {}, say(key, { group: name(level), first, better: name(better), times: amount(tipsAt === null ? deltas.at(-1) : Number(tipsAt.toPrecision(2))) }));
 }
 
 function survivalTable(app, lines, { deltas, years }) {
